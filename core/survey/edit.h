@@ -1,0 +1,69 @@
+#pragma once
+
+#include <optional>
+#include <string>
+#include <variant>
+#include <vector>
+
+#include "core/survey/survey.h"
+
+namespace strikeplate {
+
+/// The smallest changes a survey knows. Each carries what was there before, so that it can be taken back.
+struct PickChange {
+  int shot = 0;
+  int trace = 0;
+  std::optional<Pick> before, after;
+};
+struct ShotChange {  ///< everything of a shot but its picks: place, blows, trigger correction, trace states
+  int shot = 0;
+  Shot before, after;
+};
+struct GeophonesChange {
+  std::vector<Geophone> before, after;  ///< same count
+};
+struct InfoChange {
+  SurveyInfo before, after;
+};
+struct SettingsChange {
+  SurveySettings before, after;
+};
+struct BoreholesChange {
+  std::vector<Borehole> before, after;
+};
+/// A new set of records with the geometry that goes with it (loading, adding, removing records).
+struct ContentChange {
+  Survey before, after;
+};
+
+using Change =
+    std::variant<PickChange, ShotChange, GeophonesChange, InfoChange, SettingsChange, BoreholesChange, ContentChange>;
+
+/// One step of the history: what undo and redo name, and one transaction of the survey file.
+struct Edit {
+  std::string text;  ///< such as "Move pick, shot 3, trace 17"
+  std::vector<Change> changes;
+};
+
+/// `survey` with the edit carried out. Needs every index to be valid.
+[[nodiscard]] Survey applied(const Survey& survey, const Edit& edit);
+
+/// The edit that takes `edit` back.
+[[nodiscard]] Edit inverted(const Edit& edit);
+
+/// Makers of the usual edits; each reads the present state from `survey` for the way back.
+namespace edits {
+Edit setPick(const Survey& survey, int shot, int trace, std::optional<Pick> pick, std::string text);
+Edit setPicks(const Survey& survey, const std::vector<PickChange>& picks,
+              std::string text);  ///< `before` is filled in
+/// Assigns the layer of many picks; traces without a pick are passed over.
+Edit assignLayer(const Survey& survey, int shot, const std::vector<int>& traces, int layer);
+Edit setTriggerCorrection(const Survey& survey, int shot, double correction);
+Edit setShotPoint(const Survey& survey, int shot, const ShotPoint& point);
+Edit setTraceState(const Survey& survey, int shot, int trace, TraceState state);
+Edit setInfo(const Survey& survey, const SurveyInfo& info);
+Edit setSettings(const Survey& survey, const SurveySettings& settings, std::string text);
+Edit setBoreholes(const Survey& survey, const std::vector<Borehole>& boreholes, std::string text);
+}  // namespace edits
+
+}  // namespace strikeplate

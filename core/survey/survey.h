@@ -1,0 +1,64 @@
+#pragma once
+
+#include <optional>
+#include <string>
+#include <vector>
+
+#include "core/line/line.h"
+#include "core/picking/pick.h"
+#include "core/record/record.h"
+
+namespace strikeplate {
+
+/// Which record belongs to a shot, and how it sits in the stack.
+struct Blow {
+  int record = 0;           ///< index into Survey::records
+  double lag = 0.0;         ///< s by which this blow's arrivals come later than the stack's
+  double similarity = 1.0;  ///< mean correlation with the stack, -1 to 1
+  bool used = true;         ///< part of the stack
+  bool operator==(const Blow&) const = default;
+};
+
+/// One trace of a shot: the geophone it stands at, its state, and its first break.
+struct ShotTrace {
+  int geophone = 0;  ///< index into Survey::geophones
+  TraceState state = TraceState::Live;
+  std::string stateReason;  ///< why it is not live, in words
+  std::optional<Pick> pick;
+  bool operator==(const ShotTrace&) const = default;
+};
+
+/// One shot point with its blows and its traces.
+struct Shot {
+  ShotPoint point;
+  std::vector<Blow> blows;         ///< empty when the times came from a table without records
+  double triggerCorrection = 0.0;  ///< s, added to recorder time to give time after the blow
+  std::vector<ShotTrace> traces;   ///< in the order of the record's traces
+  bool operator==(const Shot&) const = default;
+};
+
+/// Who, where, when and how: what the sheet's head says. All free text as the user typed it.
+struct SurveyInfo {
+  std::string title, client, site, line, date, crew, observer, source, geophoneType, recorder, weather, datum, notes;
+  bool operator==(const SurveyInfo&) const = default;
+};
+
+struct SurveySettings {
+  int layers = 0;     ///< 2 to 6, 0 = by evidence
+  bool feet = false;  ///< lengths on screen and paper
+  bool solveTriggerDelays = false;
+  bool operator==(const SurveySettings&) const = default;
+};
+
+/// The document: plain data with value semantics. Records are shared and immutable, so a copy is cheap.
+struct Survey {
+  SurveyInfo info;
+  SurveySettings settings;
+  std::vector<RecordPtr> records;
+  std::vector<Geophone> geophones;  ///< rising x, each position once
+  std::vector<Shot> shots;          ///< rising x
+  std::vector<Borehole> boreholes;
+  std::vector<std::string> remarks;  ///< what was odd on loading, one sentence each
+};
+
+}  // namespace strikeplate
