@@ -1,22 +1,54 @@
 #include "core/picking/line_picker.h"
 
-#include "core/picking/trace_picker.h"
+#include <algorithm>
+#include <cassert>
+#include <cmath>
+#include <limits>
+
+#include "core/picking/coarse_pass.h"
+#include "core/picking/fine_pass.h"
+#include "core/picking/line_work.h"
+#include "core/picking/pick_decision.h"
 
 namespace strikeplate {
+namespace {
+
+LinePicks emptyPicks(const std::vector<Gather>& gathers) {
+  LinePicks picks;
+  for (const Gather& gather : gathers) {
+    picks.onsets.emplace_back(gather.traces.size());
+    picks.reversed.emplace_back(gather.traces.size(), false);
+    picks.dead.emplace_back(gather.traces.size(), false);
+  }
+  return picks;
+}
+
+LinePicks picksOf(const std::vector<Gather>& gathers, const LineWork& work, bool finished) {
+  LinePicks picks = emptyPicks(gathers);
+  for (const LineTrace& t : work.traces) {
+    picks.dead[t.gather][t.trace] = !t.usable;
+    picks.reversed[t.gather][t.trace] = t.reversed;
+    picks.onsets[t.gather][t.trace] = t.trusted ? t.trusted : decide(t);
+  }
+  picks.finished = finished;
+  return picks;
+}
+
+}  // namespace
 
 LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& options, const Progress& progress) {
-  LinePicks picks;
-  for (std::size_t g = 0; g < gathers.size(); ++g) {
-    picks.onsets.push_back(pickGather(gathers[g]));
-    picks.reversed.emplace_back(gathers[g].traces.size(), false);
-    picks.dead.emplace_back(gathers[g].traces.size(), false);
-    for (std::size_t i = 0; i < picks.onsets[g].size(); ++i) {
-      if (g < options.trusted.size() && options.trusted[g][i])
-        picks.onsets[g][i] = options.trusted[g][i];
-    }
+  LineWork work = makeLineWork(gathers, options);
+  const NoiseModel first = whitenAll(work, 1e-5);
+  if (!coarsePass(work, [&](double f) { return goOn(progress, 0.3 * f); }))
+    return picksOf(gathers, work, false);
+  for (int round = 0; round < 2; ++round) {
+    updateNoise(work);
+    const PulseBank bank = makePulseBank(whitenAll(work, 1e-5));
+    const auto report = [&](double f) { return goOn(progress, 0.3 + 0.35 * (round + f)); };
+    if (!finePass(work, bank, report))
+      return picksOf(gathers, work, false);
   }
-  picks.finished = goOn(progress, 1.0);
-  return picks;
+  return picksOf(gathers, work, goOn(progress, 1.0));
 }
 
 }  // namespace strikeplate
