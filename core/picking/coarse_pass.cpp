@@ -37,7 +37,7 @@ Axis axisOf(const LineWork& work, const std::vector<std::size_t>& side) {
 }
 
 std::vector<double> rasterEvidence(const LineTrace& trace, const Axis& axis) {
-  const std::span<const float> heard(trace.white.data(), axis.first + axis.count * kSkip);
+  const std::span<const float> heard(trace.white.data(), trace.white.size());
   const std::vector<double> full = noiseEndEvidence(heard);
   std::vector<double> raster(axis.count);
   for (std::size_t p = 0; p < axis.count; ++p) {

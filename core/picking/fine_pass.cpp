@@ -12,7 +12,7 @@
 namespace strikeplate {
 namespace {
 
-constexpr std::ptrdiff_t kBefore = 24, kAfter = 16;  // onset positions about the belief
+constexpr std::ptrdiff_t kBefore = 24, kAfter = 12;  // onset positions about the belief
 constexpr std::size_t kBeyond = 8;                   // samples heard after the last position
 constexpr double kTemper = 0.7;                      // the pulses are not the truth
 constexpr double kLeastCap = 1.2, kMostCap = 8.0;

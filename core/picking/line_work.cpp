@@ -11,6 +11,8 @@ namespace strikeplate {
 namespace {
 
 constexpr double kFastestGround = 6000.0;  // m/s
+constexpr double kFastGround = 3500.0;     // m/s
+constexpr double kUsualIntercept = 0.002;  // s
 constexpr double kClear = 0.0025;          // s between the end of the noise and an onset
 constexpr double kEarlyTrigger = 0.004;    // s by which recorder time may run ahead of the blow
 constexpr double kShrink = 3.0;            // samples that the other traces' level counts for
@@ -54,6 +56,17 @@ std::vector<std::size_t> sideOf(const LineWork& work, std::size_t gather, bool r
   return side;
 }
 
+/// Brings the whitened noise to unit variance: a trace's noise may sound unlike the survey's.
+void levelWhite(LineTrace& t, std::size_t first) {
+  const std::size_t from = std::min(t.noiseEnd, first + 14);
+  const NoiseLevel level = noiseLevel({t.white.data() + from, t.noiseEnd - from});
+  const auto count = static_cast<double>(t.noiseEnd - from);
+  const double factor = std::sqrt((count * (level.rms * level.rms) + 10.0) / (count + 10.0));
+  t.rms *= factor;
+  for (float& e : t.white)
+    e = static_cast<float>(e / factor);
+}
+
 double median(std::vector<double> values) {
   if (values.empty())
     return 0.0;
@@ -75,8 +88,10 @@ std::size_t noiseEndOf(const LineTrace& trace) {
   const auto to = static_cast<std::size_t>(largest - trace.samples.begin()) + 1;
   const auto step = leastAic(std::span<const float>(trace.samples.data(), to));
   const double aic = step ? static_cast<double>(step->index) - kClear / kWorkInterval : 0.0;
-  const double earliest = (trace.offset() / kFastestGround - kEarlyTrigger - trace.start) / kWorkInterval;
-  return static_cast<std::size_t>(std::clamp(std::max(aic, earliest), 0.0, static_cast<double>(n)));
+  // Where a later, stronger wave hides the first one, the criterion is late: it is not trusted beyond a fast wave.
+  const double fast = (trace.offset() / kFastGround + kUsualIntercept - trace.start) / kWorkInterval;
+  const double surely = (trace.offset() / kFastestGround - kEarlyTrigger - trace.start) / kWorkInterval;
+  return static_cast<std::size_t>(std::clamp(std::max(std::min(aic, fast), surely), 0.0, static_cast<double>(n)));
 }
 
 LineWork makeLineWork(const std::vector<Gather>& gathers, const LinePickOptions& options) {
@@ -122,6 +137,7 @@ NoiseModel whitenAll(LineWork& work, double floor) {
       unit[i] = static_cast<float>((t.samples[i] - (count > 5.0 ? level.mean : 0.0)) / t.rms);
     }
     t.white = whitened(model, unit);
+    levelWhite(t, first);
   }
   return model;
 }

@@ -9,6 +9,8 @@ namespace {
 
 constexpr std::size_t kKernel = 4;  // samples, 1 ms
 constexpr double kMostPerSample = 0.8;
+constexpr double kFadeAfter = 0.965;   // e^(-0.25 / 7)
+constexpr double kFadeBefore = 0.994;  // e^(-0.25 / 40)
 struct Level {
   double variance, weight;
 };
@@ -28,15 +30,23 @@ double ratioOf(double energy) {
 
 std::vector<double> noiseEndEvidence(std::span<const float> white) {
   const std::size_t n = white.size();
-  std::vector<double> evidence(n + 1, 0.0);
+  std::vector<double> ratio(n, 0.0), evidence(n, 0.0);
   double energy = 0.0;
-  for (std::size_t i = n; i-- > 0;) {
+  for (std::size_t i = 0; i < n; ++i) {
     energy += static_cast<double>(white[i]) * white[i];
-    if (i + kKernel < n)
-      energy -= static_cast<double>(white[i + kKernel]) * white[i + kKernel];
-    evidence[i] = evidence[i + 1] + (i + kKernel <= n ? ratioOf(std::max(0.0, energy)) : 0.0);
+    if (i >= kKernel)
+      energy -= static_cast<double>(white[i - kKernel]) * white[i - kKernel];
+    if (i + 1 >= kKernel)
+      ratio[i + 1 - kKernel / 2 - 1] = ratioOf(std::max(0.0, energy));
   }
-  evidence.resize(n);
+  double after = 0.0;
+  for (std::size_t i = n; i-- > 0;)
+    evidence[i] = after = ratio[i] + kFadeAfter * after;
+  double before = 0.0;
+  for (std::size_t i = 0; i < n; ++i) {
+    evidence[i] -= before;
+    before = std::max(0.0, ratio[i]) + kFadeBefore * before;
+  }
   return evidence;
 }
 

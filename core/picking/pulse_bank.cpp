@@ -22,8 +22,8 @@ double deviationAt(const Pulse& pulse, double time) {
     return kPrecursor;
   const double u = time / pulse.peak;
   const double early = 0.12 * (u < 1.0 ? shapeAt(pulse, time) : 1.0);
-  const double late = u < 0.9 ? 0.0 : 0.8 * std::pow(u - 0.9, 1.3);
-  return std::min(early + late, 6.0);
+  const double late = u < 0.9 ? 0.0 : 0.4 * std::pow(u - 0.9, 1.3);
+  return std::min(early + late, 3.0);
 }
 
 double timeOfSample(int i) {
