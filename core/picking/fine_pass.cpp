@@ -56,7 +56,8 @@ void updateNoise(LineWork& work) {
   for (LineTrace& t : work.traces) {
     if (!t.usable || t.posterior.empty())
       continue;
-    const double clear = std::max(0.0025, 3.0 * t.beliefSigma);
+    const double wanted = std::max(0.0025, 3.0 * t.beliefSigma);
+    const double clear = std::min(wanted, std::max(0.00075, 0.4 * (t.belief - t.start)));
     const double samples = (t.belief - clear - t.start) / kWorkInterval;
     t.noiseEnd = static_cast<std::size_t>(std::clamp(samples, 0.0, static_cast<double>(t.samples.size())));
   }

@@ -7,6 +7,7 @@
 
 #include "core/picking/coarse_pass.h"
 #include "core/picking/fine_pass.h"
+#include "core/picking/line_prior.h"
 #include "core/picking/line_work.h"
 #include "core/picking/pick_decision.h"
 
@@ -43,6 +44,7 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
     return picksOf(gathers, work, false);
   for (int round = 0; round < 2; ++round) {
     updateNoise(work);
+    findLinePrior(work);
     const PulseBank bank = makePulseBank(whitenAll(work, 1e-5));
     const auto report = [&](double f) { return goOn(progress, 0.3 + 0.35 * (round + f)); };
     if (!finePass(work, bank, report))

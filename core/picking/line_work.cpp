@@ -13,6 +13,9 @@ namespace {
 constexpr double kFastestGround = 6000.0;  // m/s
 constexpr double kFastGround = 3500.0;     // m/s
 constexpr double kUsualIntercept = 0.002;  // s
+constexpr double kRecorderShare = 2e-4;    // of the loudest swing
+constexpr double kFirstShare = 4e-3;       // of the first swing
+constexpr double kFirstSwing = 12.0;       // work samples
 constexpr double kClear = 0.0025;          // s between the end of the noise and an onset
 constexpr double kEarlyTrigger = 0.004;    // s by which recorder time may run ahead of the blow
 constexpr double kShrink = 3.0;            // samples that the other traces' level counts for
@@ -65,6 +68,21 @@ void levelWhite(LineTrace& t, std::size_t first) {
   t.rms *= factor;
   for (float& e : t.white)
     e = static_cast<float>(e / factor);
+}
+
+/// Noise that is assumed at the least: what a recorder leaves beside its loudest swing, and, once there is an idea of
+/// the first break, a small share of the swing there. Keeps a start without quiet from being taken for silence.
+double leastNoise(const LineTrace& t) {
+  double loudest = 0.0, first = 0.0;
+  const double from = t.posterior.empty() ? 0.0 : (t.belief - t.start) / kWorkInterval;
+  for (std::size_t i = 0; i < t.samples.size(); ++i) {
+    const double swing = std::abs(static_cast<double>(t.samples[i]));
+    const double at = static_cast<double>(i);
+    loudest = std::max(loudest, swing);
+    if (!t.posterior.empty() && at >= from && at < from + kFirstSwing)
+      first = std::max(first, swing);
+  }
+  return std::max(kRecorderShare * loudest, kFirstShare * first);
 }
 
 double median(std::vector<double> values) {
@@ -130,8 +148,7 @@ NoiseModel whitenAll(LineWork& work, double floor) {
     const NoiseLevel level = noiseLevel({t.samples.data() + first, t.noiseEnd - first});
     const double count = 0.25 * static_cast<double>(t.noiseEnd - first);  // samples are not independent
     t.rms = std::sqrt((count * level.rms * level.rms + kShrink * common * common) / (count + kShrink));
-    if (!(t.rms > 0.0))
-      t.rms = 1e-6 * std::abs(*std::max_element(t.samples.begin(), t.samples.end()));
+    t.rms = std::max(t.rms, leastNoise(t));
     std::vector<float> unit(t.samples.size());
     for (std::size_t i = 0; i < unit.size(); ++i) {
       unit[i] = static_cast<float>((t.samples[i] - (count > 5.0 ? level.mean : 0.0)) / t.rms);
