@@ -5,7 +5,9 @@
 
 #include "core/picking/noise_end.h"
 #include "core/picking/offset_path.h"
+#include "core/picking/pulse_match.h"
 #include "core/picking/trace_prior.h"
+#include "core/picking/tune.h"
 #include "core/picking/work_trace.h"
 
 namespace strikeplate {
@@ -15,7 +17,9 @@ constexpr std::size_t kSkip = 2;          // work samples to a raster step
 constexpr double kBeforeBlow = 0.006;     // s
 constexpr double kSlowestGround = 180.0;  // m/s
 constexpr double kLate = 0.04;            // s
-constexpr double kLeastCap = 1.2, kMostCap = 8.0;
+static const double kEndShare = tune("SE", 1.0), kMatchShare = tune("SM", 1.0);
+constexpr double kLeastCap = 1.2;
+static const double kMostCap = tune("MC", 8.0);
 
 struct Axis {
   std::size_t first = 0, count = 0;  ///< work samples, raster steps
@@ -36,9 +40,12 @@ Axis axisOf(const LineWork& work, const std::vector<std::size_t>& side) {
   return axis;
 }
 
-std::vector<double> rasterEvidence(const LineTrace& trace, const Axis& axis) {
+std::vector<double> rasterEvidence(const LineTrace& trace, const NoiseModel& noise, const Axis& axis) {
   const std::span<const float> heard(trace.white.data(), trace.white.size());
-  const std::vector<double> full = noiseEndEvidence(heard);
+  std::vector<double> full = noiseEndEvidence(heard);
+  const std::vector<double> match = pulseMatchEvidence(noise, heard);
+  for (std::size_t i = 0; i < full.size(); ++i)
+    full[i] = kEndShare * full[i] + kMatchShare * match[i];
   std::vector<double> raster(axis.count);
   for (std::size_t p = 0; p < axis.count; ++p) {
     raster[p] = std::max(full[axis.first + p * kSkip], full[axis.first + p * kSkip + 1]);
@@ -47,7 +54,7 @@ std::vector<double> rasterEvidence(const LineTrace& trace, const Axis& axis) {
   const auto middle = sorted.begin() + static_cast<std::ptrdiff_t>(sorted.size() / 2);
   std::nth_element(sorted.begin(), middle, sorted.end());
   const double most = *std::max_element(raster.begin(), raster.end());
-  const double cap = std::clamp(0.3 * (most - *middle), kLeastCap, kMostCap);
+  const double cap = std::clamp(tune("CC", 0.3) * (most - *middle), kLeastCap, kMostCap);
   for (double& r : raster)
     r = logAdd(r, most - cap);
   return raster;
@@ -71,7 +78,7 @@ void beliefFromPosterior(LineTrace& trace) {
   trace.beliefSigma = 0.5 * (at[2] - at[0]);
 }
 
-bool coarsePass(LineWork& work, const Progress& progress) {
+bool coarsePass(LineWork& work, const NoiseModel& noise, const Progress& progress) {
   double done = 0.0;
   for (const auto& side : work.sides) {
     if (!goOn(progress, done++ / static_cast<double>(work.sides.size())))
@@ -88,7 +95,7 @@ bool coarsePass(LineWork& work, const Progress& progress) {
       const double origin = t.onsetTime(static_cast<double>(axis.first)) + 0.5 * kWorkInterval;
       evidence.origins.push_back(origin);
       evidence.offsets.push_back(t.offset());
-      evidence.logEvidence.push_back(rasterEvidence(t, axis));
+      evidence.logEvidence.push_back(rasterEvidence(t, noise, axis));
       addTracePrior(t, origin, evidence.step, evidence.logEvidence.back());
     }
     const auto posterior = pathPosterior(evidence);

@@ -6,6 +6,7 @@
 #include <limits>
 
 #include "core/picking/coarse_pass.h"
+#include "core/picking/crosstalk.h"
 #include "core/picking/fine_pass.h"
 #include "core/picking/line_prior.h"
 #include "core/picking/line_work.h"
@@ -13,6 +14,8 @@
 
 namespace strikeplate {
 namespace {
+
+constexpr int kCoarseRounds = 3, kFineRounds = 2;
 
 LinePicks emptyPicks(const std::vector<Gather>& gathers) {
   LinePicks picks;
@@ -39,14 +42,23 @@ LinePicks picksOf(const std::vector<Gather>& gathers, const LineWork& work, bool
 
 LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& options, const Progress& progress) {
   LineWork work = makeLineWork(gathers, options);
-  const NoiseModel first = whitenAll(work, 1e-5);
-  if (!coarsePass(work, [&](double f) { return goOn(progress, 0.3 * f); }))
-    return picksOf(gathers, work, false);
-  for (int round = 0; round < 2; ++round) {
+  for (int round = 0; round < kCoarseRounds; ++round) {
+    if (round > 0)
+      updateNoise(work);
+    if (round > 1)
+      findLinePrior(work);
+    const NoiseModel noise = whitenAll(work, 1e-5);
+    silenceCrosstalk(work);
+    const auto report = [&](double f) { return goOn(progress, 0.5 * (round + f) / kCoarseRounds); };
+    if (!coarsePass(work, noise, report))
+      return picksOf(gathers, work, false);
+  }
+  for (int round = 0; round < kFineRounds; ++round) {
     updateNoise(work);
     findLinePrior(work);
     const PulseBank bank = makePulseBank(whitenAll(work, 1e-5));
-    const auto report = [&](double f) { return goOn(progress, 0.3 + 0.35 * (round + f)); };
+    silenceCrosstalk(work);
+    const auto report = [&](double f) { return goOn(progress, 0.5 + 0.5 * (round + f) / kFineRounds); };
     if (!finePass(work, bank, report))
       return picksOf(gathers, work, false);
   }

@@ -4,13 +4,16 @@
 #include <array>
 #include <cmath>
 
+#include "core/picking/tune.h"
+
 namespace strikeplate {
 namespace {
 
 constexpr std::size_t kKernel = 4;  // samples, 1 ms
-constexpr double kMostPerSample = 0.8;
-constexpr double kFadeAfter = 0.965;   // e^(-0.25 / 7)
-constexpr double kFadeBefore = 0.994;  // e^(-0.25 / 40)
+static const double kMostPerSample = tune("MP", 0.8);
+static const double kFadeAfter = std::exp(-0.25 / tune("LA", 7));
+static const double kFadeBefore = std::exp(-0.25 / tune("LB", 17));
+static const double kPlainlyLoud = tune("PL", 0.2);
 struct Level {
   double variance, weight;
 };
@@ -45,7 +48,7 @@ std::vector<double> noiseEndEvidence(std::span<const float> white) {
   double before = 0.0;
   for (std::size_t i = 0; i < n; ++i) {
     evidence[i] -= before;
-    before = std::max(0.0, ratio[i]) + kFadeBefore * before;
+    before = std::max(0.0, ratio[i] - kPlainlyLoud) + kFadeBefore * before;
   }
   return evidence;
 }

@@ -7,6 +7,9 @@ namespace strikeplate {
 namespace {
 
 constexpr double kHeavyTail = 2.0;           // half of the degrees of freedom plus one
+constexpr double kFastestGround = 6000.0;    // m/s
+constexpr double kLateTrigger = 0.0035;      // s
+constexpr double kTooFast = 5.0;             // in log probability
 constexpr double kLeastPrediction = 0.0005;  // s
 
 double studentLog(double z) {
@@ -23,6 +26,8 @@ void addTracePrior(const LineTrace& trace, double origin, double step, std::vect
       logEvidence[p] = std::max(-0.5 * z * z, -60.0);
       continue;
     }
+    if (time < trace.offset() / kFastestGround - kLateTrigger)
+      logEvidence[p] -= kTooFast;
     if (trace.priorScale > 0.0)
       logEvidence[p] += studentLog((time - trace.priorMean) / trace.priorScale);
     if (trace.predicted) {
