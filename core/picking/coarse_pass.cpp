@@ -7,7 +7,6 @@
 #include "core/picking/offset_path.h"
 #include "core/picking/pulse_match.h"
 #include "core/picking/trace_prior.h"
-#include "core/picking/tune.h"
 #include "core/picking/work_trace.h"
 
 namespace strikeplate {
@@ -17,9 +16,9 @@ constexpr std::size_t kSkip = 2;          // work samples to a raster step
 constexpr double kBeforeBlow = 0.006;     // s
 constexpr double kSlowestGround = 180.0;  // m/s
 constexpr double kLate = 0.04;            // s
-static const double kEndShare = tune("SE", 1.0), kMatchShare = tune("SM", 1.0);
+constexpr double kEndShare = 1.0, kMatchShare = 1.0;
 constexpr double kLeastCap = 1.2;
-static const double kMostCap = tune("MC", 8.0);
+constexpr double kMostCap = 8.0;
 
 struct Axis {
   std::size_t first = 0, count = 0;  ///< work samples, raster steps
@@ -54,7 +53,7 @@ std::vector<double> rasterEvidence(const LineTrace& trace, const NoiseModel& noi
   const auto middle = sorted.begin() + static_cast<std::ptrdiff_t>(sorted.size() / 2);
   std::nth_element(sorted.begin(), middle, sorted.end());
   const double most = *std::max_element(raster.begin(), raster.end());
-  const double cap = std::clamp(tune("CC", 0.3) * (most - *middle), kLeastCap, kMostCap);
+  const double cap = std::clamp(0.3 * (most - *middle), kLeastCap, kMostCap);
   for (double& r : raster)
     r = logAdd(r, most - cap);
   return raster;

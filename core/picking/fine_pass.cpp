@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <numeric>
 
 #include "core/picking/coarse_pass.h"
 #include "core/picking/offset_path.h"
@@ -15,6 +16,8 @@ namespace {
 constexpr std::ptrdiff_t kBefore = 24, kAfter = 12;  // onset positions about the belief
 constexpr std::size_t kBeyond = 8;                   // samples heard after the last position
 constexpr double kTemper = 0.7;                      // the pulses are not the truth
+constexpr double kMostSupport = 10.0;                // in log probability
+constexpr double kOutside = 50.0;                    // in log probability
 constexpr double kLeastCap = 1.2, kMostCap = 8.0;
 
 /// Largest swing in noise rms where the onset is looked for.
@@ -26,28 +29,56 @@ double loudnessOf(const LineTrace& t, std::size_t first, std::size_t end) {
   return most / t.rms;
 }
 
-std::vector<double> fineEvidence(const LineTrace& t, const PulseBank& bank, std::ptrdiff_t from) {
+/// Log likelihood ratio of an onset whose first swing has the expected sign, or hardly ever the other one.
+double signedLog(double up, double down, int polarity) {
+  if (polarity == 0)
+    return logAdd(up, down);
+  const double likely = std::log(1.9), unlikely = std::log(0.1);
+  return logAdd(up + (polarity > 0 ? likely : unlikely), down + (polarity < 0 ? likely : unlikely));
+}
+
+struct FineEvidence {
+  std::vector<double> log;      ///< by position
+  std::vector<double> support;  ///< log likelihood ratio of an arrival to noise, at most 10, by position
+  std::vector<double> upness;   ///< ln p(up) - ln p(down), by position
+};
+
+FineEvidence fineEvidence(const LineTrace& t, const PulseBank& bank, std::ptrdiff_t from) {
   constexpr auto count = static_cast<std::size_t>(kBefore + kAfter);
-  std::vector<double> evidence(count, 0.0);
+  FineEvidence out{std::vector<double>(count, 0.0), std::vector<double>(count, 0.0), std::vector<double>(count, 0.0)};
   const auto size = static_cast<std::ptrdiff_t>(t.white.size());
   const std::ptrdiff_t first = std::clamp<std::ptrdiff_t>(from, 0, size);
   const std::ptrdiff_t last = std::clamp<std::ptrdiff_t>(from + kBefore + kAfter, 0, size);
   if (last <= first)
-    return evidence;
+    return out;
   const auto a = static_cast<std::size_t>(first), b = static_cast<std::size_t>(last);
   const OnsetLikelihood like = onsetLikelihood(bank, t.white, a, b, kBeyond, loudnessOf(t, a, b + kBeyond));
+  const auto skipped = static_cast<std::size_t>(first - from);
   double most = 0.0;
   for (std::size_t p = 0; p < like.up.size(); ++p)
-    most = std::max(most, logAdd(like.up[p], like.down[p]));
+    most = std::max(most, signedLog(like.up[p], like.down[p], t.polarity));
   const double cap = std::clamp(0.5 * most, kLeastCap, kMostCap);
   for (std::size_t p = 0; p < count; ++p) {
-    const std::ptrdiff_t at = from + static_cast<std::ptrdiff_t>(p) - first;
-    const bool inside = at >= 0 && at < static_cast<std::ptrdiff_t>(like.up.size());
-    const double log =
-        inside ? logAdd(like.up[static_cast<std::size_t>(at)], like.down[static_cast<std::size_t>(at)]) : most - 50.0;
-    evidence[p] = logAdd(kTemper * (log - most), -cap);
+    const std::size_t at = p - skipped;  // wraps beyond the end for positions before the trace
+    const bool inside = at < like.up.size();
+    const double log = inside ? signedLog(like.up[at], like.down[at], t.polarity) : most - kOutside;
+    out.log[p] = logAdd(kTemper * (log - most), -cap);
+    out.support[p] = std::clamp(log, -kMostSupport, kMostSupport);
+    if (inside)
+      out.upness[p] = like.up[at] - like.down[at];
   }
-  return evidence;
+  return out;
+}
+
+/// Support of each trace: the mean over it and two neighbours to either side.
+void shareSupport(LineWork& work, const std::vector<std::size_t>& side, const std::vector<double>& own) {
+  for (std::size_t k = 0; k < side.size(); ++k) {
+    const std::size_t first = k > 2 ? k - 2 : 0, last = std::min(k + 3, side.size());
+    double sum = 0.0;
+    for (std::size_t j = first; j < last; ++j)
+      sum += own[j];
+    work.traces[side[k]].support = sum / static_cast<double>(last - first);
+  }
 }
 
 }  // namespace
@@ -59,7 +90,9 @@ void updateNoise(LineWork& work) {
     const double wanted = std::max(0.0025, 3.0 * t.beliefSigma);
     const double clear = std::min(wanted, std::max(0.00075, 0.4 * (t.belief - t.start)));
     const double samples = (t.belief - clear - t.start) / kWorkInterval;
-    t.noiseEnd = static_cast<std::size_t>(std::clamp(samples, 0.0, static_cast<double>(t.samples.size())));
+    // Not before what the trace alone says: a belief far too early must not make itself true.
+    const double least = static_cast<double>(noiseEndOf(t));
+    t.noiseEnd = static_cast<std::size_t>(std::clamp(samples, least, static_cast<double>(t.samples.size())));
   }
 }
 
@@ -69,6 +102,7 @@ bool finePass(LineWork& work, const PulseBank& bank, const Progress& progress) {
     if (!goOn(progress, done++ / static_cast<double>(work.sides.size())))
       return false;
     PathEvidence evidence;
+    std::vector<std::vector<double>> upness, support;
     evidence.step = kWorkInterval;
     for (const std::size_t i : side) {
       const LineTrace& t = work.traces[i];
@@ -76,17 +110,24 @@ bool finePass(LineWork& work, const PulseBank& bank, const Progress& progress) {
       const std::ptrdiff_t from = centre - kBefore;
       evidence.origins.push_back(t.onsetTime(static_cast<double>(from)));
       evidence.offsets.push_back(t.offset());
-      evidence.logEvidence.push_back(fineEvidence(t, bank, from));
+      FineEvidence fine = fineEvidence(t, bank, from);
+      evidence.logEvidence.push_back(std::move(fine.log));
+      upness.push_back(std::move(fine.upness));
+      support.push_back(std::move(fine.support));
       addTracePrior(t, evidence.origins.back(), evidence.step, evidence.logEvidence.back());
     }
     const auto posterior = pathPosterior(evidence);
+    std::vector<double> own(side.size());
     for (std::size_t k = 0; k < side.size(); ++k) {
       LineTrace& t = work.traces[side[k]];
       t.posterior = posterior[k];
+      own[k] = std::inner_product(support[k].begin(), support[k].end(), t.posterior.begin(), 0.0);
+      t.upness = std::inner_product(upness[k].begin(), upness[k].end(), t.posterior.begin(), 0.0);
       t.posteriorStart = evidence.origins[k];
       t.step = evidence.step;
       beliefFromPosterior(t);
     }
+    shareSupport(work, side, own);
   }
   return true;
 }

@@ -11,6 +11,7 @@
 #include "core/picking/line_prior.h"
 #include "core/picking/line_work.h"
 #include "core/picking/pick_decision.h"
+#include "core/picking/polarity.h"
 
 namespace strikeplate {
 namespace {
@@ -42,6 +43,7 @@ LinePicks picksOf(const std::vector<Gather>& gathers, const LineWork& work, bool
 
 LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& options, const Progress& progress) {
   LineWork work = makeLineWork(gathers, options);
+  removeHumAll(work);
   for (int round = 0; round < kCoarseRounds; ++round) {
     if (round > 0)
       updateNoise(work);
@@ -61,6 +63,7 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
     const auto report = [&](double f) { return goOn(progress, 0.5 + 0.5 * (round + f) / kFineRounds); };
     if (!finePass(work, bank, report))
       return picksOf(gathers, work, false);
+    findPolarity(work);
   }
   return picksOf(gathers, work, goOn(progress, 1.0));
 }

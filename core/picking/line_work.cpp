@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <cmath>
 
+#include "core/picking/dead_traces.h"
 #include "core/picking/hum.h"
 #include "core/picking/onset_aic.h"
 #include "core/picking/work_trace.h"
@@ -120,11 +121,30 @@ LineWork makeLineWork(const std::vector<Gather>& gathers, const LinePickOptions&
       work.traces.back().noiseEnd = work.traces.back().usable ? noiseEndOf(work.traces.back()) : 0;
     }
   }
+  markDeadTraces(work.traces);
   for (std::size_t g = 0; g < gathers.size(); ++g) {
     for (const bool right : {false, true})
       work.sides.push_back(sideOf(work, g, right));
   }
   return work;
+}
+
+void removeHumAll(LineWork& work) {
+  std::vector<std::vector<float>> samples;
+  std::vector<std::size_t> ends;
+  for (const LineTrace& t : work.traces) {
+    if (!t.usable)
+      continue;
+    samples.push_back(t.samples);
+    ends.push_back(t.noiseEnd);
+  }
+  const double frequency = humFrequency(samples, ends);
+  if (!(frequency > 0.0))
+    return;
+  for (LineTrace& t : work.traces) {
+    if (t.usable)
+      removeHum(t.samples, t.noiseEnd, frequency);
+  }
 }
 
 NoiseModel whitenAll(LineWork& work, double floor) {

@@ -27,6 +27,8 @@ struct LineTrace {
   double step = 0.0;                       ///< s between positions
   bool reversed = false;
   double upness = 0.0;                       ///< ln p(first swing up) - ln p(down)
+  double support = 0.0;                      ///< ln p(an arrival) - ln p(noise alone), of it and its neighbours
+  int polarity = 0;                          ///< expected sign of the first swing, 0 = not known
   double priorMean = 0.0, priorScale = 0.0;  ///< s, from the other shots; scale 0 = no prior
 
   [[nodiscard]] double offset() const { return x < shotX ? shotX - x : x - shotX; }
@@ -47,7 +49,11 @@ LineWork makeLineWork(const std::vector<Gather>& gathers, const LinePickOptions&
 /// ahead of the largest swing, and not before the fastest wave could come.
 std::size_t noiseEndOf(const LineTrace& trace);
 
-/// Levels each trace by its noise and whitens it. `bank` models are refitted from the traces' noiseEnd.
+/// Takes mains hum out of every usable trace, if the line has any (hum.h).
+void removeHumAll(LineWork& work);
+
+/// Fits the noise model to the usable traces' noise, with `floor` of white noise as a share of its variance, levels
+/// each trace by its noise and whitens it.
 NoiseModel whitenAll(LineWork& work, double floor);
 
 }  // namespace strikeplate

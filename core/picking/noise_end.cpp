@@ -4,16 +4,14 @@
 #include <array>
 #include <cmath>
 
-#include "core/picking/tune.h"
-
 namespace strikeplate {
 namespace {
 
 constexpr std::size_t kKernel = 4;  // samples, 1 ms
-static const double kMostPerSample = tune("MP", 0.8);
-static const double kFadeAfter = std::exp(-0.25 / tune("LA", 7));
-static const double kFadeBefore = std::exp(-0.25 / tune("LB", 17));
-static const double kPlainlyLoud = tune("PL", 0.2);
+constexpr double kMostPerSample = 0.8;
+constexpr double kFadeAfter = 0.9649;    // e^(-0.25 / 7)
+constexpr double kFadeBefore = 0.99688;  // e^(-0.25 / 80)
+constexpr double kPlainlyLoud = 0.2;
 struct Level {
   double variance, weight;
 };

@@ -6,7 +6,7 @@
 namespace strikeplate {
 
 /// Evidence, for every sample of a whitened trace of unit noise, that the noise ends right before it: what follows
-/// sounds like signal (faded over 7 ms), what went before did not (faded over 17 ms).
+/// sounds like signal (faded over 7 ms), what went before did not (faded over 80 ms).
 ///
 /// Each sample contributes ln p(energy | signal) / p(energy | noise), energy taken over 1 ms, signal a mixture of
 /// levels. It counts for a signal by no more than a bound, so that a strong later wave does not outshine the first;

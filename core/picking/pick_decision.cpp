@@ -7,6 +7,7 @@ namespace {
 
 constexpr double kNear = 0.002;  // s
 constexpr double kLeastMass = 0.75;
+constexpr double kLeastSupport = 1.5;    // in log probability
 constexpr double kMostSigma = 0.0013;    // s
 constexpr double kWiden = 1.3;           // the posterior is too sure of its model
 constexpr double kPulseSigma = 0.00017;  // s, what the unknown shape of the pulse leaves open
@@ -22,6 +23,8 @@ std::optional<Onset> decide(const LineTrace& trace) {
     if (std::abs(time - trace.belief) <= kNear)
       mass += trace.posterior[p];
   }
+  if (!trace.trusted && !(trace.support >= kLeastSupport))
+    return std::nullopt;
   const double sigma = std::hypot(kWiden * trace.beliefSigma, kPulseSigma);
   if (!(mass >= kLeastMass) || !(sigma <= kMostSigma))
     return std::nullopt;

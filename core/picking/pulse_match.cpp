@@ -4,7 +4,6 @@
 #include <array>
 #include <cmath>
 
-#include "core/picking/tune.h"
 #include "core/picking/work_trace.h"
 
 namespace strikeplate {
@@ -12,12 +11,11 @@ namespace {
 
 constexpr std::array<double, 4> kPeaks{0.001, 0.0016, 0.0026, 0.0042};  // s
 constexpr std::array<double, 5> kAmplitudes{2.0, 3.0, 4.5, 6.5, 9.0};   // of the matched filter's output
-static const double kMost = tune("PM", 10.0);
-static const double kEarlierFrom = tune("PE", 2.5);  // evidence that counts as an earlier arrival
-static const double kEarlierFade = std::exp(-0.25 / tune("PF", 40));
-static const std::size_t kGuard =
-    static_cast<std::size_t>(tune("PG", 12));  // samples before the onset that its own pulse may reach
-static const double kBlock = tune("PB", 16);   // samples that make one independent look
+constexpr double kMost = 10.0;
+constexpr double kEarlierFrom = 2.5;      // evidence that counts as an earlier arrival
+constexpr double kEarlierFade = 0.99377;  // e^(-0.25 / 40)
+constexpr std::size_t kGuard = 12;        // samples before the onset that its own pulse may reach
+constexpr double kBlock = 16.0;           // samples that make one independent look
 
 /// The pulse (u exp(1-u))^2 up to 2.2 of its peak time, whitened, unit energy.
 std::vector<float> unitPulse(const NoiseModel& noise, double peak) {
