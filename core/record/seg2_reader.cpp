@@ -1,8 +1,6 @@
 #include "core/record/seg2_reader.h"
 
 #include <algorithm>
-#include <bit>
-#include <cmath>
 #include <cstdint>
 #include <limits>
 #include <unordered_set>
@@ -11,6 +9,7 @@
 
 #include "core/record/byte_source.h"
 #include "core/record/oddity_list.h"
+#include "core/record/sample_check.h"
 #include "core/record/seg2_keywords.h"
 #include "core/record/seg2_layout.h"
 #include "core/record/seg2_samples.h"
@@ -51,26 +50,6 @@ struct TraceHead {
   int code = 0;
   std::vector<HeaderEntry> words;
 };
-
-// Replaces samples that are not numbers; tells how many. A float is no number when its exponent is all ones.
-std::size_t zeroNonNumbers(std::vector<float>& samples) {
-  constexpr std::uint32_t kExponent = 0x7F800000u;
-  std::uint32_t any = 0;
-  for (const float sample : samples) {
-    any |= static_cast<std::uint32_t>((std::bit_cast<std::uint32_t>(sample) & kExponent) == kExponent);
-  }
-  if (any == 0) {
-    return 0;
-  }
-  std::size_t count = 0;
-  for (float& sample : samples) {
-    if (!std::isfinite(sample)) {
-      sample = 0.0F;
-      ++count;
-    }
-  }
-  return count;
-}
 
 class Seg2Reader {
  public:
