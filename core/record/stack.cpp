@@ -3,7 +3,7 @@
 #include <algorithm>
 #include <cassert>
 #include <cmath>
-#include <span>
+#include <optional>
 
 #include "core/base/numbers.h"
 #include "core/record/interpolate.h"
@@ -75,10 +75,57 @@ Axis commonAxis(const std::vector<const ShotRecord*>& blows, const std::vector<d
   return axis;
 }
 
+// Variance, in physical units, of what a trace recorded until 5 ms before the blow; nothing for less than 50 ms of
+// that.
+std::optional<double> noiseBeforeBlow(const Trace& trace) {
+  constexpr double kUntil = -0.005;
+  constexpr double kEnough = 0.050;
+  const double samples =
+      std::min((kUntil - trace.delay) / trace.sampleInterval, static_cast<double>(trace.samples.size()));
+  if (!(samples * trace.sampleInterval >= kEnough)) {
+    return std::nullopt;
+  }
+  const auto count = static_cast<std::size_t>(samples);
+  double sum = 0.0;
+  double squares = 0.0;
+  for (std::size_t i = 0; i < count; ++i) {
+    const auto value = static_cast<double>(trace.samples[i]);
+    sum += value;
+    squares += value * value;
+  }
+  const auto n = static_cast<double>(count);
+  return (squares / n - sum * sum / (n * n)) * trace.descaling * trace.descaling;
+}
+
+// Weights of one trace's blows in the stack, 0 for a blow without it. All weigh the same unless the noise of all is
+// known.
+std::vector<double> weightsOf(const std::vector<const ShotRecord*>& blows, std::size_t trace) {
+  constexpr double kMostUnequal = 20.0;
+  std::vector<double> noise(blows.size(), 0.0);
+  bool known = true;
+  for (std::size_t b = 0; b < blows.size(); ++b) {
+    if (isUsable(blows[b]->traces[trace])) {
+      const auto own = noiseBeforeBlow(blows[b]->traces[trace]);
+      known = known && own;
+      noise[b] = own.value_or(0.0);
+    }
+  }
+  const double largest = *std::max_element(noise.begin(), noise.end());
+  std::vector<double> weights(blows.size(), 0.0);
+  for (std::size_t b = 0; b < blows.size(); ++b) {
+    if (isUsable(blows[b]->traces[trace])) {
+      weights[b] = known && largest > 0.0 ? largest / std::max(noise[b], largest / kMostUnequal) : 1.0;
+    }
+  }
+  return weights;
+}
+
 std::vector<float> stackOfTrace(const std::vector<const ShotRecord*>& blows, const std::vector<double>& lags,
                                 std::size_t trace, const Axis& axis) {
   std::vector<double> sum(axis.count, 0.0);
   int used = 0;
+  double weightSum = 0.0;
+  const std::vector<double> weights = weightsOf(blows, trace);
   double unit = 0.0;
   std::vector<float> only;
   for (std::size_t b = 0; b < blows.size(); ++b) {
@@ -91,16 +138,17 @@ std::vector<float> stackOfTrace(const std::vector<const ShotRecord*>& blows, con
     unit = used == 0 ? from.descaling : unit;
     const double scale = from.descaling / unit;
     for (std::size_t i = 0; i < axis.count; ++i) {
-      sum[i] += scale * static_cast<double>(only[i]);
+      sum[i] += weights[b] * scale * static_cast<double>(only[i]);
     }
     ++used;
+    weightSum += weights[b];
   }
   if (used == 1) {
     return only;
   }
   std::vector<float> mean(axis.count, 0.0F);
   for (std::size_t i = 0; used > 0 && i < axis.count; ++i) {
-    mean[i] = static_cast<float>(sum[i] / used);
+    mean[i] = static_cast<float>(sum[i] / weightSum);
   }
   return mean;
 }

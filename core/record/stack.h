@@ -39,7 +39,9 @@ struct StackedTraces {
   std::vector<std::vector<float>> traces;  ///< equal lengths; zeros where no blow has a live trace
 };
 
-/// Mean of the blows, each moved earlier by its lag (s), over the time that all of them cover.
+/// Mean of the blows, each moved earlier by its lag (s), over the time that all of them cover. Each trace is weighted
+/// by one over the variance of what it recorded until 5 ms before the blow, at most 20 to 1; all weigh the same where
+/// a blow has less than 50 ms of that.
 ///
 /// The axis has the smallest sample interval among the blows and times on the grid of the first such blow, so that a
 /// single blow, and blows without lag, come out as they are; others are interpolated (see interpolated()). Where
