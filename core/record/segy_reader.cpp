@@ -260,6 +260,7 @@ std::vector<ShotRecord> SegyReader::makeRecords() {
     record.format = "SEG-Y rev " + std::to_string(head_.revision);
     if (placed_) {
       record.source = trimmedPosition(headers_[begin].source, sideways_, elevated_);
+      record.sourceDepth = headers_[begin].sourceDepth;
     }
     if (!head_.text.empty() && (s == 0 || textForEach)) {
       record.header.push_back({"Text header", head_.text});
