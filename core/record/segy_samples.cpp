@@ -21,6 +21,26 @@ void swapAll(std::span<std::byte> bytes) {
   }
 }
 
+// value = (-1)^sign x fraction / 2^24 x 16^(exponent - 64), also where the fraction's first four bits are zero, which
+// the library takes for impossible. The scale is a power of two whose exponent a double always holds.
+float fromIbm(std::uint32_t bits) {
+  const double fraction = static_cast<std::int32_t>(bits & 0x00FFFFFFu);
+  const std::uint64_t exponent = 1023 + 4 * ((bits >> 24) & 0x7Fu) - 256 - 24;
+  const double magnitude = fraction * std::bit_cast<double>(exponent << 52);
+  return static_cast<float>((bits >> 31) != 0 ? -magnitude : magnitude);
+}
+
+void fromBigEndian(int code, std::span<float> samples) {
+  if (code != SEGY_IBM_FLOAT_4_BYTE) {
+    segy_to_native(code, static_cast<long long>(samples.size()), samples.data());
+    return;
+  }
+  for (float& sample : samples) {
+    const auto bits = std::bit_cast<std::uint32_t>(sample);
+    sample = fromIbm(kNativeOrder == ByteOrder::Little ? reversedBytes(bits) : bits);
+  }
+}
+
 std::vector<float> readFourBytes(const ByteSource& source, std::uint64_t at, std::uint64_t count, int code,
                                  ByteOrder order) {
   std::vector<float> samples(count);
@@ -30,7 +50,7 @@ std::vector<float> readFourBytes(const ByteSource& source, std::uint64_t at, std
   if (order == ByteOrder::Little) {
     swapAll<std::uint32_t>(got);
   }
-  segy_to_native(code, static_cast<long long>(samples.size()), samples.data());
+  fromBigEndian(code, samples);
   if (code == SEGY_SIGNED_INTEGER_4_BYTE) {
     for (float& sample : samples) {
       sample = static_cast<float>(std::bit_cast<std::int32_t>(sample));
