@@ -36,6 +36,12 @@ void* operator new(std::size_t size) {
 void* operator new[](std::size_t size) {
   return take(size);
 }
+void* operator new(std::size_t size, const std::nothrow_t&) noexcept {
+  return take(size);
+}
+void* operator new[](std::size_t size, const std::nothrow_t&) noexcept {
+  return take(size);
+}
 void operator delete(void* memory) noexcept {
   give(memory);
 }
