@@ -61,11 +61,15 @@ void carryOut(Survey& survey, const ContentChange& change) {
 
 }  // namespace
 
+void apply(Survey& survey, const Edit& edit) {
+  for (const Change& change : edit.changes) {
+    std::visit([&survey](const auto& one) { carryOut(survey, one); }, change);
+  }
+}
+
 Survey applied(const Survey& survey, const Edit& edit) {
   Survey next = survey;
-  for (const Change& change : edit.changes) {
-    std::visit([&next](const auto& one) { carryOut(next, one); }, change);
-  }
+  apply(next, edit);
   return next;
 }
 
