@@ -1,0 +1,157 @@
+#include "core/section/inversion.h"
+
+#include <algorithm>
+#include <cmath>
+#include <utility>
+
+namespace strikeplate {
+namespace {
+
+constexpr double kLongestLogVelocityStep = 0.5;
+constexpr int kHalvings = 5;
+constexpr double kEnough = 1e-3;  // change of the objective, in nats
+
+}  // namespace
+
+SectionInversion::SectionInversion(const SectionProblem& problem, const SectionPrior& prior, SectionState state)
+    : problem_(&problem), prior_(&prior) {
+  restart(std::move(state));
+}
+
+void SectionInversion::restart(SectionState state) {
+  accept(tryState(std::move(state)));
+}
+
+void SectionInversion::accept(Trial trial) {
+  state_ = std::move(trial.state);
+  theta_ = std::move(trial.theta);
+  forward_ = std::move(trial.forward);
+  objective_ = trial.objective;
+}
+
+double SectionInversion::predictedFor(const SectionForward& forward, const Eigen::VectorXd& theta,
+                                      const std::vector<int>& labels, int pick) const {
+  const double delay = problem_->solveDelays ? theta[prior_->layout().delay(problem_->picks.picks[pick].shot)] : 0.0;
+  return forward.time(pick, labels[pick]) + delay;
+}
+
+double SectionInversion::boreholeMisfit(const SectionForward& forward) const {
+  double sum = 0.0;
+  for (const Borehole& b : problem_->boreholes) {
+    if (b.layer > prior_->layout().layers) {
+      continue;
+    }
+    const SectionModel& m = forward.model();
+    const double depth = m.grid->at(m.z[0], b.x) - m.grid->at(m.z[b.layer - 1], b.x);
+    const double r = (depth - b.depth) / b.sigma;
+    sum += 0.5 * r * r;
+  }
+  return sum;
+}
+
+SectionInversion::Trial SectionInversion::tryState(SectionState state) const {
+  Trial t;
+  t.state = std::move(state);
+  t.theta = prior_->apply(t.state.choice, t.state.xi);
+  t.forward =
+      std::make_unique<SectionForward>(makeSectionModel(problem_->grid, prior_->layout(), t.theta), problem_->picks);
+  const PickNoise noise(t.state.noise);
+  const double s = SectionPrior::noise(t.state.choice.noise);
+  t.objective = 0.5 * t.state.xi.squaredNorm() + boreholeMisfit(*t.forward);
+  for (int i = 0; i < problem_->picks.count(); ++i) {
+    const SectionPick& p = problem_->picks.picks[i];
+    if (t.state.labelsFree) {
+      t.state.labels[i] = p.heldLayer > 0 ? std::min(p.heldLayer, prior_->layout().layers) : t.forward->earliest(i);
+    }
+    t.objective += noise.loss((p.time - predictedFor(*t.forward, t.theta, t.state.labels, i)) / (s * p.sigma));
+  }
+  if (!std::isfinite(t.objective)) {
+    t.objective = std::numeric_limits<double>::infinity();
+  }
+  return t;
+}
+
+std::vector<SparseRow> SectionInversion::rows() const {
+  RowGatherer gatherer(prior_->layout().size());
+  std::vector<SparseRow> out;
+  out.reserve(problem_->picks.picks.size());
+  for (int i = 0; i < problem_->picks.count(); ++i) {
+    out.push_back(timeDerivative(*forward_, i, state_.labels[i], gatherer));
+  }
+  return out;
+}
+
+LinearisedPosterior SectionInversion::linearise() const {
+  const SectionLayout& layout = prior_->layout();
+  const Eigen::VectorXd fromMean = theta_ - prior_->mean();
+  const PickNoise noise(state_.noise);
+  const double s = SectionPrior::noise(state_.choice.noise);
+  NormalEquations picks(layout.size());
+  RowGatherer gatherer(layout.size());
+  for (int i = 0; i < problem_->picks.count(); ++i) {
+    const SectionPick& p = problem_->picks.picks[i];
+    const SparseRow row = timeDerivative(*forward_, i, state_.labels[i], gatherer);
+    const double r = p.time - predicted(i);
+    picks.add(row, r + row.dot(fromMean), noise.weight(r / (s * p.sigma)) / (p.sigma * p.sigma));
+  }
+  NormalEquations exact(layout.size());
+  for (const Borehole& b : problem_->boreholes) {
+    if (b.layer > layout.layers) {
+      continue;
+    }
+    const SectionModel& m = forward_->model();
+    const SparseRow row = elevationDerivative(m, b.layer - 1, b.x, gatherer);
+    const double r = m.grid->at(m.z[0], b.x) - b.depth - m.grid->at(m.z[b.layer - 1], b.x);
+    exact.add(row, r + row.dot(fromMean), 1.0 / (b.sigma * b.sigma));
+  }
+  return {*prior_, std::move(picks), std::move(exact)};
+}
+
+double SectionInversion::stepLimit(const Eigen::VectorXd& towards) const {
+  const SectionLayout& layout = prior_->layout();
+  const Eigen::VectorXd theta = prior_->apply(state_.choice, towards);
+  const int first = layout.logVelocity(1);
+  const double most = (theta - theta_).segment(first, layout.layers).cwiseAbs().maxCoeff();
+  return most > kLongestLogVelocityStep ? kLongestLogVelocityStep / most : 1.0;
+}
+
+bool SectionInversion::iterate(int steps) {
+  for (int step = 0; step < steps; ++step) {
+    const Eigen::VectorXd goal = linearise().fit(state_.choice).xi;
+    double share = stepLimit(goal);
+    const bool whole = share == 1.0;
+    bool moved = false;
+    double gain = 0.0;
+    for (int half = 0; half <= kHalvings && !moved; ++half, share *= 0.5) {
+      SectionState next = state_;
+      next.xi = state_.xi + share * (goal - state_.xi);
+      Trial trial = tryState(std::move(next));
+      if (trial.objective <= objective_) {
+        gain = objective_ - trial.objective;
+        accept(std::move(trial));
+        moved = true;
+      }
+    }
+    if (!moved) {
+      return false;
+    }
+    if (whole && gain < kEnough) {
+      return true;
+    }
+  }
+  return false;
+}
+
+double SectionInversion::logJoint() const {
+  const PickNoise noise(PickNoise::Shape::kMixture);
+  const double s = SectionPrior::noise(state_.choice.noise);
+  double sum = -0.5 * state_.xi.squaredNorm() - boreholeMisfit(*forward_) - problem_->picks.count() * std::log(s) +
+               SectionPrior::logDensity(state_.choice);
+  for (int i = 0; i < problem_->picks.count(); ++i) {
+    const SectionPick& p = problem_->picks.picks[i];
+    sum -= noise.loss((p.time - predicted(i)) / (s * p.sigma));
+  }
+  return sum;
+}
+
+}  // namespace strikeplate
