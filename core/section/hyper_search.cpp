@@ -16,19 +16,20 @@ constexpr double kLogWorthHaving = -4.6;
 /// One hyperparameter as a coordinate of the grid.
 struct Coordinate {
   int* value;
+  int least;
   int count;
 };
 
-std::vector<Coordinate> coordinates(HyperChoice& choice, const SectionPrior& prior) {
+std::vector<Coordinate> coordinates(HyperChoice& choice, const SectionPrior& prior, int leastNoise) {
   std::vector<Coordinate> out;
   for (int k = 0; k < prior.layout().interfaces(); ++k) {
-    out.push_back({&choice.roughness[k], SectionPrior::kRoughnesses});
-    out.push_back({&choice.length[k], SectionPrior::kLengths});
+    out.push_back({&choice.roughness[k], 0, SectionPrior::kRoughnesses});
+    out.push_back({&choice.length[k], 0, SectionPrior::kLengths});
   }
-  out.push_back({&choice.noise, SectionPrior::kNoises});
-  out.push_back({&choice.soil, SectionPrior::kDeviations});
+  out.push_back({&choice.noise, leastNoise, SectionPrior::kNoises});
+  out.push_back({&choice.soil, 0, SectionPrior::kDeviations});
   if (prior.layout().interfaces() > 0) {
-    out.push_back({&choice.rock, SectionPrior::kDeviations});
+    out.push_back({&choice.rock, 0, SectionPrior::kDeviations});
   }
   return out;
 }
@@ -36,7 +37,7 @@ std::vector<Coordinate> coordinates(HyperChoice& choice, const SectionPrior& pri
 std::vector<HyperChoice> neighbours(const HyperChoice& choice, const SectionPrior& prior) {
   std::vector<HyperChoice> out;
   HyperChoice moved = choice;
-  for (const Coordinate& c : coordinates(moved, prior)) {
+  for (const Coordinate& c : coordinates(moved, prior, 0)) {
     const int at = *c.value;
     for (const int step : {-1, 1}) {
       if (at + step >= 0 && at + step < c.count) {
@@ -51,18 +52,19 @@ std::vector<HyperChoice> neighbours(const HyperChoice& choice, const SectionPrio
 
 }  // namespace
 
-HyperChoice searchHyper(const LinearisedPosterior& posterior, const HyperChoice& start, int sweeps) {
+HyperChoice searchHyper(const LinearisedPosterior& posterior, HyperChoice start, int leastNoise, int sweeps) {
+  start.noise = std::max(start.noise, leastNoise);
   HyperChoice best = start;
   double bestEvidence = posterior.fit(best).logEvidence;
   for (int sweep = 0; sweep < sweeps; ++sweep) {
     const HyperChoice before = best;
     HyperChoice trial = best;
-    for (const Coordinate& c : coordinates(trial, posterior.prior())) {
+    for (const Coordinate& c : coordinates(trial, posterior.prior(), leastNoise)) {
       // Walk while it gets better; look two steps far, as an amplitude of nothing can hide a better one behind it.
       int bestValue = *c.value;
       for (const int direction : {-1, 1}) {
         int worse = 0;
-        for (int v = bestValue + direction; v >= 0 && v < c.count && worse < 2; v += direction) {
+        for (int v = bestValue + direction; v >= c.least && v < c.count && worse < 2; v += direction) {
           *c.value = v;
           const double evidence = posterior.fit(trial).logEvidence;
           if (evidence > bestEvidence) {

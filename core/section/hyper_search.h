@@ -7,8 +7,8 @@
 namespace strikeplate {
 
 /// The choice of hyperparameters with the greatest evidence found by searching one coordinate of the grid after the
-/// other from `start`, `sweeps` times over.
-HyperChoice searchHyper(const LinearisedPosterior& posterior, const HyperChoice& start, int sweeps);
+/// other from `start`, `sweeps` times over, with the choice of noise at least `leastNoise`.
+HyperChoice searchHyper(const LinearisedPosterior& posterior, HyperChoice start, int leastNoise, int sweeps);
 
 /// A posterior under one choice of hyperparameters, and how much it counts.
 struct WeightedFit {

@@ -9,7 +9,8 @@ namespace {
 
 constexpr double kLongestLogVelocityStep = 0.5;
 constexpr int kHalvings = 5;
-constexpr double kEnough = 1e-3;  // change of the objective, in nats
+constexpr double kEnough = 1e-3;        // change of the objective, in nats
+constexpr double kNothingToGain = 0.5;  // nats that the linearised problem promises and the kinks in it deny
 
 }  // namespace
 
@@ -115,9 +116,15 @@ double SectionInversion::stepLimit(const Eigen::VectorXd& towards) const {
   return most > kLongestLogVelocityStep ? kLongestLogVelocityStep / most : 1.0;
 }
 
+double SectionInversion::hoped(const SectionFit& fit) const {
+  const Eigen::VectorXd step = (fit.xi - state_.xi)(fit.active);
+  return 0.5 * (fit.factor.matrixU() * step).squaredNorm();
+}
+
 bool SectionInversion::iterate(int steps) {
   for (int step = 0; step < steps; ++step) {
-    const Eigen::VectorXd goal = linearise().fit(state_.choice).xi;
+    const SectionFit fit = linearise().fit(state_.choice);
+    const Eigen::VectorXd& goal = fit.xi;
     double share = stepLimit(goal);
     const bool whole = share == 1.0;
     bool moved = false;
@@ -133,7 +140,7 @@ bool SectionInversion::iterate(int steps) {
       }
     }
     if (!moved) {
-      return false;
+      return hoped(fit) < kNothingToGain;
     }
     if (whole && gain < kEnough) {
       return true;

@@ -68,6 +68,8 @@ class SectionInversion {
   [[nodiscard]] double predictedFor(const SectionForward& forward, const Eigen::VectorXd& theta,
                                     const std::vector<int>& labels, int pick) const;
   [[nodiscard]] double boreholeMisfit(const SectionForward& forward) const;
+  /// What a whole step would gain were the problem linear, nats.
+  [[nodiscard]] double hoped(const SectionFit& fit) const;
   [[nodiscard]] double stepLimit(const Eigen::VectorXd& towards) const;
   void accept(Trial trial);
 

@@ -9,13 +9,15 @@ namespace {
 constexpr int kMostStarts = 3;
 constexpr int kMovedStartsBelow = 200;  // picks; larger surveys need no moved crossovers
 constexpr int kMostFits = 40;
+constexpr int kMostRounds = 6;
 constexpr int kLeastPicks = 4;  // on a refractor
 constexpr double kLeastContrast = 1.05;
 constexpr double kLogModeWorth = -4.0;
 constexpr double kLogLayerPenalty = 1.0986122886681098;  // ln 3
 constexpr double kFirstVelocity = 450.0;                 // m/s, where next to no direct arrival was picked
 
-SectionState startState(const SectionProblem& problem, const SectionPrior& prior, const LineStart& start) {
+SectionState startState(const SectionProblem& problem, const SectionPrior& prior, const PriorCentre& centre,
+                        const LineStart& start) {
   SectionState s;
   s.choice.roughness.fill(4);
   s.choice.length.fill(2);
@@ -25,15 +27,23 @@ SectionState startState(const SectionProblem& problem, const SectionPrior& prior
   s.labels = start.labels;
   s.xi = Eigen::VectorXd::Zero(prior.columns());
   const Eigen::VectorXd scales = prior.scales(s.choice);
-  const std::vector<double> depths = start.depths(0.25 * problem.grid.knotSpacing);
+  const double least = 0.25 * problem.grid.knotSpacing;
+  const double middle = problem.grid.knotX[prior.layout().knots / 2];
+  const double quarter = 0.25 * problem.grid.length();
+  const std::vector<double> depths = start.depths(middle, least);
+  const std::vector<double> left = start.depths(middle - quarter, least);
+  const std::vector<double> right = start.depths(middle + quarter, least);
   const std::vector<double> logVelocities = start.logVelocities();
   const SectionLayout& layout = prior.layout();
   for (int k = 1; k <= layout.interfaces(); ++k) {
     const int column = prior.firstColumn(k);
-    const double centre = prior.mean()[layout.elevation(k) + layout.knots / 2];
-    const double trend = problem.grid.at(problem.grid.ground, problem.grid.knotX[layout.knots / 2]);
-    // The first guess is a plane along the ground's trend; the prior's own trend has the same slope.
-    s.xi[column] = (trend - depths[k - 1] - centre) / scales[column];
+    // The guess is a plane that dips against the prior's, which follows the ground's trend.
+    const double slope = (left[k - 1] - right[k - 1]) / (2.0 * quarter);
+    const double atMiddle = prior.mean()[layout.elevation(k) + layout.knots / 2];
+    const double trend = atMiddle + centre.depth[k - 1];
+    const double offCentre = middle - 0.5 * (problem.grid.lineStart + problem.grid.lineEnd);
+    s.xi[column] = (trend - depths[k - 1] - atMiddle - slope * offCentre) / scales[column];
+    s.xi[column + 1] = slope / scales[column + 1];
   }
   for (int layer = 1; layer <= layout.layers; ++layer) {
     const int column = prior.velocityColumn(layer);
@@ -44,7 +54,7 @@ SectionState startState(const SectionProblem& problem, const SectionPrior& prior
 
 PriorCentre centreOf(const SectionProblem& problem, const LineStart& start) {
   PriorCentre c;
-  c.depth = start.depths(0.25 * problem.grid.knotSpacing);
+  c.depth = start.depths(0.5 * (problem.grid.lineStart + problem.grid.lineEnd), 0.25 * problem.grid.knotSpacing);
   c.logVelocity = start.logVelocities();
   const auto direct = std::count(start.labels.begin(), start.labels.end(), 1);
   if (direct < 5) {
@@ -64,13 +74,34 @@ std::vector<LineStart> startsFor(const TravelTimes& times, int layers) {
   return starts;
 }
 
-/// Searches the hyperparameters where the inversion stands and moves it to the best ones' mean.
-void learn(SectionInversion& inversion, int sweeps) {
+/// The least noise factor that the residuals as they stand allow. A step that is not there yet leaves a tail of
+/// residuals; taken for gross mispicks they would never be fitted any more.
+int leastNoise(const SectionInversion& inversion) {
+  constexpr double kNormal80 = 1.2815515655446004;  // four in five of a normal's |values| lie below
+  constexpr double kAllowance = 0.7;                // for the share of real mispicks
+  std::vector<double> r;
+  for (int i = 0; i < inversion.problem().picks.count(); ++i) {
+    const SectionPick& p = inversion.problem().picks.picks[i];
+    r.push_back(std::abs(p.time - inversion.predicted(i)) / p.sigma);
+  }
+  const auto at = r.begin() + static_cast<long>(0.8 * static_cast<double>(r.size()));
+  std::nth_element(r.begin(), at, r.end());
+  return SectionPrior::noiseNearest(kAllowance * *at / kNormal80);
+}
+
+/// Searches the hyperparameters where the inversion stands and moves it to the best ones' mean. True when they have
+/// changed.
+bool learn(SectionInversion& inversion, int sweeps) {
   SectionState next = inversion.state();
+  const HyperChoice before = next.choice;
   const LinearisedPosterior posterior = inversion.linearise();
-  next.choice = searchHyper(posterior, next.choice, sweeps);
-  next.xi = posterior.fit(next.choice).xi;
-  inversion.restart(std::move(next));
+  next.choice = searchHyper(posterior, next.choice, leastNoise(inversion), sweeps);
+  const bool changed = next.choice != before;
+  if (changed) {
+    next.xi = posterior.fit(next.choice).xi;
+    inversion.restart(std::move(next));
+  }
+  return changed;
 }
 
 void freeLabels(SectionInversion& inversion) {
@@ -89,9 +120,8 @@ double evidenceNow(const SectionInversion& inversion) {
 void finish(SectionMode& mode, int layers) {
   SectionInversion& inversion = *mode.inversion;
   mode.converged = inversion.iterate(8);
-  for (int round = 0; round < 2; ++round) {
-    learn(inversion, 2);
-    mode.converged = inversion.iterate(round == 0 ? 4 : 8);
+  for (int round = 0; round < kMostRounds && learn(inversion, 2); ++round) {
+    mode.converged = inversion.iterate(8);
   }
   const LinearisedPosterior posterior = inversion.linearise();
   mode.fits = exploreHyper(posterior, inversion.state().choice, kMostFits);
@@ -158,7 +188,8 @@ SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& t
     }
     SectionMode mode;
     mode.prior = prior;
-    mode.inversion = std::make_shared<SectionInversion>(problem, *prior, startState(problem, *prior, starts[i]));
+    mode.inversion =
+        std::make_shared<SectionInversion>(problem, *prior, startState(problem, *prior, out.centre, starts[i]));
     mode.inversion->iterate(8);
     learn(*mode.inversion, 1);
     freeLabels(*mode.inversion);

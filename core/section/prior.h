@@ -43,7 +43,7 @@ class SectionPrior {
   static constexpr int kRoughnesses = 10;
   static constexpr int kLengths = 5;
   static constexpr int kDeviations = 6;
-  static constexpr int kNoises = 49;
+  static constexpr int kNoises = 38;
 
   [[nodiscard]] double roughness(int choice) const;  ///< m
   [[nodiscard]] double length(int choice) const;     ///< m

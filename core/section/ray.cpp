@@ -6,6 +6,8 @@
 namespace strikeplate {
 namespace {
 
+constexpr double kTouching = 1e-9;  // m
+
 double distance(SectionPoint a, SectionPoint b) {
   return std::hypot(a.x - b.x, a.y - b.y);
 }
@@ -30,22 +32,31 @@ struct OnSegment {
   double time;
 };
 
-/// Least time of a crossing on the segment from p0 to p1; convex, so Newton with clamping finds it.
+/// Least time of a crossing on the segment from p0 to p1. It is convex there: Newton's method within the bracket that
+/// the sign of the slope leaves, halving where Newton would leave it.
 OnSegment leastOnSegment(const Crossing& c, SectionPoint p0, SectionPoint p1, double t) {
   const SectionPoint d{p1.x - p0.x, p1.y - p0.y};
   const double dd = d.x * d.x + d.y * d.y;
-  SectionPoint p{};
-  for (int step = 0; step < 12; ++step) {
-    p = {p0.x + t * d.x, p0.y + t * d.y};
-    const double ra = std::max(fastDistance(c.a, p), 1e-9);
-    const double rb = std::max(fastDistance(c.b, p), 1e-9);
+  double low = 0.0;
+  double high = 1.0;
+  for (int step = 0; step < 20; ++step) {
+    const SectionPoint p{p0.x + t * d.x, p0.y + t * d.y};
+    const double ra = std::max(fastDistance(c.a, p), kTouching);
+    const double rb = std::max(fastDistance(c.b, p), kTouching);
     const double ga = ((p.x - c.a.x) * d.x + (p.y - c.a.y) * d.y) / ra;
-    const double gb = ((p.x - c.b.x) * d.x + (p.y - c.b.y) * d.y) / rb;
+    // At an end of the segment that is the target itself the slope is the one just inside.
+    const double gb = rb > kTouching ? ((p.x - c.b.x) * d.x + (p.y - c.b.y) * d.y) / rb
+                                     : (t > 0.5 ? -std::sqrt(dd) : std::sqrt(dd));
     const double slope = c.ua * ga + c.ub * gb;
     const double curve = c.ua * (dd - ga * ga) / ra + c.ub * (dd - gb * gb) / rb;
-    double next = slope > 0.0 ? 0.0 : 1.0;
-    if (curve > 1e-12 * (c.ua + c.ub)) {
-      next = std::clamp(t - slope / curve, 0.0, 1.0);
+    (slope > 0.0 ? high : low) = t;
+    double next = curve > 0.0 ? t - slope / curve : (slope > 0.0 ? -1.0 : 2.0);
+    if (next <= 0.0 && low == 0.0) {
+      next = 0.0;
+    } else if (next >= 1.0 && high == 1.0) {
+      next = 1.0;
+    } else if (!(next > low && next < high)) {
+      next = 0.5 * (low + high);
     }
     const double move = std::abs(next - t);
     t = next;
@@ -53,8 +64,7 @@ OnSegment leastOnSegment(const Crossing& c, SectionPoint p0, SectionPoint p1, do
       break;
     }
   }
-  p = {p0.x + t * d.x, p0.y + t * d.y};
-  return {t, c.time(p)};
+  return {t, c.time({p0.x + t * d.x, p0.y + t * d.y})};
 }
 
 /// Least time of a crossing on interface k near node coordinate c, walking over as many segments as it takes.

@@ -6,18 +6,21 @@
 
 namespace strikeplate {
 
-/// A first guess: straight travel-time branches common to all shots, T = min over layers of intercept + slope *
-/// offset, and the layer of each arrival that goes with it.
+/// A first guess: straight travel-time branches common to all shots, and the layer of each arrival that goes with
+/// them. T = min over layers of intercept + slope * offset + tilt * (x of shot + x of geophone - 2 * centre): delay
+/// times that change linearly along the line stand for plane dipping interfaces.
 struct LineStart {
+  double centre = 0.0;            ///< m, middle of the line
   std::vector<double> intercept;  ///< s, for each layer; 0 for the first
   std::vector<double> slope;      ///< s/m, falling
+  std::vector<double> tilt;       ///< s/m, 0 for the first
   std::vector<int> labels;        ///< for each arrival
   double cost = 0.0;              ///< robust misfit, smaller is better
 
   [[nodiscard]] std::vector<double> logVelocities() const;
-  /// Depths (m) of the interfaces under level ground with flat layers, by stripping (Ewing, Woollard & Vine 1939);
-  /// at least `least` m for each layer.
-  [[nodiscard]] std::vector<double> depths(double least) const;
+  /// Depths (m) of the interfaces at position x by stripping as under flat layers (Ewing, Woollard & Vine 1939), at
+  /// least `least` m for each layer.
+  [[nodiscard]] std::vector<double> depths(double x, double least) const;
 };
 
 /// Distinct guesses for so many layers, best first, at most `most`; none when the times do not bend that often.
