@@ -1,0 +1,65 @@
+#include "core/record/oddity_list.h"
+
+#include <cassert>
+#include <utility>
+
+namespace strikeplate {
+
+void OddityList::add(std::string sentence) {
+  for (const Item& item : items_) {
+    if (item.traces.empty() && item.text == sentence) {
+      return;
+    }
+  }
+  items_.push_back({std::move(sentence), {}});
+}
+
+void OddityList::addForTrace(int trace, const std::string& words) {
+  const auto [place, fresh] = itemOfWords_.try_emplace(words, items_.size());
+  if (fresh) {
+    items_.push_back({words, {}});
+  }
+  std::vector<int>& traces = items_[place->second].traces;
+  if (traces.empty() || traces.back() != trace) {
+    traces.push_back(trace);
+  }
+}
+
+std::vector<std::string> OddityList::sentences() const {
+  std::vector<std::string> out;
+  out.reserve(items_.size());
+  for (const Item& item : items_) {
+    out.push_back(item.traces.empty() ? item.text : tracesListed(item.traces) + ": " + item.text + ".");
+  }
+  return out;
+}
+
+std::string listed(const std::vector<int>& numbers) {
+  assert(!numbers.empty());
+  std::vector<std::string> runs;
+  for (std::size_t i = 0; i < numbers.size();) {
+    std::size_t j = i;
+    while (j + 1 < numbers.size() && numbers[j + 1] == numbers[j] + 1) {
+      ++j;
+    }
+    if (j >= i + 2) {
+      runs.push_back(std::to_string(numbers[i]) + " to " + std::to_string(numbers[j]));
+    } else {
+      for (std::size_t k = i; k <= j; ++k) {
+        runs.push_back(std::to_string(numbers[k]));
+      }
+    }
+    i = j + 1;
+  }
+  std::string text = runs[0];
+  for (std::size_t i = 1; i < runs.size(); ++i) {
+    text += (i + 1 == runs.size() ? " and " : ", ") + runs[i];
+  }
+  return text;
+}
+
+std::string tracesListed(const std::vector<int>& numbers) {
+  return (numbers.size() == 1 ? "Trace " : "Traces ") + listed(numbers);
+}
+
+}  // namespace strikeplate

@@ -1,0 +1,436 @@
+#include "core/record/seg2_reader.h"
+
+#include <algorithm>
+#include <bit>
+#include <cmath>
+#include <cstdint>
+#include <limits>
+#include <unordered_set>
+#include <utility>
+#include <vector>
+
+#include "core/record/byte_source.h"
+#include "core/record/oddity_list.h"
+#include "core/record/seg2_keywords.h"
+#include "core/record/seg2_layout.h"
+#include "core/record/seg2_samples.h"
+#include "core/record/seg2_strings.h"
+
+namespace strikeplate {
+namespace {
+
+using namespace seg2;
+
+// What a file may make us keep: three times its size and a little. Honest files stay far below; one whose counts or
+// pointers lie is stopped here.
+class Budget {
+ public:
+  explicit Budget(std::uint64_t fileSize) : left_(3 * fileSize + 65536) {}
+  bool take(std::uint64_t bytes) {
+    if (bytes > left_) {
+      return false;
+    }
+    left_ -= bytes;
+    return true;
+  }
+
+ private:
+  std::uint64_t left_;
+};
+
+struct FileHead {
+  ByteOrder order = ByteOrder::Little;
+  Terminators terminators;
+  std::vector<std::uint32_t> pointers;  // one for each trace
+  std::uint64_t stringsAt = 0;
+};
+
+struct TraceHead {
+  std::uint64_t dataAt = 0;
+  std::uint64_t samples = 0;
+  int code = 0;
+  std::vector<HeaderEntry> words;
+};
+
+// Replaces samples that are not numbers; tells how many. A float is no number when its exponent is all ones.
+std::size_t zeroNonNumbers(std::vector<float>& samples) {
+  constexpr std::uint32_t kExponent = 0x7F800000u;
+  std::uint32_t any = 0;
+  for (const float sample : samples) {
+    any |= static_cast<std::uint32_t>((std::bit_cast<std::uint32_t>(sample) & kExponent) == kExponent);
+  }
+  if (any == 0) {
+    return 0;
+  }
+  std::size_t count = 0;
+  for (float& sample : samples) {
+    if (!std::isfinite(sample)) {
+      sample = 0.0F;
+      ++count;
+    }
+  }
+  return count;
+}
+
+class Seg2Reader {
+ public:
+  Seg2Reader(const ByteSource& source, std::string name) : source_(source), size_(source.size()), budget_(size_) {
+    record_.file = std::move(name);
+    record_.format = "SEG-2";
+  }
+
+  Result<ShotRecord> read() {
+    if (auto head = readHead(); !head) {
+      return head.failure();
+    }
+    readFileWords();
+    const double metres = metresPerUnit(record_.header, odd_);
+    record_.traces.reserve(std::min<std::uint64_t>(head_.pointers.size(), size_ / (kBlockHead + 2) + 1));
+    for (std::size_t i = 0; i < head_.pointers.size() && !stopped_; ++i) {
+      readTrace(i, metres);
+    }
+    if (record_.traces.empty()) {
+      return Failure{record_.file + " holds no trace that can be read (" + firstReason_ +
+                     "); copy it again from the recorder."};
+    }
+    if (!settleIntervals()) {
+      return Failure{record_.file + " does not say its SAMPLE_INTERVAL in any trace; without it there are no times."};
+    }
+    compareTraces();
+    record_.oddities = odd_.sentences();
+    return std::move(record_);
+  }
+
+ private:
+  Outcome readHead();
+  void readPointers(std::uint16_t tableBytes, std::uint16_t traces);
+  [[nodiscard]] bool traceMarkAt(std::uint64_t offset, ByteOrder order) const;
+  void readFileWords();
+  void readTrace(std::size_t index, double metres);
+  bool readTraceHead(std::size_t index, TraceHead& head);
+  std::uint64_t trustedSamples(std::size_t index, std::uint64_t dataAt, std::uint32_t dataSize, std::uint32_t samples,
+                               int code);
+  bool readSamples(int number, const TraceHead& head, Trace& trace);
+  void unreadable(int number, const std::string& why);
+  void fillGap(std::size_t until);
+  bool settleIntervals();
+  void compareTraces();
+
+  const ByteSource& source_;
+  std::uint64_t size_;
+  Budget budget_;
+  FileHead head_;
+  ShotRecord record_;
+  OddityList odd_;
+  std::vector<bool> intervalGiven_;
+  std::unordered_set<std::uint32_t> seenPointers_;
+  std::vector<std::byte> scratch_;
+  std::string firstReason_ = "it is cut off before the first one";
+  bool stopped_ = false;
+};
+
+std::string terminatorText(std::span<const std::byte> head, std::size_t at) {
+  const auto size = std::to_integer<std::size_t>(head[at]);
+  std::string text;
+  for (std::size_t i = 0; i < std::min<std::size_t>(size, 2); ++i) {
+    text += static_cast<char>(head[at + 1 + i]);
+  }
+  return text;
+}
+
+bool Seg2Reader::traceMarkAt(std::uint64_t offset, ByteOrder order) const {
+  std::byte mark[2];
+  return source_.read(offset, mark) == 2 && load<std::uint16_t>(mark, order) == kTraceMark;
+}
+
+Outcome Seg2Reader::readHead() {
+  std::byte head[kBlockHead];
+  const std::size_t got = source_.read(0, head);
+  if (!looksLikeSeg2(std::span(head, got))) {
+    return Failure{record_.file +
+                   " is not a SEG-2 file (it does not begin with the mark of one); give a shot record."};
+  }
+  if (got < kBlockHead) {
+    return Failure{record_.file + " is cut off within its first " + std::to_string(kBlockHead) +
+                   " bytes; copy it again from the recorder."};
+  }
+  head_.order = load<std::uint16_t>(head, ByteOrder::Little) == kFileMark ? ByteOrder::Little : ByteOrder::Big;
+  // Some writers put the mark of the other order; the first trace tells.
+  std::byte pointer[4];
+  if (source_.read(kBlockHead, pointer) == 4) {
+    const ByteOrder other = head_.order == ByteOrder::Little ? ByteOrder::Big : ByteOrder::Little;
+    if (!traceMarkAt(load<std::uint32_t>(pointer, head_.order), head_.order) &&
+        traceMarkAt(load<std::uint32_t>(pointer, other), other)) {
+      head_.order = other;
+      odd_.add("The mark at the start of the file tells the wrong byte order; the order of its first trace is used.");
+    }
+  }
+  if (const auto revision = load<std::uint16_t>(head + 2, head_.order); revision != 1) {
+    odd_.add("The file says revision " + std::to_string(revision) + " of SEG-2, of which there is only 1.");
+  }
+  if (std::to_integer<int>(head[8]) > 2 || std::to_integer<int>(head[11]) > 2) {
+    odd_.add("The file says that a string or line ends with more than two characters; the first two are used.");
+  }
+  head_.terminators.string = terminatorText(head, 8);
+  head_.terminators.line = terminatorText(head, 11);
+  readPointers(load<std::uint16_t>(head + 4, head_.order), load<std::uint16_t>(head + 6, head_.order));
+  return Done{};
+}
+
+void Seg2Reader::readPointers(std::uint16_t tableBytes, std::uint16_t traces) {
+  const std::uint64_t wanted = std::max<std::uint64_t>(tableBytes, 4ULL * traces);
+  scratch_.resize(std::min(wanted, size_ - kBlockHead));
+  scratch_.resize(source_.read(kBlockHead, scratch_) / 4 * 4);
+  std::vector<std::uint32_t> table(scratch_.size() / 4);
+  for (std::size_t i = 0; i < table.size(); ++i) {
+    table[i] = load<std::uint32_t>(scratch_.data() + 4 * i, head_.order);
+  }
+  if (tableBytes < 4 * traces) {
+    odd_.add("The file says " + std::to_string(traces) + " traces but has room for " +
+             std::to_string(tableBytes / 4) + " pointers to them; the count of traces is used.");
+  }
+  std::size_t count = traces;
+  if (traces == 0) {
+    count = static_cast<std::size_t>(std::find(table.begin(), table.end(), 0u) - table.begin());
+    odd_.add("The file says that it holds no traces; its " + std::to_string(count) + " pointers are followed.");
+  }
+  if (count < table.size() && table[count] != 0 && traceMarkAt(table[count], head_.order)) {
+    odd_.add("The file holds pointers to more traces than the " + std::to_string(count) +
+             " that it says; those beyond are left out.");
+  }
+  if (count > table.size()) {
+    odd_.add("The file is cut off within its pointers: it says " + std::to_string(count) + " traces and names " +
+             std::to_string(table.size()) + ".");
+  }
+  table.resize(std::min(count, table.size()));
+  head_.pointers = std::move(table);
+  head_.stringsAt = kBlockHead + wanted;
+}
+
+void Seg2Reader::readFileWords() {
+  std::uint64_t end = size_;
+  for (const std::uint32_t pointer : head_.pointers) {
+    if (pointer >= head_.stringsAt) {
+      end = std::min<std::uint64_t>(end, pointer);
+    }
+  }
+  constexpr std::uint64_t kMostWords = 65536;
+  const std::uint64_t count = end > head_.stringsAt ? std::min(end - head_.stringsAt, kMostWords) : 0;
+  scratch_.resize(count);
+  scratch_.resize(source_.read(head_.stringsAt, scratch_));
+  Strings strings = parseStrings(scratch_, head_.order, head_.terminators);
+  budget_.take(strings.entries.size() * sizeof(HeaderEntry) + count);
+  if (strings.overran) {
+    odd_.add("A string at the start of the file is longer or shorter than its count says.");
+  }
+  record_.header = std::move(strings.entries);
+}
+
+void Seg2Reader::unreadable(int number, const std::string& why) {
+  odd_.addForTrace(number, why);
+  if (record_.traces.empty()) {
+    firstReason_ = why;
+  }
+}
+
+bool Seg2Reader::readTraceHead(std::size_t index, TraceHead& out) {
+  const int number = static_cast<int>(index) + 1;
+  const std::uint64_t at = head_.pointers[index];
+  std::byte head[kBlockHead];
+  if (at + kBlockHead >= size_ || source_.read(at, head) < kBlockHead) {
+    unreadable(number, "missing, the file ends before it");
+    return false;
+  }
+  const auto mark = load<std::uint16_t>(head, head_.order);
+  const auto blockSize = load<std::uint16_t>(head + 2, head_.order);
+  const int code = std::to_integer<int>(head[12]);
+  if (at < kBlockHead || blockSize < kBlockHead || (mark != kTraceMark && !isFormat(code))) {
+    unreadable(number, "missing, its pointer does not lead to a trace");
+    return false;
+  }
+  if (!isFormat(code)) {
+    unreadable(number,
+               "not read, its sample format code " + std::to_string(code) + " is not one of SEG-2's (1 to 5)");
+    return false;
+  }
+  if (at + blockSize >= size_) {
+    unreadable(number, "missing, the file ends before its samples");
+    return false;
+  }
+  if (mark != kTraceMark) {
+    odd_.addForTrace(number, "the mark at its start is wrong, it is read none the less");
+  }
+  out.code = code;
+  out.dataAt = at + blockSize;
+  out.samples = trustedSamples(index, out.dataAt, load<std::uint32_t>(head + 4, head_.order),
+                               load<std::uint32_t>(head + 8, head_.order), code);
+  scratch_.resize(blockSize - kBlockHead);
+  scratch_.resize(source_.read(at + kBlockHead, scratch_));
+  Strings strings = parseStrings(scratch_, head_.order, head_.terminators);
+  if (strings.overran) {
+    odd_.addForTrace(number, "a string in its header is longer or shorter than its count says");
+  }
+  out.words = std::move(strings.entries);
+  return true;
+}
+
+// The count of samples and the size of the data block should tell the same; where not, the count is believed as long
+// as it does not run into the next trace.
+std::uint64_t Seg2Reader::trustedSamples(std::size_t index, std::uint64_t dataAt, std::uint32_t dataSize,
+                                         std::uint32_t samples, int code) {
+  const std::uint64_t need = dataBytes(code, samples);
+  constexpr std::uint64_t kPadding = 16;
+  if (need == dataSize || (samples > 0 && need < dataSize && dataSize - need < kPadding)) {
+    return samples;
+  }
+  std::uint64_t room = std::numeric_limits<std::uint64_t>::max();
+  for (const std::uint32_t pointer : head_.pointers) {
+    if (pointer >= dataAt) {
+      room = std::min<std::uint64_t>(room, pointer - dataAt);
+    }
+  }
+  const bool countFits = samples > 0 && need <= room;
+  odd_.addForTrace(static_cast<int>(index) + 1,
+                   countFits ? "its count of samples and the size of its data differ, the count is used"
+                             : "its count of samples and the size of its data differ, the size is used");
+  return countFits ? samples : samplesIn(code, dataSize);
+}
+
+bool Seg2Reader::readSamples(int number, const TraceHead& head, Trace& trace) {
+  const std::uint64_t there = samplesIn(head.code, size_ - head.dataAt);
+  const std::uint64_t count = std::min(head.samples, there);
+  if (count == 0) {
+    unreadable(number, "missing, the file holds no samples of it");
+    return false;
+  }
+  const std::uint64_t bytes = dataBytes(head.code, count);
+  if (!budget_.take(count * sizeof(float) + sizeof(Trace) + head.words.size() * sizeof(HeaderEntry))) {
+    unreadable(number, "not read on from here, the traces claim more data than the file can hold");
+    stopped_ = true;
+    return false;
+  }
+  trace.samples.resize(count);
+  std::size_t got = 0;
+  if (head.code == kFloat32 && head_.order == kNativeOrder) {
+    got = source_.read(head.dataAt, std::as_writable_bytes(std::span(trace.samples)));
+  } else {
+    scratch_.resize(bytes);
+    got = source_.read(head.dataAt, scratch_);
+    trace.samples.resize(std::min<std::uint64_t>(count, samplesIn(head.code, got)));
+    decode(head.code, head_.order, scratch_, trace.samples);
+  }
+  trace.samples.resize(std::min<std::uint64_t>(count, samplesIn(head.code, got)));
+  if (trace.samples.size() < head.samples) {
+    odd_.addForTrace(number, "cut off, only its first " + std::to_string(trace.samples.size()) + " of " +
+                                 std::to_string(head.samples) + " samples are in the file");
+  }
+  if (const std::size_t bad = zeroNonNumbers(trace.samples); bad > 0) {
+    odd_.addForTrace(number, std::to_string(bad) + " of its samples are not numbers and are taken as 0");
+  }
+  return !trace.samples.empty();
+}
+
+// Dead traces for those that could not be read before a readable one, so that numbers stay true.
+void Seg2Reader::fillGap(std::size_t until) {
+  while (record_.traces.size() < until) {
+    Trace dead;
+    dead.state = TraceState::Dead;
+    dead.samples.assign(1, 0.0F);
+    record_.traces.push_back(std::move(dead));
+    intervalGiven_.push_back(false);
+  }
+}
+
+void Seg2Reader::readTrace(std::size_t index, double metres) {
+  const int number = static_cast<int>(index) + 1;
+  if (!seenPointers_.insert(head_.pointers[index]).second) {
+    unreadable(number, "missing, its pointer leads to an earlier trace or nowhere");
+    return;
+  }
+  TraceHead head;
+  Trace trace;
+  if (!readTraceHead(index, head) || !readSamples(number, head, trace)) {
+    return;
+  }
+  if (!budget_.take((index - record_.traces.size()) * sizeof(Trace))) {
+    stopped_ = true;
+    return;
+  }
+  fillGap(index);
+  const TraceWords words = readTraceWords(head.words, metres, number, odd_);
+  trace.sampleInterval = words.sampleInterval.value_or(0.0);
+  trace.delay = words.delay;
+  trace.receiver = words.receiver;
+  trace.descaling = words.descaling;
+  trace.stack = words.stack;
+  trace.state = words.state;
+  trace.header = std::move(head.words);
+  if (words.source && !record_.source) {
+    record_.source = words.source;
+  } else if (words.source && (words.source->x != record_.source->x || words.source->y != record_.source->y)) {
+    odd_.addForTrace(number, "its SOURCE_LOCATION is not that of the first trace, which is used");
+  }
+  if (!words.receiver && trace.state != TraceState::Dead) {
+    odd_.addForTrace(number, "without a RECEIVER_LOCATION");
+  }
+  record_.traces.push_back(std::move(trace));
+  intervalGiven_.push_back(words.sampleInterval.has_value());
+}
+
+// Traces without their own interval take the first one that was given.
+bool Seg2Reader::settleIntervals() {
+  const auto first = std::find(intervalGiven_.begin(), intervalGiven_.end(), true);
+  if (first == intervalGiven_.end()) {
+    return false;
+  }
+  const Trace& model = record_.traces[static_cast<std::size_t>(first - intervalGiven_.begin())];
+  for (std::size_t i = 0; i < record_.traces.size(); ++i) {
+    Trace& trace = record_.traces[i];
+    if (!intervalGiven_[i]) {
+      trace.sampleInterval = model.sampleInterval;
+      if (trace.header.empty()) {
+        trace.delay = model.delay;
+      } else {
+        odd_.addForTrace(static_cast<int>(i) + 1, "without a SAMPLE_INTERVAL, that of another trace is used");
+      }
+    }
+  }
+  return true;
+}
+
+void Seg2Reader::compareTraces() {
+  const Trace& first = record_.traces[0];
+  for (std::size_t i = 1; i < record_.traces.size(); ++i) {
+    const Trace& trace = record_.traces[i];
+    if (trace.sampleInterval != first.sampleInterval || trace.delay != first.delay) {
+      odd_.addForTrace(static_cast<int>(i) + 1, "its times (SAMPLE_INTERVAL, DELAY) are not those of trace 1");
+    }
+  }
+  if (!record_.source) {
+    odd_.add("No trace gives a SOURCE_LOCATION.");
+  }
+}
+
+}  // namespace
+
+bool looksLikeSeg2(std::span<const std::byte> start) {
+  return start.size() >= 2 && (load<std::uint16_t>(start.data(), ByteOrder::Little) == kFileMark ||
+                               load<std::uint16_t>(start.data(), ByteOrder::Big) == kFileMark);
+}
+
+Result<ShotRecord> readSeg2(const std::string& path) {
+  const auto source = openBytes(path);
+  if (!source) {
+    return source.failure();
+  }
+  return Seg2Reader(**source, path).read();
+}
+
+Result<ShotRecord> readSeg2Bytes(std::span<const std::byte> bytes, const std::string& name) {
+  if (bytes.empty()) {
+    return Failure{name + " is empty; copy it again from the recorder."};
+  }
+  return Seg2Reader(*bytesInMemory(bytes), name).read();
+}
+
+}  // namespace strikeplate
