@@ -172,12 +172,8 @@ double probabilityOf(const SectionInversion& inversion, int pick, int layer, con
     }
     const SparseRow a = timeDerivative(forward, pick, other, gatherer);
     const SparseRow b = timeDerivative(forward, pick, layer, gatherer);
-    for (std::size_t i = 0; i < a.index.size(); ++i) {
-      gatherer.add(a.index[i], a.value[i]);
-    }
-    for (std::size_t i = 0; i < b.index.size(); ++i) {
-      gatherer.add(b.index[i], -b.value[i]);
-    }
+    gatherer.add(a, 1.0);
+    gatherer.add(b, -1.0);
     const double variance = std::max(gatherer.take().quadratic(covariance), 1e-18);
     least = std::min(least, 0.5 * std::erfc(-later / std::sqrt(2.0 * variance)));
   }

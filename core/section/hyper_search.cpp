@@ -20,15 +20,15 @@ struct Coordinate {
   int count;
 };
 
-std::vector<Coordinate> coordinates(HyperChoice& choice, const SectionPrior& prior, int leastNoise) {
+std::vector<Coordinate> coordinates(HyperChoice& choice, const SectionPrior& prior, const HyperLimits& limits) {
   std::vector<Coordinate> out;
   for (int k = 0; k < prior.layout().interfaces(); ++k) {
     out.push_back({&choice.roughness[k], 0, SectionPrior::kRoughnesses});
     out.push_back({&choice.length[k], 0, SectionPrior::kLengths});
   }
-  out.push_back({&choice.noise, leastNoise, SectionPrior::kNoises});
+  out.push_back({&choice.noise, limits.leastNoise, SectionPrior::kNoises});
   out.push_back({&choice.soil, 0, SectionPrior::kDeviations});
-  if (prior.layout().interfaces() > 0) {
+  if (prior.layout().interfaces() > 0 && limits.rock) {
     out.push_back({&choice.rock, 0, SectionPrior::kDeviations});
   }
   return out;
@@ -37,7 +37,7 @@ std::vector<Coordinate> coordinates(HyperChoice& choice, const SectionPrior& pri
 std::vector<HyperChoice> neighbours(const HyperChoice& choice, const SectionPrior& prior) {
   std::vector<HyperChoice> out;
   HyperChoice moved = choice;
-  for (const Coordinate& c : coordinates(moved, prior, 0)) {
+  for (const Coordinate& c : coordinates(moved, prior, {})) {
     const int at = *c.value;
     for (const int step : {-1, 1}) {
       if (at + step >= 0 && at + step < c.count) {
@@ -52,14 +52,15 @@ std::vector<HyperChoice> neighbours(const HyperChoice& choice, const SectionPrio
 
 }  // namespace
 
-HyperChoice searchHyper(const LinearisedPosterior& posterior, HyperChoice start, int leastNoise, int sweeps) {
-  start.noise = std::max(start.noise, leastNoise);
+HyperChoice searchHyper(const LinearisedPosterior& posterior, HyperChoice start, const HyperLimits& limits,
+                        int sweeps) {
+  start.noise = std::max(start.noise, limits.leastNoise);
   HyperChoice best = start;
   double bestEvidence = posterior.fit(best).logEvidence;
   for (int sweep = 0; sweep < sweeps; ++sweep) {
     const HyperChoice before = best;
     HyperChoice trial = best;
-    for (const Coordinate& c : coordinates(trial, posterior.prior(), leastNoise)) {
+    for (const Coordinate& c : coordinates(trial, posterior.prior(), limits)) {
       // Walk while it gets better; look two steps far, as an amplitude of nothing can hide a better one behind it.
       int bestValue = *c.value;
       for (const int direction : {-1, 1}) {

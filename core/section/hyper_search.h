@@ -6,9 +6,16 @@
 
 namespace strikeplate {
 
+/// What a search may touch.
+struct HyperLimits {
+  int leastNoise = 0;
+  bool rock = true;  ///< deviations of the deepest layer's velocity
+};
+
 /// The choice of hyperparameters with the greatest evidence found by searching one coordinate of the grid after the
-/// other from `start`, `sweeps` times over, with the choice of noise at least `leastNoise`.
-HyperChoice searchHyper(const LinearisedPosterior& posterior, HyperChoice start, int leastNoise, int sweeps);
+/// other from `start`, `sweeps` times over, within limits.
+HyperChoice searchHyper(const LinearisedPosterior& posterior, HyperChoice start, const HyperLimits& limits,
+                        int sweeps);
 
 /// A posterior under one choice of hyperparameters, and how much it counts.
 struct WeightedFit {

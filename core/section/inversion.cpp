@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <numbers>
 #include <utility>
 
 namespace strikeplate {
@@ -11,6 +12,8 @@ constexpr double kLongestLogVelocityStep = 0.5;
 constexpr int kHalvings = 5;
 constexpr double kEnough = 1e-3;        // change of the objective, in nats
 constexpr double kNothingToGain = 0.5;  // nats that the linearised problem promises and the kinks in it deny
+constexpr double kShareFelt = 1e-3;
+constexpr double kDoubtReach = 8.0;  // scaled sigmas; layers further apart do not compete for a pick
 
 }  // namespace
 
@@ -30,10 +33,99 @@ void SectionInversion::accept(Trial trial) {
   objective_ = trial.objective;
 }
 
-double SectionInversion::predictedFor(const SectionForward& forward, const Eigen::VectorXd& theta,
-                                      const std::vector<int>& labels, int pick) const {
-  const double delay = problem_->solveDelays ? theta[prior_->layout().delay(problem_->picks.picks[pick].shot)] : 0.0;
-  return forward.time(pick, labels[pick]) + delay;
+EarliestTime earliestTime(const SectionForward& forward, int pick, double doubt) {
+  const int layers = forward.model().layout.layers;
+  const double tau = std::max(doubt, 1e-9) * std::sqrt(3.0) / std::numbers::pi;
+  const double least = forward.time(pick, forward.earliest(pick));
+  EarliestTime out;
+  double sum = 0.0;
+  for (int layer = 1; layer <= layers; ++layer) {
+    out.share[layer - 1] = std::exp((least - forward.time(pick, layer)) / tau);
+    sum += out.share[layer - 1];
+  }
+  for (double& s : out.share) {
+    s /= sum;
+  }
+  out.time = least - tau * std::log(sum);
+  return out;
+}
+
+double SectionInversion::predicted(int pick) const {
+  const double delay = problem_->solveDelays ? theta_[prior_->layout().delay(problem_->picks.picks[pick].shot)] : 0.0;
+  return forward_->time(pick, state_.labels[pick]) + delay;
+}
+
+double SectionInversion::expectedFor(const SectionForward& forward, const SectionState& state,
+                                     const Eigen::VectorXd& theta, int pick) const {
+  const SectionPick& p = problem_->picks.picks[pick];
+  const double delay = problem_->solveDelays ? theta[prior_->layout().delay(p.shot)] : 0.0;
+  if (state.doubt.empty() || p.heldLayer > 0) {
+    return forward.time(pick, state.labels[pick]) + delay;
+  }
+  return earliestTime(forward, pick, state.doubt[pick]).time + delay;
+}
+
+SparseRow SectionInversion::expectedDerivative(int pick, RowGatherer& gatherer) const {
+  if (state_.doubt.empty() || problem_->picks.picks[pick].heldLayer > 0) {
+    return timeDerivative(*forward_, pick, state_.labels[pick], gatherer);
+  }
+  const EarliestTime earliest = earliestTime(*forward_, pick, state_.doubt[pick]);
+  std::vector<std::pair<SparseRow, double>> parts;
+  for (int layer = 1; layer <= prior_->layout().layers; ++layer) {
+    if (earliest.share[layer - 1] > kShareFelt) {
+      parts.emplace_back(timeDerivative(*forward_, pick, layer, gatherer), earliest.share[layer - 1]);
+    }
+  }
+  if (parts.size() == 1) {
+    return std::move(parts.front().first);
+  }
+  for (const auto& [row, share] : parts) {
+    gatherer.add(row, share);
+  }
+  return gatherer.take();
+}
+
+std::vector<double> SectionInversion::measureDoubt() const {
+  const int count = problem_->picks.count();
+  const double s = SectionPrior::noise(state_.choice.noise);
+  std::vector<double> doubt(count, 0.0);
+  std::vector<int> near;
+  std::vector<SparseRow> rows;
+  RowGatherer gatherer(prior_->layout().size());
+  for (int i = 0; i < count; ++i) {
+    const int first = forward_->earliest(i);
+    int rival = 0;
+    for (int layer = 1; layer <= prior_->layout().layers; ++layer) {
+      if (layer != first && (rival == 0 || forward_->time(i, layer) < forward_->time(i, rival))) {
+        rival = layer;
+      }
+    }
+    const double reach = kDoubtReach * s * problem_->picks.picks[i].sigma;
+    if (rival == 0 || forward_->time(i, rival) - forward_->time(i, first) > reach) {
+      continue;
+    }
+    const SparseRow a = timeDerivative(*forward_, i, first, gatherer);
+    const SparseRow b = timeDerivative(*forward_, i, rival, gatherer);
+    gatherer.add(a, 1.0);
+    gatherer.add(b, -1.0);
+    rows.push_back(gatherer.take());
+    near.push_back(i);
+  }
+  if (near.empty()) {
+    return doubt;
+  }
+  Eigen::MatrixXd dense = Eigen::MatrixXd::Zero(prior_->layout().size(), static_cast<Eigen::Index>(near.size()));
+  for (std::size_t c = 0; c < rows.size(); ++c) {
+    for (std::size_t i = 0; i < rows[c].index.size(); ++i) {
+      dense(rows[c].index[i], static_cast<Eigen::Index>(c)) = rows[c].value[i];
+    }
+  }
+  const SectionFit fit = linearise().fit(state_.choice);
+  const Eigen::VectorXd variances = fit.variances(*prior_, prior_->transposed(state_.choice, dense));
+  for (std::size_t c = 0; c < near.size(); ++c) {
+    doubt[near[c]] = std::sqrt(variances[static_cast<Eigen::Index>(c)]);
+  }
+  return doubt;
 }
 
 double SectionInversion::boreholeMisfit(const SectionForward& forward) const {
@@ -64,22 +156,12 @@ SectionInversion::Trial SectionInversion::tryState(SectionState state) const {
     if (t.state.labelsFree) {
       t.state.labels[i] = p.heldLayer > 0 ? std::min(p.heldLayer, prior_->layout().layers) : t.forward->earliest(i);
     }
-    t.objective += noise.loss((p.time - predictedFor(*t.forward, t.theta, t.state.labels, i)) / (s * p.sigma));
+    t.objective += noise.loss((p.time - expectedFor(*t.forward, t.state, t.theta, i)) / (s * p.sigma));
   }
   if (!std::isfinite(t.objective)) {
     t.objective = std::numeric_limits<double>::infinity();
   }
   return t;
-}
-
-std::vector<SparseRow> SectionInversion::rows() const {
-  RowGatherer gatherer(prior_->layout().size());
-  std::vector<SparseRow> out;
-  out.reserve(problem_->picks.picks.size());
-  for (int i = 0; i < problem_->picks.count(); ++i) {
-    out.push_back(timeDerivative(*forward_, i, state_.labels[i], gatherer));
-  }
-  return out;
 }
 
 LinearisedPosterior SectionInversion::linearise() const {
@@ -91,8 +173,8 @@ LinearisedPosterior SectionInversion::linearise() const {
   RowGatherer gatherer(layout.size());
   for (int i = 0; i < problem_->picks.count(); ++i) {
     const SectionPick& p = problem_->picks.picks[i];
-    const SparseRow row = timeDerivative(*forward_, i, state_.labels[i], gatherer);
-    const double r = p.time - predicted(i);
+    const SparseRow row = expectedDerivative(i, gatherer);
+    const double r = p.time - expected(i);
     picks.add(row, r + row.dot(fromMean), noise.weight(r / (s * p.sigma)) / (p.sigma * p.sigma));
   }
   NormalEquations exact(layout.size());
@@ -156,7 +238,7 @@ double SectionInversion::logJoint() const {
                SectionPrior::logDensity(state_.choice);
   for (int i = 0; i < problem_->picks.count(); ++i) {
     const SectionPick& p = problem_->picks.picks[i];
-    sum -= noise.loss((p.time - predicted(i)) / (s * p.sigma));
+    sum -= noise.loss((p.time - expected(i)) / (s * p.sigma));
   }
   return sum;
 }

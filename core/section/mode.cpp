@@ -2,6 +2,8 @@
 
 #include <algorithm>
 #include <cmath>
+#include <cstdio>
+#include <cstdlib>
 
 namespace strikeplate {
 namespace {
@@ -10,7 +12,8 @@ constexpr int kMostStarts = 3;
 constexpr int kMovedStartsBelow = 200;  // picks; larger surveys need no moved crossovers
 constexpr int kMostFits = 40;
 constexpr int kMostRounds = 6;
-constexpr int kLeastPicks = 4;  // on a refractor
+constexpr int kLeastRounds = 2;  // the doubt of labels settles in two
+constexpr int kLeastPicks = 4;   // on a refractor
 constexpr double kLeastContrast = 1.05;
 constexpr double kLogModeWorth = -4.0;
 constexpr double kLogLayerPenalty = 1.0986122886681098;  // ln 3
@@ -22,7 +25,7 @@ SectionState startState(const SectionProblem& problem, const SectionPrior& prior
   s.choice.roughness.fill(4);
   s.choice.length.fill(2);
   s.choice.soil = 1;
-  s.choice.rock = 1;
+  s.choice.rock = 0;
   s.choice.noise = SectionPrior::noiseNearest(1.0);
   s.labels = start.labels;
   s.xi = Eigen::VectorXd::Zero(prior.columns());
@@ -71,6 +74,9 @@ std::vector<LineStart> startsFor(const TravelTimes& times, int layers) {
     starts.push_back(withCrossoversMoved(times, best, 0.6));
     starts.push_back(withCrossoversMoved(times, best, 1.6));
   }
+  if (std::optional<LineStart> assigned = assignedStart(times, layers)) {
+    starts.push_back(*std::move(assigned));
+  }
   return starts;
 }
 
@@ -91,11 +97,11 @@ int leastNoise(const SectionInversion& inversion) {
 
 /// Searches the hyperparameters where the inversion stands and moves it to the best ones' mean. True when they have
 /// changed.
-bool learn(SectionInversion& inversion, int sweeps) {
+bool learn(SectionInversion& inversion, bool rock, int sweeps) {
   SectionState next = inversion.state();
   const HyperChoice before = next.choice;
   const LinearisedPosterior posterior = inversion.linearise();
-  next.choice = searchHyper(posterior, next.choice, leastNoise(inversion), sweeps);
+  next.choice = searchHyper(posterior, next.choice, {leastNoise(inversion), rock}, sweeps);
   const bool changed = next.choice != before;
   if (changed) {
     next.xi = posterior.fit(next.choice).xi;
@@ -111,6 +117,12 @@ void freeLabels(SectionInversion& inversion) {
   inversion.restart(std::move(next));
 }
 
+void doubtLabels(SectionInversion& inversion) {
+  SectionState next = inversion.state();
+  next.doubt = inversion.measureDoubt();
+  inversion.restart(std::move(next));
+}
+
 /// ln evidence where the inversion stands, hyperparameters held.
 double evidenceNow(const SectionInversion& inversion) {
   const SectionFit fit = inversion.linearise().fit(inversion.state().choice);
@@ -120,7 +132,12 @@ double evidenceNow(const SectionInversion& inversion) {
 void finish(SectionMode& mode, int layers) {
   SectionInversion& inversion = *mode.inversion;
   mode.converged = inversion.iterate(8);
-  for (int round = 0; round < kMostRounds && learn(inversion, 2); ++round) {
+  for (int round = 0; round < kMostRounds; ++round) {
+    const bool changed = learn(inversion, true, 2);
+    if (!changed && round >= kLeastRounds) {
+      break;
+    }
+    doubtLabels(inversion);
     mode.converged = inversion.iterate(8);
   }
   const LinearisedPosterior posterior = inversion.linearise();
@@ -191,12 +208,16 @@ SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& t
     mode.inversion =
         std::make_shared<SectionInversion>(problem, *prior, startState(problem, *prior, out.centre, starts[i]));
     mode.inversion->iterate(8);
-    learn(*mode.inversion, 1);
+    learn(*mode.inversion, false, 1);
     freeLabels(*mode.inversion);
     mode.inversion->iterate(4);
-    learn(*mode.inversion, 1);
+    learn(*mode.inversion, false, 1);
     mode.inversion->iterate(4);
     mode.logEvidence = evidenceNow(*mode.inversion);
+    if (getenv("SPDEBUG"))
+      fprintf(stderr, "start %zu lnE %.2f rock %d soil %d noise %d\n", i, mode.logEvidence,
+              mode.inversion->state().choice.rock, mode.inversion->state().choice.soil,
+              mode.inversion->state().choice.noise);
     const bool fresh = std::none_of(tried.begin(), tried.end(), [&mode](const SectionMode& m) {
       return sameMode(*m.inversion, *mode.inversion);
     });
@@ -217,6 +238,9 @@ SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& t
     }
     out.finished = progress.at(0.6 + 0.1 * static_cast<double>(i)) && out.finished;
     finish(tried[i], layers);
+    if (getenv("SPDEBUG"))
+      fprintf(stderr, "  mode %zu finished lnE %.2f rock %d soil %d\n", i, tried[i].logEvidence,
+              tried[i].inversion->state().choice.rock, tried[i].inversion->state().choice.soil);
     out.modes.push_back(std::move(tried[i]));
   }
   weighModes(out.modes);

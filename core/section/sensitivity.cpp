@@ -130,6 +130,12 @@ void RowGatherer::add(int index, double value) {
   dense_[index] += value;
 }
 
+void RowGatherer::add(const SparseRow& row, double factor) {
+  for (std::size_t i = 0; i < row.index.size(); ++i) {
+    add(row.index[i], factor * row.value[i]);
+  }
+}
+
 SparseRow RowGatherer::take() {
   SparseRow row;
   row.index = std::move(order_);

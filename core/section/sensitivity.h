@@ -23,6 +23,7 @@ class RowGatherer {
  public:
   explicit RowGatherer(int size) : dense_(size, 0.0), touched_(size, false) {}
   void add(int index, double value);
+  void add(const SparseRow& row, double factor);
   SparseRow take();
 
  private:

@@ -160,7 +160,10 @@ Section resolveSection(const TravelTimes& times, const SectionOptions& options, 
   state.labelsFree = true;
   state.noise = PickNoise::Shape::kMixture;
   mode.prior = prior;
-  mode.inversion = std::make_shared<SectionInversion>(problem, *prior, std::move(state));
+  mode.inversion = std::make_shared<SectionInversion>(problem, *prior, state);
+  state = mode.inversion->state();
+  state.doubt = mode.inversion->measureDoubt();
+  mode.inversion->restart(std::move(state));
   mode.converged = mode.inversion->iterate(kLiveSteps);
   const LinearisedPosterior posterior = mode.inversion->linearise();
   for (const auto& [choice, weight] : recalled->choices) {

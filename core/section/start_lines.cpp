@@ -50,6 +50,9 @@ class LineFitter {
     return labels;
   }
 
+  /// Refits lines with the labels held; false when the branches do not hold.
+  [[nodiscard]] bool fitOnce(LineStart& s) const { return fit(s, std::vector<double>(offsets_.size(), 1.0)); }
+
   /// Refits lines and labels in turn; false when the branches do not hold.
   [[nodiscard]] bool refine(LineStart& s) const {
     std::vector<double> weights(offsets_.size(), 1.0);
@@ -246,6 +249,22 @@ std::vector<LineStart> lineStarts(const TravelTimes& times, int layers, int most
     }
   }
   return out;
+}
+
+std::optional<LineStart> assignedStart(const TravelTimes& times, int layers) {
+  LineStart s;
+  int deepest = 0;
+  for (const Arrival& a : times.arrivals) {
+    if (a.layer < 1 || a.layer > layers) {
+      return std::nullopt;
+    }
+    deepest = std::max(deepest, a.layer);
+    s.labels.push_back(a.layer);
+  }
+  if (deepest != layers || !LineFitter(times, layers).fitOnce(s)) {
+    return std::nullopt;
+  }
+  return s;
 }
 
 LineStart withCrossoversMoved(const TravelTimes& times, const LineStart& start, double factor) {

@@ -1,5 +1,6 @@
 #pragma once
 
+#include <optional>
 #include <vector>
 
 #include "core/traveltime/arrivals.h"
@@ -26,6 +27,10 @@ struct LineStart {
 /// Distinct guesses for so many layers, best first, at most `most`; none when the times do not bend that often.
 /// Arrivals whose layer is set by hand keep it. Needs finite times and sigma > 0.
 std::vector<LineStart> lineStarts(const TravelTimes& times, int layers, int most);
+
+/// The guess that goes with the layers already assigned to the arrivals; nothing when some have none, when they are
+/// not of so many layers, or when their branches do not hold.
+std::optional<LineStart> assignedStart(const TravelTimes& times, int layers);
 
 /// The same guess with its crossover offsets moved by a factor.
 LineStart withCrossoversMoved(const TravelTimes& times, const LineStart& start, double factor);
