@@ -1,0 +1,16 @@
+#pragma once
+
+#include "core/base/progress.h"
+#include "core/picking/line_work.h"
+#include "core/picking/pulse_bank.h"
+
+namespace strikeplate {
+
+/// Sharpens every belief: likelihood of the onset over all pulses from 6 ms before to 4 ms after it, joined along
+/// offset. Replaces posterior, belief and beliefSigma of usable traces; false when asked to stop.
+bool finePass(LineWork& work, const PulseBank& bank, const Progress& progress);
+
+/// Ends each usable trace's noise 2.5 ms, or three times its uncertainty, before its present belief.
+void updateNoise(LineWork& work);
+
+}  // namespace strikeplate

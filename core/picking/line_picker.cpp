@@ -1,0 +1,68 @@
+#include "core/picking/line_picker.h"
+
+#include <algorithm>
+#include <cassert>
+#include <cmath>
+#include <limits>
+
+#include "core/picking/coarse_pass.h"
+#include "core/picking/crosstalk.h"
+#include "core/picking/fine_pass.h"
+#include "core/picking/line_prior.h"
+#include "core/picking/line_work.h"
+#include "core/picking/pick_decision.h"
+
+namespace strikeplate {
+namespace {
+
+constexpr int kCoarseRounds = 3, kFineRounds = 2;
+
+LinePicks emptyPicks(const std::vector<Gather>& gathers) {
+  LinePicks picks;
+  for (const Gather& gather : gathers) {
+    picks.onsets.emplace_back(gather.traces.size());
+    picks.reversed.emplace_back(gather.traces.size(), false);
+    picks.dead.emplace_back(gather.traces.size(), false);
+  }
+  return picks;
+}
+
+LinePicks picksOf(const std::vector<Gather>& gathers, const LineWork& work, bool finished) {
+  LinePicks picks = emptyPicks(gathers);
+  for (const LineTrace& t : work.traces) {
+    picks.dead[t.gather][t.trace] = !t.usable;
+    picks.reversed[t.gather][t.trace] = t.reversed;
+    picks.onsets[t.gather][t.trace] = t.trusted ? t.trusted : decide(t);
+  }
+  picks.finished = finished;
+  return picks;
+}
+
+}  // namespace
+
+LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& options, const Progress& progress) {
+  LineWork work = makeLineWork(gathers, options);
+  for (int round = 0; round < kCoarseRounds; ++round) {
+    if (round > 0)
+      updateNoise(work);
+    if (round > 1)
+      findLinePrior(work);
+    const NoiseModel noise = whitenAll(work, 1e-5);
+    silenceCrosstalk(work);
+    const auto report = [&](double f) { return goOn(progress, 0.5 * (round + f) / kCoarseRounds); };
+    if (!coarsePass(work, noise, report))
+      return picksOf(gathers, work, false);
+  }
+  for (int round = 0; round < kFineRounds; ++round) {
+    updateNoise(work);
+    findLinePrior(work);
+    const PulseBank bank = makePulseBank(whitenAll(work, 1e-5));
+    silenceCrosstalk(work);
+    const auto report = [&](double f) { return goOn(progress, 0.5 + 0.5 * (round + f) / kFineRounds); };
+    if (!finePass(work, bank, report))
+      return picksOf(gathers, work, false);
+  }
+  return picksOf(gathers, work, goOn(progress, 1.0));
+}
+
+}  // namespace strikeplate

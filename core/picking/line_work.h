@@ -1,0 +1,53 @@
+#pragma once
+
+#include <optional>
+#include <vector>
+
+#include "core/line/gather.h"
+#include "core/picking/line_picker.h"
+#include "core/picking/noise_model.h"
+#include "core/picking/onset_likelihood.h"
+
+namespace strikeplate {
+
+/// What the line picker knows of one trace.
+struct LineTrace {
+  std::size_t gather = 0, trace = 0;
+  double shotX = 0.0, x = 0.0;  ///< m
+  bool usable = true;           ///< holds ground motion
+  double start = 0.0;           ///< s, recorder time of the first work sample
+  std::vector<float> samples;   ///< work samples
+  std::size_t noiseEnd = 0;     ///< work samples that hold noise only
+  double rms = 0.0;             ///< of the noise
+  std::vector<float> white;     ///< whitened, unit noise
+  std::optional<Onset> trusted, predicted;
+  double belief = 0.0, beliefSigma = 0.0;  ///< s, the present idea of the first break
+  std::vector<double> posterior;           ///< probability of each onset position
+  double posteriorStart = 0.0;             ///< s, recorder time of the first position
+  double step = 0.0;                       ///< s between positions
+  bool reversed = false;
+  double upness = 0.0;                       ///< ln p(first swing up) - ln p(down)
+  double priorMean = 0.0, priorScale = 0.0;  ///< s, from the other shots; scale 0 = no prior
+
+  [[nodiscard]] double offset() const { return x < shotX ? shotX - x : x - shotX; }
+  /// Recorder time of an onset just before work sample i, s.
+  [[nodiscard]] double onsetTime(double i) const;
+};
+
+/// A line being picked.
+struct LineWork {
+  std::vector<LineTrace> traces;                ///< gather by gather
+  std::vector<std::vector<std::size_t>> sides;  ///< indices of usable traces on one side of one shot, nearest first
+};
+
+/// Work traces, sides and given picks of a line; noise is looked at by `findNoise`.
+LineWork makeLineWork(const std::vector<Gather>& gathers, const LinePickOptions& options);
+
+/// Where the noise of a trace looked at alone ends (work samples): 2.5 ms before the onset by Akaike's criterion
+/// ahead of the largest swing, and not before the fastest wave could come.
+std::size_t noiseEndOf(const LineTrace& trace);
+
+/// Levels each trace by its noise and whitens it. `bank` models are refitted from the traces' noiseEnd.
+NoiseModel whitenAll(LineWork& work, double floor);
+
+}  // namespace strikeplate
