@@ -5,18 +5,30 @@
 
 namespace strikeplate {
 
+bool OddityList::isFull() {
+  constexpr std::size_t kMost = 50;
+  more_ = more_ || items_.size() >= kMost;
+  return more_;
+}
+
 void OddityList::add(std::string sentence) {
   for (const Item& item : items_) {
     if (item.traces.empty() && item.text == sentence) {
       return;
     }
   }
-  items_.push_back({std::move(sentence), {}});
+  if (!isFull()) {
+    items_.push_back({std::move(sentence), {}});
+  }
 }
 
 void OddityList::addForTrace(int trace, const std::string& words) {
-  const auto [place, fresh] = itemOfWords_.try_emplace(words, items_.size());
-  if (fresh) {
+  auto place = itemOfWords_.find(words);
+  if (place == itemOfWords_.end()) {
+    if (isFull()) {
+      return;
+    }
+    place = itemOfWords_.emplace(words, items_.size()).first;
     items_.push_back({words, {}});
   }
   std::vector<int>& traces = items_[place->second].traces;
@@ -31,13 +43,22 @@ std::vector<std::string> OddityList::sentences() const {
   for (const Item& item : items_) {
     out.push_back(item.traces.empty() ? item.text : tracesListed(item.traces) + ": " + item.text + ".");
   }
+  if (more_) {
+    out.push_back("More is odd about this file; only the first " + std::to_string(items_.size()) +
+                  " things are listed.");
+  }
   return out;
 }
 
 std::string listed(const std::vector<int>& numbers) {
   assert(!numbers.empty());
+  constexpr std::size_t kMostRuns = 20;
   std::vector<std::string> runs;
   for (std::size_t i = 0; i < numbers.size();) {
+    if (runs.size() >= kMostRuns) {
+      runs.push_back(std::to_string(numbers.size() - i) + " more");
+      break;
+    }
     std::size_t j = i;
     while (j + 1 < numbers.size() && numbers[j + 1] == numbers[j] + 1) {
       ++j;

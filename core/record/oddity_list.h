@@ -6,7 +6,8 @@
 
 namespace strikeplate {
 
-/// Collects what is odd about a file, so that what holds for many traces is said once.
+/// Collects what is odd about a file, so that what holds for many traces is said once. Of a wreck that has something
+/// new wrong at every trace only the first fifty things are kept.
 class OddityList {
  public:
   /// Something about the whole file: one sentence.
@@ -24,11 +25,15 @@ class OddityList {
     std::string text;
     std::vector<int> traces;  // empty: the whole file
   };
+  bool isFull();
+
   std::vector<Item> items_;
+  bool more_ = false;
   std::map<std::string, std::size_t> itemOfWords_;
 };
 
-/// Numbers in words: "3", "3 and 5", "3, 5 and 7 to 9". Needs at least one number; they are rising.
+/// Numbers in words: "3", "3 and 5", "3, 5 and 7 to 9"; beyond twenty runs of numbers the rest is counted. Needs at
+/// least one number; they are rising.
 std::string listed(const std::vector<int>& numbers);
 
 /// "Trace 3" or "Traces 3, 5 and 7 to 9".

@@ -44,9 +44,10 @@ struct ShotRecord {
   int firstTraceInFile = 1;              ///< number in the file, from 1, of traces[0]
   std::string format;                    ///< "SEG-2" or "SEG-Y", with revision
   std::optional<HeaderPosition> source;  ///< as the header says, m
-  std::vector<HeaderEntry> header;       ///< keywords of the file
-  std::vector<Trace> traces;             ///< at least one
-  std::vector<std::string> oddities;     ///< what is odd about the file, one sentence each
+  std::optional<double> sourceDepth;  ///< m below the ground where known for certain; source->z is then an elevation
+  std::vector<HeaderEntry> header;    ///< keywords of the file
+  std::vector<Trace> traces;          ///< at least one
+  std::vector<std::string> oddities;  ///< what is odd about the file, one sentence each
 };
 
 /// Records are large and never change once read, so surveys share them.

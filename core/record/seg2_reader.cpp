@@ -1,8 +1,6 @@
 #include "core/record/seg2_reader.h"
 
 #include <algorithm>
-#include <bit>
-#include <cmath>
 #include <cstdint>
 #include <limits>
 #include <unordered_set>
@@ -11,6 +9,7 @@
 
 #include "core/record/byte_source.h"
 #include "core/record/oddity_list.h"
+#include "core/record/sample_check.h"
 #include "core/record/seg2_keywords.h"
 #include "core/record/seg2_layout.h"
 #include "core/record/seg2_samples.h"
@@ -21,11 +20,20 @@ namespace {
 
 using namespace seg2;
 
-// What a file may make us keep: three times its size and a little. Honest files stay far below; one whose counts or
-// pointers lie is stopped here.
+// Memory that keywords take.
+std::uint64_t bytesOf(const std::vector<HeaderEntry>& words) {
+  std::uint64_t bytes = 0;
+  for (const HeaderEntry& word : words) {
+    bytes += sizeof(HeaderEntry) + word.key.size() + word.value.size();
+  }
+  return bytes;
+}
+
+// What a file may make us keep: two and a half times its size and a little. Honest files stay far below; one whose
+// counts or pointers lie is stopped here.
 class Budget {
  public:
-  explicit Budget(std::uint64_t fileSize) : left_(3 * fileSize + 65536) {}
+  explicit Budget(std::uint64_t fileSize) : left_(5 * fileSize / 2 + 8192) {}
   bool take(std::uint64_t bytes) {
     if (bytes > left_) {
       return false;
@@ -52,26 +60,6 @@ struct TraceHead {
   std::vector<HeaderEntry> words;
 };
 
-// Replaces samples that are not numbers; tells how many. A float is no number when its exponent is all ones.
-std::size_t zeroNonNumbers(std::vector<float>& samples) {
-  constexpr std::uint32_t kExponent = 0x7F800000u;
-  std::uint32_t any = 0;
-  for (const float sample : samples) {
-    any |= static_cast<std::uint32_t>((std::bit_cast<std::uint32_t>(sample) & kExponent) == kExponent);
-  }
-  if (any == 0) {
-    return 0;
-  }
-  std::size_t count = 0;
-  for (float& sample : samples) {
-    if (!std::isfinite(sample)) {
-      sample = 0.0F;
-      ++count;
-    }
-  }
-  return count;
-}
-
 class Seg2Reader {
  public:
   Seg2Reader(const ByteSource& source, std::string name) : source_(source), size_(source.size()), budget_(size_) {
@@ -85,7 +73,7 @@ class Seg2Reader {
     }
     readFileWords();
     const double metres = metresPerUnit(record_.header, odd_);
-    record_.traces.reserve(std::min<std::uint64_t>(head_.pointers.size(), size_ / (kBlockHead + 2) + 1));
+    record_.traces.reserve(std::min<std::uint64_t>(head_.pointers.size(), size_ / (8 * sizeof(Trace)) + 1));
     for (std::size_t i = 0; i < head_.pointers.size() && !stopped_; ++i) {
       readTrace(i, metres);
     }
@@ -123,7 +111,7 @@ class Seg2Reader {
   ShotRecord record_;
   OddityList odd_;
   std::vector<bool> intervalGiven_;
-  std::unordered_set<std::uint32_t> seenPointers_;
+  std::unordered_set<std::uint32_t> readPointers_;  // of the traces read so far
   std::vector<std::byte> scratch_;
   std::string firstReason_ = "it is cut off before the first one";
   bool stopped_ = false;
@@ -203,6 +191,8 @@ void Seg2Reader::readPointers(std::uint16_t tableBytes, std::uint16_t traces) {
              std::to_string(table.size()) + ".");
   }
   table.resize(std::min(count, table.size()));
+  table.shrink_to_fit();
+  scratch_ = {};
   head_.pointers = std::move(table);
   head_.stringsAt = kBlockHead + wanted;
 }
@@ -219,7 +209,7 @@ void Seg2Reader::readFileWords() {
   scratch_.resize(count);
   scratch_.resize(source_.read(head_.stringsAt, scratch_));
   Strings strings = parseStrings(scratch_, head_.order, head_.terminators);
-  budget_.take(strings.entries.size() * sizeof(HeaderEntry) + count);
+  budget_.take(bytesOf(strings.entries));
   if (strings.overran) {
     odd_.add("A string at the start of the file is longer or shorter than its count says.");
   }
@@ -304,7 +294,7 @@ bool Seg2Reader::readSamples(int number, const TraceHead& head, Trace& trace) {
     return false;
   }
   const std::uint64_t bytes = dataBytes(head.code, count);
-  if (!budget_.take(count * sizeof(float) + sizeof(Trace) + head.words.size() * sizeof(HeaderEntry))) {
+  if (!budget_.take(count * sizeof(float) + sizeof(Trace) + bytesOf(head.words))) {
     unreadable(number, "not read on from here, the traces claim more data than the file can hold");
     stopped_ = true;
     return false;
@@ -343,15 +333,16 @@ void Seg2Reader::fillGap(std::size_t until) {
 
 void Seg2Reader::readTrace(std::size_t index, double metres) {
   const int number = static_cast<int>(index) + 1;
-  if (!seenPointers_.insert(head_.pointers[index]).second) {
-    unreadable(number, "missing, its pointer leads to an earlier trace or nowhere");
-    return;
-  }
   TraceHead head;
   Trace trace;
+  if (readPointers_.contains(head_.pointers[index])) {
+    unreadable(number, "missing, its pointer leads to an earlier trace");
+    return;
+  }
   if (!readTraceHead(index, head) || !readSamples(number, head, trace)) {
     return;
   }
+  readPointers_.insert(head_.pointers[index]);
   if (!budget_.take((index - record_.traces.size()) * sizeof(Trace))) {
     stopped_ = true;
     return;

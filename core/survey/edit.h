@@ -45,6 +45,9 @@ struct Edit {
   std::vector<Change> changes;
 };
 
+/// Carries the edit out on the survey itself. Needs every index to be valid.
+void apply(Survey& survey, const Edit& edit);
+
 /// `survey` with the edit carried out. Needs every index to be valid.
 [[nodiscard]] Survey applied(const Survey& survey, const Edit& edit);
 

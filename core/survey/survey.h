@@ -58,7 +58,8 @@ struct Survey {
   std::vector<Geophone> geophones;  ///< rising x, each position once
   std::vector<Shot> shots;          ///< rising x
   std::vector<Borehole> boreholes;
-  std::vector<std::string> remarks;  ///< what was odd on loading, one sentence each
+  std::vector<std::string> remarks;                ///< what was odd on loading, one sentence each
+  bool operator==(const Survey&) const = default;  ///< records are the same when they are the same objects
 };
 
 }  // namespace strikeplate
