@@ -16,7 +16,7 @@ constexpr std::size_t kSkip = 2;          // work samples to a raster step
 constexpr double kBeforeBlow = 0.006;     // s
 constexpr double kSlowestGround = 180.0;  // m/s
 constexpr double kLate = 0.04;            // s
-constexpr double kEndShare = 1.0, kMatchShare = 1.0;
+constexpr double kEndShare = 1.0, kMatchShare = 1.5;
 constexpr double kLeastCap = 1.2;
 constexpr double kMostCap = 8.0;
 
