@@ -106,6 +106,46 @@ void readAsSeg2(benchmark::State& state) {
 }
 BENCHMARK(readAsSeg2);
 
+// Sixteen records that are all kept, as when a line is opened: into memory that the kernel has to give first.
+constexpr int kLine = 16;
+
+template <class ReadOne>
+void readLine(benchmark::State& state, ReadOne readOne) {
+  for (auto step : state) {
+    {
+      std::vector<decltype(readOne())> line;
+      for (int i = 0; i < kLine; ++i) {
+        line.push_back(readOne());
+      }
+      benchmark::DoNotOptimize(line);
+      state.PauseTiming();
+    }
+    malloc_trim(0);
+    state.ResumeTiming();
+  }
+  state.SetBytesProcessed(kLine * state.iterations() *
+                          static_cast<std::int64_t>(std::filesystem::file_size(seg2File())));
+}
+
+void readLineWithReadCall(benchmark::State& state) {
+  readLine(state, [] {
+    const int file = ::open(seg2File().c_str(), O_RDONLY);
+    struct stat about {};
+    ::fstat(file, &about);
+    const auto size = static_cast<std::size_t>(about.st_size);
+    std::unique_ptr<std::byte[]> bytes(new std::byte[size]);
+    benchmark::DoNotOptimize(::read(file, bytes.get(), size));
+    ::close(file);
+    return bytes;
+  });
+}
+BENCHMARK(readLineWithReadCall);
+
+void readLineAsSeg2(benchmark::State& state) {
+  readLine(state, [] { return readSeg2(seg2File()); });
+}
+BENCHMARK(readLineAsSeg2);
+
 void readWithSegyio(benchmark::State& state) {
   const std::string& path = segyFile();
   for (auto step : state) {
