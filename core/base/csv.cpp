@@ -151,7 +151,7 @@ std::string CsvTable::placeOf(std::size_t row) const {
 }
 
 Result<CsvTable> parseCsv(std::string_view text, const std::string& name) {
-  if (text.starts_with(kByteOrderMark)) {
+  while (text.starts_with(kByteOrderMark)) {  // joined files have several
     text.remove_prefix(kByteOrderMark.size());
   }
   if (text.find('\0') != std::string_view::npos) {
@@ -217,7 +217,7 @@ std::string csvRow(const std::vector<std::string>& cells) {
   std::string row;
   for (std::size_t i = 0; i < cells.size(); ++i) {
     row += i > 0 ? "," : "";
-    if (cells[i].find_first_of(",;\t\"\r\n") == std::string::npos) {
+    if (cells[i].find_first_of(",;\t\"\r\n") == std::string::npos && !cells[i].starts_with(kByteOrderMark)) {
       row += cells[i];
       continue;
     }

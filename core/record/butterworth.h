@@ -10,6 +10,7 @@ namespace strikeplate {
 struct PassBand {
   double low = 0.0;   ///< everything below is taken out
   double high = 0.0;  ///< everything above is taken out
+  bool operator==(const PassBand&) const = default;
 };
 
 /// Zero-phase Butterworth filter: order 4 in each direction, run forwards and backwards, so that no frequency is

@@ -20,11 +20,15 @@ inline constexpr ByteOrder kNativeOrder =
 template <class Unsigned>
 constexpr Unsigned reversedBytes(Unsigned value) {
   static_assert(std::is_unsigned_v<Unsigned>);
-  Unsigned out = 0;
-  for (std::size_t i = 0; i < sizeof(Unsigned); ++i) {
-    out = static_cast<Unsigned>((out << 8) | ((value >> (8 * i)) & 0xFFu));
+  if constexpr (sizeof(Unsigned) == 2) {
+    return __builtin_bswap16(value);
+  } else if constexpr (sizeof(Unsigned) == 4) {
+    return __builtin_bswap32(value);
+  } else if constexpr (sizeof(Unsigned) == 8) {
+    return __builtin_bswap64(value);
+  } else {
+    return value;
   }
-  return out;
 }
 
 /// Unsigned integer that holds as many bytes as `Number`.

@@ -1,7 +1,9 @@
 #include "core/record/byte_source.h"
 
+#include <algorithm>
 #include <cerrno>
 #include <cstring>
+#include <vector>
 
 #include <fcntl.h>
 #include <sys/stat.h>
@@ -29,11 +31,12 @@ class MemorySource final : public ByteSource {
   std::span<const std::byte> bytes_;
 };
 
-// Reads the pieces straight into their places: no second copy of a large file, and a file that shrinks meanwhile is a
-// short read, not a crash as it would be in a memory map.
+// Reads a little ahead, so that many small pieces cost few calls of the system, and large pieces straight into their
+// places. A file that shrinks meanwhile is a short read, not a crash as it would be in a memory map.
 class FileSource final : public ByteSource {
  public:
-  FileSource(int descriptor, std::uint64_t size) : descriptor_(descriptor), size_(size) {}
+  FileSource(int descriptor, std::uint64_t size)
+      : descriptor_(descriptor), size_(size), window_(std::clamp<std::uint64_t>(size / 8, 4096, 262144)) {}
   ~FileSource() override { ::close(descriptor_); }
   FileSource(const FileSource&) = delete;
   FileSource& operator=(const FileSource&) = delete;
@@ -41,6 +44,24 @@ class FileSource final : public ByteSource {
   [[nodiscard]] std::uint64_t size() const override { return size_; }
 
   [[nodiscard]] std::size_t read(std::uint64_t offset, std::span<std::byte> into) const override {
+    if (into.size() > window_ / 2) {
+      return readFile(offset, into);
+    }
+    const bool there = offset >= aheadAt_ && offset + into.size() <= aheadAt_ + ahead_.size();
+    if (!there) {
+      ahead_.resize(window_);
+      ahead_.resize(readFile(offset, ahead_));
+      aheadAt_ = offset;
+    }
+    const std::size_t count = std::min<std::uint64_t>(into.size(), ahead_.size() - (offset - aheadAt_));
+    if (count > 0) {
+      std::memcpy(into.data(), ahead_.data() + (offset - aheadAt_), count);
+    }
+    return count;
+  }
+
+ private:
+  std::size_t readFile(std::uint64_t offset, std::span<std::byte> into) const {
     std::size_t done = 0;
     while (done < into.size()) {
       const ssize_t got =
@@ -56,9 +77,11 @@ class FileSource final : public ByteSource {
     return done;
   }
 
- private:
   int descriptor_;
   std::uint64_t size_;
+  std::size_t window_;
+  mutable std::vector<std::byte> ahead_;  // bytes of the file from aheadAt_ on
+  mutable std::uint64_t aheadAt_ = 0;
 };
 
 std::string whyNotOpened(const std::string& path, int error) {

@@ -5,6 +5,7 @@
 #include <utility>
 
 #include "core/record/byte_source.h"
+#include "core/record/seg2_head.h"
 #include "core/record/seg2_reader.h"
 #include "core/record/segy_head.h"
 #include "core/record/segy_reader.h"
@@ -24,7 +25,7 @@ bool isText(std::span<const std::byte> bytes) {
 Kind kindOf(const ByteSource& source) {
   std::array<std::byte, 512> start{};
   const std::span<const std::byte> got(start.data(), source.read(0, start));
-  if (looksLikeSeg2(got)) {
+  if (seg2::looksLikeSeg2(got)) {
     return Kind::Seg2;
   }
   if (segy::looksLikeSegy(source)) {

@@ -10,6 +10,7 @@
 #include "core/record/byte_source.h"
 #include "core/record/oddity_list.h"
 #include "core/record/sample_check.h"
+#include "core/record/seg2_head.h"
 #include "core/record/seg2_keywords.h"
 #include "core/record/seg2_layout.h"
 #include "core/record/seg2_samples.h"
@@ -46,13 +47,6 @@ class Budget {
   std::uint64_t left_;
 };
 
-struct FileHead {
-  ByteOrder order = ByteOrder::Little;
-  Terminators terminators;
-  std::vector<std::uint32_t> pointers;  // one for each trace
-  std::uint64_t stringsAt = 0;
-};
-
 struct TraceHead {
   std::uint64_t dataAt = 0;
   std::uint64_t samples = 0;
@@ -68,9 +62,11 @@ class Seg2Reader {
   }
 
   Result<ShotRecord> read() {
-    if (auto head = readHead(); !head) {
+    auto head = readFileHead(source_, record_.file, odd_);
+    if (!head) {
       return head.failure();
     }
+    head_ = std::move(*head);
     readFileWords();
     const double metres = metresPerUnit(record_.header, odd_);
     record_.traces.reserve(std::min<std::uint64_t>(head_.pointers.size(), size_ / (8 * sizeof(Trace)) + 1));
@@ -90,9 +86,6 @@ class Seg2Reader {
   }
 
  private:
-  Outcome readHead();
-  void readPointers(std::uint16_t tableBytes, std::uint16_t traces);
-  [[nodiscard]] bool traceMarkAt(std::uint64_t offset, ByteOrder order) const;
   void readFileWords();
   void readTrace(std::size_t index, double metres);
   bool readTraceHead(std::size_t index, TraceHead& head);
@@ -116,86 +109,6 @@ class Seg2Reader {
   std::string firstReason_ = "it is cut off before the first one";
   bool stopped_ = false;
 };
-
-std::string terminatorText(std::span<const std::byte> head, std::size_t at) {
-  const auto size = std::to_integer<std::size_t>(head[at]);
-  std::string text;
-  for (std::size_t i = 0; i < std::min<std::size_t>(size, 2); ++i) {
-    text += static_cast<char>(head[at + 1 + i]);
-  }
-  return text;
-}
-
-bool Seg2Reader::traceMarkAt(std::uint64_t offset, ByteOrder order) const {
-  std::byte mark[2];
-  return source_.read(offset, mark) == 2 && load<std::uint16_t>(mark, order) == kTraceMark;
-}
-
-Outcome Seg2Reader::readHead() {
-  std::byte head[kBlockHead];
-  const std::size_t got = source_.read(0, head);
-  if (!looksLikeSeg2(std::span(head, got))) {
-    return Failure{record_.file +
-                   " is not a SEG-2 file (it does not begin with the mark of one); give a shot record."};
-  }
-  if (got < kBlockHead) {
-    return Failure{record_.file + " is cut off within its first " + std::to_string(kBlockHead) +
-                   " bytes; copy it again from the recorder."};
-  }
-  head_.order = load<std::uint16_t>(head, ByteOrder::Little) == kFileMark ? ByteOrder::Little : ByteOrder::Big;
-  // Some writers put the mark of the other order; the first trace tells.
-  std::byte pointer[4];
-  if (source_.read(kBlockHead, pointer) == 4) {
-    const ByteOrder other = head_.order == ByteOrder::Little ? ByteOrder::Big : ByteOrder::Little;
-    if (!traceMarkAt(load<std::uint32_t>(pointer, head_.order), head_.order) &&
-        traceMarkAt(load<std::uint32_t>(pointer, other), other)) {
-      head_.order = other;
-      odd_.add("The mark at the start of the file tells the wrong byte order; the order of its first trace is used.");
-    }
-  }
-  if (const auto revision = load<std::uint16_t>(head + 2, head_.order); revision != 1) {
-    odd_.add("The file says revision " + std::to_string(revision) + " of SEG-2, of which there is only 1.");
-  }
-  if (std::to_integer<int>(head[8]) > 2 || std::to_integer<int>(head[11]) > 2) {
-    odd_.add("The file says that a string or line ends with more than two characters; the first two are used.");
-  }
-  head_.terminators.string = terminatorText(head, 8);
-  head_.terminators.line = terminatorText(head, 11);
-  readPointers(load<std::uint16_t>(head + 4, head_.order), load<std::uint16_t>(head + 6, head_.order));
-  return Done{};
-}
-
-void Seg2Reader::readPointers(std::uint16_t tableBytes, std::uint16_t traces) {
-  const std::uint64_t wanted = std::max<std::uint64_t>(tableBytes, 4ULL * traces);
-  scratch_.resize(std::min(wanted, size_ - kBlockHead));
-  scratch_.resize(source_.read(kBlockHead, scratch_) / 4 * 4);
-  std::vector<std::uint32_t> table(scratch_.size() / 4);
-  for (std::size_t i = 0; i < table.size(); ++i) {
-    table[i] = load<std::uint32_t>(scratch_.data() + 4 * i, head_.order);
-  }
-  if (tableBytes < 4 * traces) {
-    odd_.add("The file says " + std::to_string(traces) + " traces but has room for " +
-             std::to_string(tableBytes / 4) + " pointers to them; the count of traces is used.");
-  }
-  std::size_t count = traces;
-  if (traces == 0) {
-    count = static_cast<std::size_t>(std::find(table.begin(), table.end(), 0u) - table.begin());
-    odd_.add("The file says that it holds no traces; its " + std::to_string(count) + " pointers are followed.");
-  }
-  if (count < table.size() && table[count] != 0 && traceMarkAt(table[count], head_.order)) {
-    odd_.add("The file holds pointers to more traces than the " + std::to_string(count) +
-             " that it says; those beyond are left out.");
-  }
-  if (count > table.size()) {
-    odd_.add("The file is cut off within its pointers: it says " + std::to_string(count) + " traces and names " +
-             std::to_string(table.size()) + ".");
-  }
-  table.resize(std::min(count, table.size()));
-  table.shrink_to_fit();
-  scratch_ = {};
-  head_.pointers = std::move(table);
-  head_.stringsAt = kBlockHead + wanted;
-}
 
 void Seg2Reader::readFileWords() {
   std::uint64_t end = size_;
@@ -403,11 +316,6 @@ void Seg2Reader::compareTraces() {
 }
 
 }  // namespace
-
-bool looksLikeSeg2(std::span<const std::byte> start) {
-  return start.size() >= 2 && (load<std::uint16_t>(start.data(), ByteOrder::Little) == kFileMark ||
-                               load<std::uint16_t>(start.data(), ByteOrder::Big) == kFileMark);
-}
 
 Result<ShotRecord> readSeg2(const std::string& path) {
   const auto source = openBytes(path);

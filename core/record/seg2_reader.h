@@ -26,7 +26,4 @@ Result<ShotRecord> readSeg2(const std::string& path);
 /// The same from a file's content; `name` stands for the file in messages and in the record.
 Result<ShotRecord> readSeg2Bytes(std::span<const std::byte> bytes, const std::string& name);
 
-/// Whether a file that begins with these bytes is meant to be SEG-2 (at least two bytes are needed).
-bool looksLikeSeg2(std::span<const std::byte> start);
-
 }  // namespace strikeplate

@@ -30,10 +30,9 @@ class BinaryHeader {
   // The optional tape label of revision 1 stands before the text header.
   explicit BinaryHeader(const ByteSource& source) {
     std::array<std::byte, 8> start{};
-    source.read(0, start);
-    const bool labelled = static_cast<char>(start[4]) == 'S' && static_cast<char>(start[5]) == 'Y' &&
-                          static_cast<char>(start[6]) >= '0' && static_cast<char>(start[6]) <= '9' &&
-                          static_cast<char>(start[7]) == '.';
+    const bool labelled = source.read(0, start) == start.size() && static_cast<char>(start[4]) == 'S' &&
+                          static_cast<char>(start[5]) == 'Y' && static_cast<char>(start[6]) >= '0' &&
+                          static_cast<char>(start[6]) <= '9' && static_cast<char>(start[7]) == '.';
     base_ = labelled ? kTapeLabelBytes : 0;
     whole_ = source.read(base_ + kTextBytes, bytes_) == bytes_.size() &&
              source.size() > base_ + kTextBytes + kBinaryBytes + kTraceHeaderBytes;
@@ -183,7 +182,7 @@ Result<Head> readHead(const ByteSource& source, const std::string& name, OddityL
     }
   }
   std::vector<std::byte> text(kTextBytes);
-  source.read(binary.base(), text);
+  text.resize(source.read(binary.base(), text));
   head.text = textOf(text);
   return head;
 }

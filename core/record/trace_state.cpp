@@ -7,6 +7,7 @@
 #include <optional>
 
 #include "core/base/numbers.h"
+#include "core/record/channel_polarity.h"
 
 namespace strikeplate {
 namespace {
@@ -120,6 +121,43 @@ TraceVerdict judge(const std::vector<Loudness>& all, std::size_t i) {
   return {};
 }
 
+using Verdicts = std::vector<std::vector<TraceVerdict>>;
+
+// A channel that is dead on more than half of the records is dead on all. Tells which channels are.
+std::vector<bool> spreadDead(const std::vector<std::size_t>& members, std::size_t traces, Verdicts& verdicts) {
+  std::vector<bool> all(traces, false);
+  for (std::size_t t = 0; t < traces; ++t) {
+    const auto dead = static_cast<std::size_t>(std::count_if(
+        members.begin(), members.end(), [&](std::size_t r) { return verdicts[r][t].state == TraceState::Dead; }));
+    all[t] = 2 * dead > members.size();
+    for (const std::size_t r : members) {
+      if (all[t] && verdicts[r][t].state != TraceState::Dead) {
+        verdicts[r][t] = {TraceState::Dead, "dead on " + std::to_string(dead) + " of " +
+                                                std::to_string(members.size()) + " records of this spread"};
+      }
+    }
+  }
+  return all;
+}
+
+void markReversed(const std::vector<const ShotRecord*>& records, const std::vector<std::size_t>& members,
+                  const std::vector<bool>& dead, Verdicts& verdicts) {
+  std::vector<const ShotRecord*> spread;
+  for (const std::size_t r : members) {
+    spread.push_back(records[r]);
+  }
+  for (const ReversedChannel& channel : reversedChannels(spread, dead)) {
+    for (const std::size_t r : members) {
+      if (verdicts[r][channel.trace].state == TraceState::Live) {
+        verdicts[r][channel.trace] = {TraceState::Reversed,
+                                      "its waves run against those of the traces beside it (agreement " +
+                                          fixed(channel.agreement, 2) + " over " + std::to_string(members.size()) +
+                                          " records)"};
+      }
+    }
+  }
+}
+
 }  // namespace
 
 std::vector<TraceVerdict> judgeTraces(const ShotRecord& record) {
@@ -138,26 +176,15 @@ std::vector<TraceVerdict> judgeTraces(const ShotRecord& record) {
 }
 
 std::vector<std::vector<TraceVerdict>> judgeLine(const std::vector<const ShotRecord*>& records) {
-  std::vector<std::vector<TraceVerdict>> verdicts;
+  Verdicts verdicts;
   std::map<std::size_t, std::vector<std::size_t>> ofSpread;  // records with equally many traces
   for (std::size_t r = 0; r < records.size(); ++r) {
     verdicts.push_back(judgeTraces(*records[r]));
     ofSpread[records[r]->traces.size()].push_back(r);
   }
   for (const auto& [traces, members] : ofSpread) {
-    for (std::size_t t = 0; t < traces; ++t) {
-      const auto dead = static_cast<std::size_t>(std::count_if(
-          members.begin(), members.end(), [&](std::size_t r) { return verdicts[r][t].state == TraceState::Dead; }));
-      if (2 * dead <= members.size()) {
-        continue;
-      }
-      for (const std::size_t r : members) {
-        if (verdicts[r][t].state != TraceState::Dead) {
-          verdicts[r][t] = {TraceState::Dead, "dead on " + std::to_string(dead) + " of " +
-                                                  std::to_string(members.size()) + " records of this spread"};
-        }
-      }
-    }
+    const std::vector<bool> dead = spreadDead(members, traces, verdicts);
+    markReversed(records, members, dead, verdicts);
   }
   return verdicts;
 }

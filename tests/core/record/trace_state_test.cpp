@@ -30,14 +30,28 @@ std::vector<std::vector<TraceVerdict>> judge(const std::vector<ShotRecord>& reco
   return judgeLine(pointers);
 }
 
-TEST(TraceState, DeadChannelOfThePracticeLineIsFoundAndNoOther) {
-  const auto verdicts = judge(
-      readAll({"practice/s05_faults_1001.sg2", "practice/s05_faults_1004.sg2", "practice/s05_faults_1009.sg2"}));
-  for (const auto& row : verdicts) {
+std::vector<ShotRecord> practiceLine(int first, int last) {
+  std::vector<std::string> names;
+  for (int file = first; file <= last; ++file) {
+    names.push_back("practice/s05_faults_" + std::to_string(file) + ".sg2");
+  }
+  return readAll(names);
+}
+
+TEST(TraceState, DeadAndReversedChannelsOfThePracticeLineAreFoundAndNoOthers) {
+  for (const auto& row : judge(practiceLine(1001, 1009))) {
     for (std::size_t t = 0; t < row.size(); ++t) {
       EXPECT_EQ(row[t].state == TraceState::Dead, t + 1 == 5) << "trace " << t + 1 << ": " << row[t].reason;
+      EXPECT_EQ(row[t].state == TraceState::Reversed, t + 1 == 16) << "trace " << t + 1 << ": " << row[t].reason;
     }
     EXPECT_NE(row[4].reason.find("times weaker than the traces beside it"), std::string::npos);
+    EXPECT_NE(row[15].reason.find("run against those of the traces beside it"), std::string::npos);
+  }
+}
+
+TEST(TraceState, NothingIsSaidOfPolarityFromFewShotPoints) {
+  for (const auto& row : judge(practiceLine(1001, 1004))) {
+    EXPECT_EQ(row[15].state, TraceState::Live);
   }
 }
 
