@@ -1,0 +1,35 @@
+#pragma once
+
+#include <vector>
+
+#include <Eigen/Core>
+
+#include "core/section/mode.h"
+
+namespace strikeplate {
+
+/// The quantities of a section that get an interval, as functions of the unknowns: elevation of each interface at
+/// the nodes first ... first + count - 1, slope of each interface, mean log velocity of each layer, delays.
+struct SectionFunctionals {
+  int firstNode = 0;
+  int nodeCount = 0;
+  SectionLayout layout;
+
+  [[nodiscard]] int elevation(int k, int node) const { return (k - 1) * nodeCount + node - firstNode; }
+  [[nodiscard]] int slope(int k) const { return layout.interfaces() * nodeCount + k - 1; }
+  [[nodiscard]] int logVelocity(int layer) const { return slope(layout.interfaces()) + layer; }
+  [[nodiscard]] int delay(int shot) const { return logVelocity(layout.layers) + 1 + shot; }
+  [[nodiscard]] int count() const { return delay(layout.delays); }
+};
+
+SectionFunctionals functionalsOf(const SectionProblem& problem, int layers);
+
+/// Their values at theta.
+Eigen::VectorXd functionalValues(const SectionProblem& problem, const SectionFunctionals& f,
+                                 const Eigen::VectorXd& theta);
+
+/// Their derivatives at a model: one column for each functional, one row for each unknown.
+Eigen::MatrixXd functionalDerivatives(const SectionProblem& problem, const SectionFunctionals& f,
+                                      const SectionModel& model);
+
+}  // namespace strikeplate
