@@ -7,7 +7,8 @@
 namespace strikeplate {
 namespace {
 
-constexpr double kSpace = 2.6;  // mm between parts
+constexpr double kSpace = 2.6;           // mm between parts
+constexpr double kBetweenColumns = 6.0;  // mm
 
 QString words(const std::string& text) {
   return QString::fromStdString(text);
@@ -47,16 +48,16 @@ double paintHead(SheetPaper& paper, const QPointF& corner, double width, const s
   return y;
 }
 
-double paintAnswer(SheetPaper& paper, const QPointF& corner, double width, const SheetContent& sheet) {
+double paintAnswer(SheetPaper& paper, const QPointF& corner, double width, const SheetContent& sheet, double points) {
   const Look& look = paper.look();
   constexpr double kIndent = 3.0;
   double y = paper.text(corner + QPointF(kIndent, 0), width - kIndent, words(sheet.answer),
-                        {9.5, true, look.ink, Qt::AlignLeft, 8});
+                        {points, false, look.ink, Qt::AlignLeft, 12});
   if (!sheet.strongestDoubt.empty()) {
     y += 0.8;
     y += paper.text(corner + QPointF(kIndent, y), width - kIndent,
                     QStringLiteral("Strongest reason for doubt: ") + words(sheet.strongestDoubt),
-                    {8.5, false, look.ink, Qt::AlignLeft, 4});
+                    {points - 1.0, true, look.ink, Qt::AlignLeft, 4});
   }
   paper.fill({corner.x(), corner.y() + 0.3, 0.9, y - 0.3}, look.accent);
   return y;
@@ -86,18 +87,27 @@ double paintSignature(SheetPaper& paper, const QPointF& corner, double width, co
   return kHeight;
 }
 
+// How much page 1 shows around its figure, and how large.
+struct ClientLimits {
+  double answerPoints = 10.0;
+  double points = 7.0;
+  int boreholes = 10;
+  int doubts = 3;
+};
+
 // Everything of page 1 below the figure.
-double paintClientEnd(SheetPaper& paper, const QPointF& corner, double width, const SheetContent& sheet) {
+double paintClientEnd(SheetPaper& paper, const QPointF& corner, double width, const SheetContent& sheet,
+                      const ClientLimits& limits) {
   SheetTableStyle style;
+  style.points = limits.points;
   style.layerSymbols = true;
   double y = paintTable(paper, corner, width, sheet.layers, style) + kSpace;
   style.layerSymbols = false;
-  style.points = 6.8;
-  style.mostRows = 10;
+  style.mostRows = limits.boreholes;
   if (!sheet.boreholes.rows.empty()) {
     y += paintTable(paper, corner + QPointF(0, y), width, sheet.boreholes, style) + kSpace;
   }
-  style.mostRows = 3;
+  style.mostRows = limits.doubts;
   style.mostLines = 3;
   y += paintTable(paper, corner + QPointF(0, y), width, sheet.doubts, style) + kSpace;
   y += paper.text(corner + QPointF(0, y), width, words(sheet.cautionShort), {7.5, true, paper.look().ink}) + kSpace;
@@ -126,6 +136,7 @@ double paintReviewerTables(SheetPaper& paper, const QPointF& corner, double widt
                            const ReviewerLimits& limits) {
   SheetTableStyle style;
   style.points = limits.points;
+  style.mostLines = 3;
   style.mostRows = limits.opinions;
   double y = paintTable(paper, corner, width, sheet.opinions, style) + kSpace;
   style.mostRows = limits.reciprocals;
@@ -165,27 +176,52 @@ double paintReviewerWords(SheetPaper& paper, const QPointF& corner, double width
 
 double paintReviewerEnd(SheetPaper& paper, const QPointF& corner, double width, const SheetContent& sheet,
                         const ReviewerLimits& limits) {
-  constexpr double kBetween = 6.0;
-  const double column = (width - kBetween) / 2.0;
+  const double column = (width - kBetweenColumns) / 2.0;
   const double left = paintReviewerTables(paper, corner, column, sheet, limits);
-  const double right = paintReviewerWords(paper, corner + QPointF(column + kBetween, 0), column, sheet, limits);
+  const double right =
+      paintReviewerWords(paper, corner + QPointF(column + kBetweenColumns, 0), column, sheet, limits);
   return std::max(left, right);
 }
 
-// Shortens the longest lists, then the letters, until the page holds them.
+// Shortens the long lists, then the letters, until both columns fit.
 ReviewerLimits limitsFor(SheetPaper& paper, double width, double height, const SheetContent& sheet) {
+  constexpr double kLeastPoints = 4.6;
   ReviewerLimits limits;
-  const auto tooHigh = [&] {
-    return measured(paper, [&] { return paintReviewerEnd(paper, {}, width, sheet, limits); }) > height;
-  };
-  while (tooHigh() && limits.points > 4.6) {
-    if (limits.reciprocals > 4 || limits.shots > 10 || limits.opinions > 10 || limits.files > 8) {
-      limits.reciprocals = std::max(4, limits.reciprocals - 2);
-      limits.shots = std::max(10, limits.shots - 3);
-      limits.opinions = std::max(10, limits.opinions - 2);
-      limits.files = std::max(8, limits.files - 4);
+  const double column = (width - kBetweenColumns) / 2.0;
+  const auto tables = [&] { return paintReviewerTables(paper, {}, column, sheet, limits); };
+  const auto lists = [&] { return paintReviewerWords(paper, {}, column, sheet, limits); };
+  while (measured(paper, lists) > height && limits.points > kLeastPoints) {
+    limits.files > 4 ? limits.files -= 4 : limits.points -= 0.2;
+  }
+  while (measured(paper, tables) > height && limits.points > kLeastPoints) {
+    if (limits.shots > 8 && limits.shots >= limits.reciprocals) {
+      limits.shots -= 2;
+    } else if (limits.reciprocals > 4) {
+      limits.reciprocals -= 2;
+    } else if (limits.opinions > 8) {
+      limits.opinions -= 2;
     } else {
       limits.points -= 0.2;
+    }
+  }
+  return limits;
+}
+
+// Shortens the tables of page 1, then the letters, until the figure has its room.
+ClientLimits clientLimitsFor(SheetPaper& paper, double width, double height, const SheetContent& sheet) {
+  ClientLimits limits;
+  const auto all = [&] {
+    return paintAnswer(paper, {}, width, sheet, limits.answerPoints) + kSpace +
+           paintClientEnd(paper, {}, width, sheet, limits);
+  };
+  while (measured(paper, all) > height && limits.points > 5.0) {
+    if (limits.boreholes > 4) {
+      --limits.boreholes;
+    } else if (limits.doubts > 1) {
+      --limits.doubts;
+    } else {
+      limits.points -= 0.2;
+      limits.answerPoints -= 0.4;
     }
   }
   return limits;
@@ -198,11 +234,14 @@ void paintClientPage(SheetPaper& paper, const QRectF& room, const SheetFigures& 
   const double width = room.width();
   double y = room.top() + paintTitle(paper, room, words(sheet.title), QStringLiteral("Field interpretation sheet"));
   y += paintHead(paper, {room.left(), y}, width, sheet.head) + kSpace;
-  y += paintAnswer(paper, {room.left(), y}, width, sheet) + kSpace;
-  const double end = measured(paper, [&] { return paintClientEnd(paper, {}, width, sheet); });
-  const double figure = room.bottom() - y - end - kSpace;
+  constexpr double kLeastFigure = 72.0;
+  constexpr double kMostFigure = 125.0;
+  const ClientLimits limits = clientLimitsFor(paper, width, room.bottom() - y - kSpace - kLeastFigure, sheet);
+  y += paintAnswer(paper, {room.left(), y}, width, sheet, limits.answerPoints) + kSpace;
+  const double end = measured(paper, [&] { return paintClientEnd(paper, {}, width, sheet, limits); });
+  const double figure = std::min(room.bottom() - y - end - kSpace, kMostFigure);
   paintSection(paper, {room.left(), y, width, figure}, figures);
-  paintClientEnd(paper, {room.left(), room.bottom() - end}, width, sheet);
+  paintClientEnd(paper, {room.left(), room.bottom() - end}, width, sheet, limits);
 }
 
 void paintReviewerPage(SheetPaper& paper, const QRectF& room, const SheetFigures& figures) {

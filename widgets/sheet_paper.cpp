@@ -4,6 +4,7 @@
 
 #include <QFont>
 #include <QFontMetricsF>
+#include <QRegularExpression>
 #include <QTextLayout>
 #include <QTextOption>
 
@@ -11,6 +12,12 @@ namespace strikeplate {
 namespace {
 
 constexpr double kMillimetresPerPoint = 25.4 / 72.0;
+
+// A number and its unit stay on one line.
+QString unbroken(QString words) {
+  static const QRegularExpression kUnit(QStringLiteral("(?<=[0-9]) (?=(m|ft|ms|m/s|ft/s|%)(?![A-Za-z/]))"));
+  return words.replace(kUnit, QString(QChar::Nbsp));
+}
 
 }  // namespace
 
@@ -30,6 +37,8 @@ QFont SheetPaper::font(const SheetText& style) const {
   font.setStyleHint(QFont::SansSerif);
   font.setPixelSize(std::max(1, qRound(style.points * kMillimetresPerPoint * scale_)));
   font.setBold(style.bold);
+  // Any spacing keeps letters apart that would be drawn as one glyph: words can then be found and copied as typed.
+  font.setLetterSpacing(QFont::AbsoluteSpacing, 0.0625);
   return font;
 }
 
@@ -37,7 +46,8 @@ double SheetPaper::width(const QString& words, const SheetText& style) const {
   return QFontMetricsF(font(style)).horizontalAdvance(words) / scale_;
 }
 
-double SheetPaper::text(const QPointF& corner, double width, const QString& words, const SheetText& style) {
+double SheetPaper::text(const QPointF& corner, double width, const QString& given, const SheetText& style) {
+  const QString words = unbroken(given);
   const QFont face = font(style);
   const QFontMetricsF metrics(face);
   const double pixels = width * scale_;

@@ -14,6 +14,7 @@ namespace {
 constexpr double kLegendHeight = 5.0;  // mm
 constexpr double kNameRow = 3.2;       // mm for one row of borehole names
 constexpr int kNameRows = 3;
+const SheetText kNameText{6.5, false, Qt::black, Qt::AlignHCenter};
 
 QString words(const std::string& text) {
   return QString::fromStdString(text);
@@ -171,45 +172,74 @@ void paintBorehole(SheetPaper& paper, const SheetFrame& frame, const Borehole& h
   }
 }
 
-// Names above the plot, in the first row that has room; what has none anywhere is left to the table.
-void paintBoreholeNames(SheetPaper& paper, const SheetFrame& frame, std::vector<Borehole> holes) {
-  const SheetText style{6.5, false, paper.look().ink, Qt::AlignHCenter};
+struct BoreholeName {
+  QString name;
+  double x = 0.0;  // mm, middle
+  int row = 0;     // 0 next to the plot
+};
+
+// Names above the plot, each in the first row that has room; what has none anywhere is left to the table.
+std::vector<BoreholeName> boreholeNames(const SheetPaper& paper, const SheetFrame& frame,
+                                        std::vector<Borehole> holes) {
   std::sort(holes.begin(), holes.end(), [](const Borehole& a, const Borehole& b) { return a.x < b.x; });
   std::array<double, kNameRows> taken{};
   taken.fill(frame.area.left() - 10.0);
+  std::vector<BoreholeName> names;
   for (const Borehole& hole : holes) {
     const QString name = words(hole.name).left(18);
-    const double half = paper.width(name, style) / 2.0;
+    const double half = paper.width(name, kNameText) / 2.0;
     const double x = std::clamp(frame.x(hole.x), frame.area.left() + half, frame.area.right() - half);
-    for (std::size_t row = 0; row < taken.size(); ++row) {
-      if (x - half > taken[row]) {
-        paper.label({x, frame.area.top() - 1.0 - kNameRow * static_cast<double>(row)}, name, style);
-        taken[row] = x + half + 1.5;
-        break;
-      }
+    const auto row = std::find_if(taken.begin(), taken.end(), [&](double end) { return x - half > end; });
+    if (row != taken.end()) {
+      names.push_back({name, x, static_cast<int>(row - taken.begin())});
+      *row = x + half + 1.5;
     }
   }
+  return names;
 }
 
-// Middle of a layer where it is thickest, as far as its words fit there.
+double roomForNames(const std::vector<BoreholeName>& names) {
+  int rows = 0;
+  for (const BoreholeName& name : names) {
+    rows = std::max(rows, name.row + 1);
+  }
+  return 1.0 + kNameRow * rows;
+}
+
+// Room for words in a layer under a position: between the bands of its two interfaces, mm from the plot's top.
+struct Gap {
+  double top = 0.0, bottom = 0.0;
+};
+
+Gap gapOf(const SheetFrame& frame, const Section& section, int layer, std::size_t i) {
+  const double ground = section.ground[i];
+  const double above = layer == 1 ? 0.0 : section.depthAt(layer, section.x[i]).high95;
+  const double floor = ground - frame.bottom;
+  const double below = layer == section.layers ? floor : section.depthAt(layer + 1, section.x[i]).low95;
+  return {frame.y(ground - above), frame.y(ground - std::min(below, floor))};
+}
+
+// In the middle of a layer where it is thickest and no borehole stands, as far as the words fit there at all.
 void paintLayerName(SheetPaper& paper, const SheetFrame& frame, const SheetFigures& figures, int layer) {
   const Section& section = figures.interpretation.section;
   const SheetText style{7.0, true, paper.look().ink, Qt::AlignHCenter};
   const std::vector<std::string>& row = figures.sheet.layers.rows[static_cast<std::size_t>(layer) - 1];
   const QString name = QStringLiteral("layer %1:  ").arg(layer) + words(row[1]);
   const double half = paper.width(name, style) / 2.0 + 2.0;
-  double best = 4.5;
+  const auto clear = [&](double x) {
+    const auto& holes = figures.survey.boreholes;
+    return x - half > frame.area.left() && x + half < frame.area.right() &&
+           std::none_of(holes.begin(), holes.end(),
+                        [&](const Borehole& hole) { return std::abs(frame.x(hole.x) - x) < half; });
+  };
+  double best = 3.6;
   QPointF place;
   for (std::size_t i = 0; i < section.x.size(); ++i) {
     const double x = frame.x(section.x[i]);
-    const double above = layer == 1 ? 0.0 : section.depthAt(layer, section.x[i]).value;
-    const double below =
-        layer == section.layers ? section.ground[i] - frame.bottom : section.depthAt(layer + 1, section.x[i]).value;
-    const double thickness = (std::min(below, section.ground[i] - frame.bottom) - above) * frame.area.height() /
-                             (frame.top - frame.bottom);
-    if (x - half > frame.area.left() && x + half < frame.area.right() && thickness > best + 0.3) {
-      best = thickness;
-      place = {x, frame.y(section.ground[i] - above) + thickness / 2.0 + 1.0};
+    const Gap gap = gapOf(frame, section, layer, i);
+    if (gap.bottom - gap.top > best + 0.3 && clear(x)) {
+      best = gap.bottom - gap.top;
+      place = {x, (gap.top + gap.bottom) / 2.0 + 1.0};
     }
   }
   if (!place.isNull()) {
@@ -217,8 +247,7 @@ void paintLayerName(SheetPaper& paper, const SheetFrame& frame, const SheetFigur
   }
 }
 
-void paintLegend(SheetPaper& paper, const QPointF& corner, double right, const SheetFigures& figures,
-                 double exaggeration) {
+void paintLegend(SheetPaper& paper, const QPointF& corner, const SheetFigures& figures) {
   QPainter& painter = paper.painter();
   const Look& look = paper.look();
   const SheetText style{6.5, false, look.ink};
@@ -246,8 +275,6 @@ void paintLegend(SheetPaper& paper, const QPointF& corner, double right, const S
     painter.setBrush(Qt::NoBrush);
     entry(QStringLiteral("top of layer %1").arg(interface.layer));
   }
-  const QString last = QStringLiteral("band: 95 %     vertical exaggeration %1 : 1").arg(exaggeration);
-  paper.label({right, y}, last, {6.5, true, look.ink, Qt::AlignRight});
 }
 
 }  // namespace
@@ -287,8 +314,9 @@ void paintSection(SheetPaper& paper, const QRectF& area, const SheetFigures& fig
   if (paper.dry()) {
     return;
   }
-  const double names = figures.survey.boreholes.empty() ? 1.0 : kNameRows * kNameRow;
-  const QRectF plot = area.adjusted(kAxisLeft, names, -2.0, -kAxisBottom - kLegendHeight);
+  QRectF plot = area.adjusted(kAxisLeft, 0.0, -2.0, -kAxisBottom - kLegendHeight);
+  const std::vector<BoreholeName> names = boreholeNames(paper, frameOf(plot, figures, 1.0), figures.survey.boreholes);
+  plot.setTop(plot.top() + roomForNames(names));
   const SheetSpan span = sheetSpan(figures);
   const Depths depths = depthsOf(figures);
   const double exaggeration = verticalExaggeration(depths.highest - depths.lowest, plot.height() - 4.0,
@@ -319,9 +347,12 @@ void paintSection(SheetPaper& paper, const QRectF& area, const SheetFigures& fig
   painter.restore();
   painter.setPen(QPen(paper.look().ink, 0.2));
   painter.drawRect(frame.area);
-  paintBoreholeNames(paper, frame, figures.survey.boreholes);
-  paintLegend(paper, {frame.area.left(), area.bottom() - kLegendHeight + 1.4}, frame.area.right(), figures,
-              exaggeration);
+  for (const BoreholeName& name : names) {
+    paper.label({name.x, frame.area.top() - 1.0 - kNameRow * name.row}, name.name, kNameText);
+  }
+  const QString scale = QStringLiteral("band: 95 %     vertical exaggeration %1 : 1").arg(exaggeration);
+  paper.label({frame.area.right(), frame.area.bottom() + 7.2}, scale, {6.5, true, paper.look().ink, Qt::AlignRight});
+  paintLegend(paper, {frame.area.left(), area.bottom() - kLegendHeight + 1.4}, figures);
 }
 
 }  // namespace strikeplate

@@ -18,17 +18,34 @@ struct Columns {
   std::vector<double> left, width;
 };
 
+SheetText headerText(const SheetPaper& paper, const SheetTableStyle& style) {
+  return {style.points - 0.5, true, paper.look().faint, Qt::AlignLeft, 2};
+}
+
+double longestWord(const SheetPaper& paper, const QString& text, const SheetText& style) {
+  double most = 0.0;
+  for (const QString& word : text.split(QLatin1Char(' '))) {
+    most = std::max(most, paper.width(word, style));
+  }
+  return most;
+}
+
 Columns columnsOf(const SheetPaper& paper, double width, const SheetTable& table, const SheetTableStyle& style) {
-  std::vector<double> wanted;
+  std::vector<ColumnNeed> needs;
+  const std::size_t shown = std::min(table.rows.size(), static_cast<std::size_t>(style.mostRows));
   for (std::size_t c = 0; c < table.columns.size(); ++c) {
-    double most = paper.width(words(table.columns[c]), {style.points - 0.5, true, {}});
-    for (std::size_t r = 0; r < std::min(table.rows.size(), static_cast<std::size_t>(style.mostRows)); ++r) {
-      most = std::max(most, paper.width(words(table.rows[r][c]), {style.points}));
+    const double word = longestWord(paper, words(table.columns[c]), headerText(paper, style));
+    ColumnNeed need{word, word};
+    for (std::size_t r = 0; r < shown; ++r) {
+      const QString cell = words(table.rows[r][c]);
+      need.wanted = std::max(need.wanted, paper.width(cell, {style.points}));
+      need.word = std::max(need.word, longestWord(paper, cell, {style.points}));
     }
-    wanted.push_back(most + kGap + (c == 0 && style.layerSymbols ? kSymbol + 1.2 : 0.0));
+    const double around = kGap + (c == 0 && style.layerSymbols ? kSymbol + 1.2 : 0.0);
+    needs.push_back({need.wanted + around, need.word + around});
   }
   Columns columns;
-  columns.width = columnWidths(wanted, width);
+  columns.width = columnWidths(needs, width);
   double left = 0.0;
   for (const double w : columns.width) {
     columns.left.push_back(left);
@@ -65,8 +82,7 @@ double paintRows(SheetPaper& paper, const QPointF& corner, double width, const S
   const Look& look = paper.look();
   const Columns columns = columnsOf(paper, width, table, style);
   const double indent = style.layerSymbols ? kSymbol + 1.2 : 0.0;
-  double y = paintRow(paper, corner, columns, table.columns, {style.points - 0.5, true, look.faint, Qt::AlignLeft, 2},
-                      indent);
+  double y = paintRow(paper, corner, columns, table.columns, headerText(paper, style), indent);
   paper.line(corner + QPointF(0, y), corner + QPointF(width, y), look.ink, 0.2);
   const SheetText text{style.points, false, look.ink, Qt::AlignLeft, style.mostLines};
   const std::size_t shown = std::min(table.rows.size(), static_cast<std::size_t>(style.mostRows));
@@ -78,7 +94,7 @@ double paintRows(SheetPaper& paper, const QPointF& corner, double width, const S
     paper.line(corner + QPointF(0, y), corner + QPointF(width, y), look.grid, 0.12);
   }
   if (shown < table.rows.size()) {
-    const QString more = QStringLiteral("and %1 more rows, which the program shows").arg(table.rows.size() - shown);
+    const QString more = QStringLiteral("%1 more in the program").arg(table.rows.size() - shown);
     y += kRowSpace + paper.text(corner + QPointF(0, y + kRowSpace), width, more, {style.points, false, look.faint});
   }
   return y;
@@ -86,26 +102,27 @@ double paintRows(SheetPaper& paper, const QPointF& corner, double width, const S
 
 }  // namespace
 
-std::vector<double> columnWidths(const std::vector<double>& wanted, double width) {
-  std::vector<double> widths = wanted;
-  const double all = std::accumulate(wanted.begin(), wanted.end(), 0.0);
-  if (all <= width) {
-    for (double& w : widths) {
-      w += (width - all) / static_cast<double>(widths.size());
-    }
-    return widths;
-  }
+std::vector<double> columnWidths(const std::vector<ColumnNeed>& needs, double width) {
+  const auto sumOf = [&needs](const auto& widthOf) {
+    return std::accumulate(needs.begin(), needs.end(), 0.0,
+                           [&](double total, const ColumnNeed& need) { return total + widthOf(need); });
+  };
+  const double all = sumOf([](const ColumnNeed& need) { return need.wanted; });
+  const bool wordsFit = sumOf([](const ColumnNeed& need) { return need.word; }) <= width;
+  const auto capped = [wordsFit](const ColumnNeed& need, double cap) {
+    return std::max(std::min(need.wanted, cap), wordsFit ? need.word : 0.0);
+  };
   // The cap at which the columns just fill the width, by halving.
   double low = 0.0;
   double high = width;
   for (int i = 0; i < 60; ++i) {
     const double cap = (low + high) / 2.0;
-    const double sum = std::accumulate(wanted.begin(), wanted.end(), 0.0,
-                                       [cap](double total, double w) { return total + std::min(w, cap); });
-    (sum > width ? high : low) = cap;
+    (sumOf([&](const ColumnNeed& need) { return capped(need, cap); }) > width ? high : low) = cap;
   }
-  for (double& w : widths) {
-    w = std::min(w, low);
+  const double spare = std::max(0.0, width - all) / static_cast<double>(std::max<std::size_t>(1, needs.size()));
+  std::vector<double> widths;
+  for (const ColumnNeed& need : needs) {
+    widths.push_back(capped(need, low) + spare);
   }
   return widths;
 }

@@ -23,7 +23,14 @@ double paintTable(SheetPaper& paper, const QPointF& corner, double width, const 
 double paintList(SheetPaper& paper, const QPointF& corner, double width, const QString& title,
                  const std::vector<std::string>& lines, double points);
 
-/// Widths of columns that add up to `width`: each as wide as it wants, the widest ones narrowed as far as needed.
-std::vector<double> columnWidths(const std::vector<double>& wanted, double width);
+/// How wide a column wants to be, with every cell on one line, and what its longest word needs, mm.
+struct ColumnNeed {
+  double wanted = 0.0;
+  double word = 0.0;
+};
+
+/// Widths of columns that add up to `width`: each as wide as it wants, the widest ones narrowed as far as needed, but
+/// as long as there is room for that not below their longest word.
+std::vector<double> columnWidths(const std::vector<ColumnNeed>& needs, double width);
 
 }  // namespace strikeplate

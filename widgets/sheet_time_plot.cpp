@@ -32,8 +32,8 @@ void paintPicks(SheetPaper& paper, const SheetFrame& frame, const TravelTimes& t
     const QColor colour = look.layerColour(a.layer);
     paper.line(frame.at(x, a.time - kNormal95 * a.sigma), frame.at(x, a.time + kNormal95 * a.sigma), look.faint,
                0.12);
-    painter.setPen(QPen(colour.darker(130), 0.2));
-    painter.setBrush(colour.lighter(150));
+    painter.setPen(QPen(colour.darker(150), 0.15));
+    painter.setBrush(colour);
     paintLayerSymbol(painter, a.layer, frame.at(x, a.time), size);
   }
   painter.setBrush(Qt::NoBrush);
@@ -75,7 +75,7 @@ void paintLegend(SheetPaper& paper, const QPointF& corner, const Interpretation&
   const double y = corner.y() + 2.0;
   for (int layer = 1; layer <= interpretation.section.layers; ++layer) {
     painter.setPen(QPen(paper.look().layerColour(layer).darker(130), 0.2));
-    painter.setBrush(paper.look().layerColour(layer).lighter(150));
+    painter.setBrush(paper.look().layerColour(layer));
     paintLayerSymbol(painter, layer, {x + 1.0, y - 0.8}, 1.8);
     painter.setBrush(Qt::NoBrush);
     const QString words = QStringLiteral("layer %1").arg(layer);

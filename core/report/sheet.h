@@ -9,7 +9,7 @@ namespace strikeplate {
 
 /// What the sheet cannot know from the survey itself.
 struct SheetOptions {
-  int edits = 0;                        ///< edits of the history that are done, or -1 when there is no history
+  int edits = -1;                       ///< edits of the history that are done, or -1 when there is no history
   std::string answer;                   ///< the user's own answer in place of the drafted one; empty for the draft
   std::string signatory;                ///< printed name under the signature line
   std::vector<std::string> inputFiles;  ///< besides the records' own files, such as a geometry table
@@ -46,7 +46,7 @@ struct SheetContent {
   std::vector<std::string> cautions;     ///< in full
   std::string signatory;
   std::string program;             ///< name and version
-  std::vector<std::string> files;  ///< input files with what they are
+  std::vector<std::string> files;  ///< input files, each once
   bool feet = false;
 };
 

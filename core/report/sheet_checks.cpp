@@ -104,7 +104,7 @@ SheetTable sheetOpinions(const SheetSource& source) {
   }
   SheetTable table;
   table.title = "Second opinions";
-  table.columns = {"Route", "Top of layer", "Depths", "Mean depth", "Spread", "Minus section", "Agree"};
+  table.columns = {"Route", "Layer", "Depths", "Mean depth", "Spread", "Minus section", "Agree"};
   for (const auto& [key, route] : routes) {
     std::vector<std::string> row = {key.first, std::to_string(key.second),
                                     std::to_string(route.depth.count) + " of " + std::to_string(route.all)};
@@ -115,7 +115,8 @@ SheetTable sheetOpinions(const SheetSource& source) {
     table.rows.push_back(std::move(row));
   }
   table.note =
-      "The same depth by other published methods. Spread is one standard deviation of the depths; agree counts those "
+      "The depth to the top of the layer by other published methods. Spread is one standard deviation of the depths; "
+      "agree counts those "
       "whose 95 % interval meets the section's at the same place.";
   table.summary = table.rows.empty() ? "No other method has the picks it needs." : "";
   return table;
@@ -127,17 +128,18 @@ SheetTable sheetReciprocals(const SheetSource& source) {
                    [](const ReciprocalPair& a, const ReciprocalPair& b) { return excess(a) > excess(b); });
   SheetTable table;
   table.title = "Reciprocal times";
-  table.columns = {"Shot A", "Shot B", "A to B", "B to A", "Difference", "Tolerance", ""};
+  table.columns = {"Shots", "There", "Back", "Difference", "Tolerance", "Within"};
   int within = 0;
   for (const ReciprocalPair& pair : pairs) {
     const bool good = excess(pair) <= 0.0;
     within += good ? 1 : 0;
-    table.rows.push_back({shotName(source, pair.shotA), shotName(source, pair.shotB), ms(pair.timeAB, 1),
-                          ms(pair.timeBA, 1), ms(pair.difference(), 2), ms(pair.tolerance, 2),
-                          good ? "within" : "beyond"});
+    table.rows.push_back({std::to_string(pair.shotA + 1) + " and " + std::to_string(pair.shotB + 1),
+                          ms(pair.timeAB, 1), ms(pair.timeBA, 1), ms(pair.difference(), 2), ms(pair.tolerance, 2),
+                          good ? "yes" : "no"});
   }
   table.note =
-      "Times of two shots read at each other's place should be equal. Tolerance is the 95 % interval from the picks' "
+      "There: the first shot read at the second, back: the second at the first; they should be equal. Tolerance is "
+      "the 95 % interval from the picks' "
       "sigmas.";
   table.summary = pairs.empty()
                       ? "No two shots could be read at each other's place."

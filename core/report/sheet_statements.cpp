@@ -98,10 +98,10 @@ std::vector<std::string> sheetMethods(const SheetSource& source) {
 
 std::vector<std::string> sheetFiles(const SheetSource& source) {
   std::vector<std::string> lines;
+  std::set<std::string> known;
   for (const RecordPtr& record : source.survey.records) {
-    std::string line = record->file + " (" + record->format + ")";
-    if (std::find(lines.begin(), lines.end(), line) == lines.end()) {
-      lines.push_back(std::move(line));
+    if (known.insert(record->file).second) {
+      lines.push_back(record->file);
     }
   }
   lines.insert(lines.end(), source.options.inputFiles.begin(), source.options.inputFiles.end());

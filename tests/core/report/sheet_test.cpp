@@ -43,8 +43,8 @@ TEST(Sheet, TheAnswerHoldsRangesWithTheirIntervalsInTwoSentences) {
   EXPECT_EQ(
       sheet.answer,
       "Between 0.0 m and 10.0 m along the line the top of layer 2 lies 4.0 to 6.0 m below the ground (95 % "
-      "interval over the line 3.0 to 6.5 m). The waves travel through layer 1 500 m/s (480 to 520 m/s); layer 2 "
-      "2000 m/s (1900 to 2100 m/s).");
+      "interval over the line 3.0 to 6.5 m). The wave velocity is 500 m/s (480 to 520 m/s) in layer 1; 2000 m/s "
+      "(1900 to 2100 m/s) in layer 2.");
 }
 
 TEST(Sheet, TheLayerTableHoldsLeastMeanAndMostAlongTheGeophones) {
@@ -147,9 +147,9 @@ TEST(Sheet, TheWorstReciprocalPairStandsFirst) {
   const auto sample = testing::sheetSample();
   const SheetContent sheet = sheetContent(sample.survey, sample.interpretation, {});
   ASSERT_EQ(sheet.reciprocals.rows.size(), 21U);
-  EXPECT_EQ(sheet.reciprocals.rows[0][0].substr(0, 2), "3 ");
-  EXPECT_EQ(sheet.reciprocals.rows[0][6], "beyond");
-  EXPECT_EQ(sheet.reciprocals.rows[20][6], "within");
+  EXPECT_EQ(sheet.reciprocals.rows[0][0].substr(0, 6), "3 and ");
+  EXPECT_EQ(sheet.reciprocals.rows[0][5], "no");
+  EXPECT_EQ(sheet.reciprocals.rows[20][5], "yes");
   EXPECT_EQ(sheet.reciprocals.summary, "17 of 21 pairs within the tolerance.");
 }
 
