@@ -9,6 +9,7 @@ namespace {
 
 constexpr double kSpace = 2.6;           // mm between parts
 constexpr double kBetweenColumns = 6.0;  // mm
+constexpr int kDoubtsOnFirstPage = 3;
 
 QString words(const std::string& text) {
   return QString::fromStdString(text);
@@ -92,7 +93,7 @@ struct ClientLimits {
   double answerPoints = 10.0;
   double points = 7.0;
   int boreholes = 10;
-  int doubts = 3;
+  int doubts = kDoubtsOnFirstPage;
 };
 
 // Everything of page 1 below the figure.
@@ -128,6 +129,7 @@ struct ReviewerLimits {
   int opinions = 16;
   int reciprocals = 10;
   int shots = 31;
+  int doubts = 10;
   int files = 24;
   double points = 6.6;
 };
@@ -142,7 +144,12 @@ double paintReviewerTables(SheetPaper& paper, const QPointF& corner, double widt
   style.mostRows = limits.reciprocals;
   y += paintTable(paper, corner + QPointF(0, y), width, sheet.reciprocals, style) + kSpace;
   style.mostRows = limits.shots;
-  return y + paintTable(paper, corner + QPointF(0, y), width, sheet.shots, style);
+  y += paintTable(paper, corner + QPointF(0, y), width, sheet.shots, style);
+  if (static_cast<int>(sheet.doubts.rows.size()) > kDoubtsOnFirstPage) {
+    style.mostRows = limits.doubts;
+    y += kSpace + paintTable(paper, corner + QPointF(0, y + kSpace), width, sheet.doubts, style);
+  }
+  return y;
 }
 
 std::vector<std::string> filesShown(const SheetContent& sheet, int most) {
@@ -198,6 +205,8 @@ ReviewerLimits limitsFor(SheetPaper& paper, double width, double height, const S
       limits.shots -= 2;
     } else if (limits.reciprocals > 4) {
       limits.reciprocals -= 2;
+    } else if (limits.doubts > 4) {
+      --limits.doubts;
     } else if (limits.opinions > 8) {
       limits.opinions -= 2;
     } else {

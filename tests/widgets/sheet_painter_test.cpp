@@ -138,6 +138,17 @@ TEST_F(SheetPainter, ALongLineWithLongNamesStillHasItsCautionsAndTwoPages) {
   }
 }
 
+TEST_F(SheetPainter, DoubtsThatFirstPageHasNoRoomForStandOnTheSecond) {
+  auto sample = testing::sheetSample();
+  for (int i = 0; i < 4; ++i) {
+    sample.interpretation.doubts.push_back(
+        {"late pick", "shot 4", "Pick " + std::to_string(i) + " is late", "", "a second look", 3, i, 0, 0.0});
+  }
+  write(sample);
+  EXPECT_FALSE(holds(pageText(1), "Pick 3 is late"));
+  EXPECT_TRUE(holds(pageText(2), "Pick 3 is late."));
+}
+
 TEST_F(SheetPainter, AnEmptySurveyPrintsThatNothingIsDetermined) {
   testing::SheetSample empty;
   empty.interpretation.section.reason = "there are no picks; pick first breaks";
