@@ -5,12 +5,11 @@
 #include <utility>
 
 #include "core/base/numbers.h"
+#include "core/base/units.h"
 #include "core/survey/edit.h"
 
 namespace strikeplate::edits {
 namespace {
-
-constexpr double kMetresPerFoot = 0.3048;
 
 std::size_t at(int index) {
   return static_cast<std::size_t>(index);
@@ -32,7 +31,7 @@ std::string shotName(int shot) {
 }
 
 std::string lengthText(const Survey& survey, double metres) {
-  return survey.settings.feet ? fixed(metres / kMetresPerFoot, 1) + " ft" : fixed(metres, 2) + " m";
+  return Units{survey.settings.feet}.length(metres, survey.settings.feet ? 1 : 2);
 }
 
 const char* stateName(TraceState state) {

@@ -76,6 +76,7 @@ ShotRecord recordFrom(const json& from, std::size_t mostSamples) {
   record.firstTraceInFile = from.at("firstTrace").get<int>();
   record.format = textFromJson(from.at("format"));
   record.source = positionFrom(member(from, "source"));
+  record.sourceDepth = numberFrom(member(from, "sourceDepth"));
   record.header = entriesFrom(from.at("header"));
   for (const json& oddity : from.at("oddities")) {
     record.oddities.push_back(textFromJson(oddity));
@@ -101,6 +102,7 @@ std::string recordHeadToJson(const ShotRecord& record) {
                        {"firstTrace", record.firstTraceInFile},
                        {"format", textToJson(record.format)},
                        {"source", toJson(record.source)},
+                       {"sourceDepth", toJson(record.sourceDepth)},
                        {"header", toJson(record.header)},
                        {"oddities", oddities},
                        {"traces", traces}};

@@ -29,6 +29,7 @@ RecordPtr randomRecord(std::mt19937& random, int traces) {
   record->header = {{"ACQUISITION_DATE", word(random)}};
   record->oddities = {word(random)};
   if (whole(random, 0, 1) == 1) {
+    record->sourceDepth = real(random, 0, 2);
     record->source = HeaderPosition{real(random, -5, 50), real(random, 0, 1), std::nullopt};
   }
   for (int i = 0; i < traces; ++i) {

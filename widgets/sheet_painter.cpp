@@ -1,0 +1,91 @@
+#include "widgets/sheet_painter.h"
+
+#include <QMarginsF>
+#include <QPainter>
+#include <QPdfWriter>
+#include <QSaveFile>
+
+#include "widgets/sheet_pages.h"
+
+namespace strikeplate {
+namespace {
+
+constexpr int kPages = 2;
+constexpr double kMargin = 13.0;     // mm
+constexpr double kFooterRoom = 5.0;  // mm
+constexpr double kInch = 25.4;       // mm
+constexpr int kResolution = 1200;    // dots per inch of the PDF's own units
+
+Failure notWritten(const QString& path, const QString& reason) {
+  return Failure{path.toStdString() + " could not be written (" + reason.toStdString() +
+                 "); check its folder, your right to write there, and the room left."};
+}
+
+}  // namespace
+
+int sheetPageCount() {
+  return kPages;
+}
+
+void paintSheetPage(QPainter& painter, double perMillimetre, const QSizeF& size, int page, const Survey& survey,
+                    const Interpretation& interpretation, const SheetContent& sheet) {
+  SheetPaper paper(painter, perMillimetre);
+  const QRectF room(kMargin, kMargin - 2.0, size.width() - 2.0 * kMargin,
+                    size.height() - 2.0 * kMargin - kFooterRoom + 4.0);
+  const SheetFigures figures{survey, interpretation, sheet};
+  if (page == 1) {
+    paintClientPage(paper, room, figures);
+  } else {
+    paintReviewerPage(paper, room, figures);
+  }
+  paintFooter(paper, room, sheet, page, kPages);
+}
+
+Outcome paintSheet(QPagedPaintDevice& device, const Survey& survey, const Interpretation& interpretation,
+                   const SheetOptions& options) {
+  const SheetContent sheet = sheetContent(survey, interpretation, options);
+  QPainter painter;
+  if (!painter.begin(&device)) {
+    return Failure{"The printer cannot be painted on; choose another one."};
+  }
+  const QPageLayout layout = device.pageLayout();
+  const double perMillimetre = device.logicalDpiX() / kInch;
+  if (layout.mode() == QPageLayout::StandardMode) {
+    painter.translate(-layout.paintRect(QPageLayout::Millimeter).topLeft() * perMillimetre);
+  }
+  const QSizeF size = layout.fullRect(QPageLayout::Millimeter).size();
+  for (int page = 1; page <= kPages; ++page) {
+    if (page > 1 && !device.newPage()) {
+      return Failure{"The printer did not take page " + std::to_string(page) + " of the sheet; print it again."};
+    }
+    paintSheetPage(painter, perMillimetre, size, page, survey, interpretation, sheet);
+  }
+  if (!painter.end()) {
+    return Failure{"The printer did not finish the sheet; print it again."};
+  }
+  return Done{};
+}
+
+Outcome writeSheetPdf(const QString& path, const Survey& survey, const Interpretation& interpretation,
+                      const SheetOptions& options, QPageSize::PageSizeId size) {
+  QSaveFile file(path);
+  if (!file.open(QIODevice::WriteOnly)) {
+    return notWritten(path, file.errorString());
+  }
+  QPdfWriter writer(&file);
+  writer.setPageSize(QPageSize(size));
+  writer.setPageMargins(QMarginsF(0, 0, 0, 0));
+  writer.setResolution(kResolution);
+  writer.setTitle(QString::fromStdString(sheetContent(survey, interpretation, options).title));
+  writer.setCreator(QStringLiteral("Strikeplate"));
+  if (Outcome painted = paintSheet(writer, survey, interpretation, options); !painted) {
+    file.cancelWriting();
+    return painted;
+  }
+  if (!file.commit()) {
+    return notWritten(path, file.errorString());
+  }
+  return Done{};
+}
+
+}  // namespace strikeplate

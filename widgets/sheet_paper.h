@@ -1,0 +1,58 @@
+#pragma once
+
+#include <QColor>
+#include <QPainter>
+#include <QRectF>
+#include <QString>
+
+#include "widgets/look.h"
+
+namespace strikeplate {
+
+struct SheetText {
+  double points = 7.0;
+  bool bold = false;
+  QColor colour = Qt::black;
+  Qt::Alignment align = Qt::AlignLeft;
+  int maxLines = 100;  ///< what is longer ends in an ellipsis
+};
+
+/// A painter in millimetres from the page's upper left corner, whatever the device's resolution. Fonts are in points.
+/// While `dry` nothing is drawn, and heights come out the same: a layout is measured by the code that paints it.
+class SheetPaper {
+ public:
+  /// `perMillimetre` is device units; the painter's origin is the page's corner.
+  SheetPaper(QPainter& painter, double perMillimetre);
+  ~SheetPaper();
+  SheetPaper(const SheetPaper&) = delete;
+  SheetPaper& operator=(const SheetPaper&) = delete;
+
+  void setDry(bool dry) { dry_ = dry; }
+  [[nodiscard]] bool dry() const { return dry_; }
+  [[nodiscard]] const Look& look() const { return look_; }
+
+  /// For lines and areas, in mm.
+  [[nodiscard]] QPainter& painter() { return painter_; }
+
+  /// Wraps the text into a box of this width; returns the height that it took, mm.
+  double text(const QPointF& corner, double width, const QString& words, const SheetText& style);
+  /// One line that stands on this point, at its left, middle or right as the style says.
+  void label(const QPointF& base, const QString& words, const SheetText& style);
+  /// One line from below upwards, its middle at this point.
+  void uprightLabel(const QPointF& middle, const QString& words, const SheetText& style);
+  /// Width of the text on one line, mm.
+  [[nodiscard]] double width(const QString& words, const SheetText& style) const;
+
+  void line(const QPointF& from, const QPointF& to, const QColor& colour, double width = 0.15);
+  void fill(const QRectF& area, const QColor& colour);
+
+ private:
+  [[nodiscard]] QFont font(const SheetText& style) const;
+
+  QPainter& painter_;
+  double scale_;
+  Look look_ = Look::of(LookKind::Light);
+  bool dry_ = false;
+};
+
+}  // namespace strikeplate
