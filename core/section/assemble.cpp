@@ -63,7 +63,7 @@ Posterior mix(const SectionProblem& problem, const SectionFunctionals& f, const 
         lengths = w.fit.choice.length;
         transposed = mode.prior->transposed(w.fit.choice, rows);
       }
-      const Eigen::VectorXd variances = w.fit.variances(*mode.prior, transposed);
+      const Eigen::VectorXd variances = allVariances(f, w.fit.variances(*mode.prior, transposed));
       const Eigen::VectorXd theta = mode.prior->apply(w.fit.choice, w.fit.xi);
       const Eigen::VectorXd values = functionalValues(problem, f, theta);
       for (int i = 0; i < f.count(); ++i) {

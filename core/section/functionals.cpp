@@ -31,6 +31,13 @@ SectionFunctionals functionalsOf(const SectionProblem& problem, int layers) {
   f.firstNode = std::max(0, static_cast<int>(std::floor(grid.coordinate(grid.lineStart) + 1e-9)));
   const int last = std::min(grid.nodes - 1, static_cast<int>(std::ceil(grid.coordinate(grid.lineEnd) - 1e-9)));
   f.nodeCount = last - f.firstNode + 1;
+  f.anchors.push_back(f.firstNode);
+  for (const int node : grid.knotNode) {
+    if (node > f.firstNode && node < last) {
+      f.anchors.push_back(node);
+    }
+  }
+  f.anchors.push_back(last);
   return f;
 }
 
@@ -63,29 +70,52 @@ Eigen::MatrixXd functionalDerivatives(const SectionProblem& problem, const Secti
   const SectionGrid& grid = problem.grid;
   const Eigen::VectorXd slope = slopeWeights(problem, f);
   const Eigen::VectorXd mean = meanWeights(grid);
-  Eigen::MatrixXd out = Eigen::MatrixXd::Zero(f.layout.size(), f.count());
-  for (int k = 1; k <= f.layout.interfaces(); ++k) {
-    for (int j = 0; j < f.nodeCount; ++j) {
-      const int node = f.firstNode + j;
-      const SectionGrid::Weights& t = grid.toKnots[node];
-      for (int l = 1; l <= k; ++l) {
-        for (int i = 0; i < 4; ++i) {
-          const double d = model.chain[k][l][node] * t.w[i];
-          out(f.layout.elevation(l) + t.first + i, f.elevation(k, node)) += d;
-          out(f.layout.elevation(l) + t.first + i, f.slope(k)) += slope[j] * d;
-        }
+  const int anchors = static_cast<int>(f.anchors.size());
+  const int shift = f.layout.interfaces() * (anchors - f.nodeCount);  // columns behind the elevations move by this
+  Eigen::MatrixXd out = Eigen::MatrixXd::Zero(f.layout.size(), f.count() + shift);
+  const auto node = [&](int k, int j, int column, double weight) {
+    const SectionGrid::Weights& t = grid.toKnots[j];
+    for (int l = 1; l <= k; ++l) {
+      for (int i = 0; i < 4; ++i) {
+        out(f.layout.elevation(l) + t.first + i, column) += weight * model.chain[k][l][j] * t.w[i];
       }
+    }
+  };
+  for (int k = 1; k <= f.layout.interfaces(); ++k) {
+    for (int a = 0; a < anchors; ++a) {
+      node(k, f.anchors[a], (k - 1) * anchors + a, 1.0);
+    }
+    for (int j = 0; j < f.nodeCount; ++j) {
+      node(k, f.firstNode + j, f.slope(k) + shift, slope[j]);
     }
   }
   for (int layer = 1; layer <= f.layout.layers; ++layer) {
-    out(f.layout.logVelocity(layer), f.logVelocity(layer)) = 1.0;
+    out(f.layout.logVelocity(layer), f.logVelocity(layer) + shift) = 1.0;
     if (f.layout.varies(layer)) {
-      out.col(f.logVelocity(layer)).segment(f.layout.deviation(layer), f.layout.velocityKnots) = mean;
+      out.col(f.logVelocity(layer) + shift).segment(f.layout.deviation(layer), f.layout.velocityKnots) = mean;
     }
   }
   for (int s = 0; s < f.layout.delays; ++s) {
-    out(f.layout.delay(s), f.delay(s)) = 1.0;
+    out(f.layout.delay(s), f.delay(s) + shift) = 1.0;
   }
+  return out;
+}
+
+Eigen::VectorXd allVariances(const SectionFunctionals& f, const Eigen::VectorXd& ofColumns) {
+  Eigen::VectorXd out(f.count());
+  const int anchors = static_cast<int>(f.anchors.size());
+  for (int k = 1; k <= f.layout.interfaces(); ++k) {
+    const Eigen::VectorXd sigma = ofColumns.segment((k - 1) * anchors, anchors).cwiseSqrt();
+    for (int a = 0; a + 1 < anchors; ++a) {
+      const int gap = f.anchors[a + 1] - f.anchors[a];
+      for (int i = 0; i <= gap; ++i) {
+        const double s = sigma[a] + (sigma[a + 1] - sigma[a]) * i / gap;
+        out[f.elevation(k, f.anchors[a] + i)] = s * s;
+      }
+    }
+  }
+  const int rest = f.count() - f.slope(1);
+  out.tail(rest) = ofColumns.tail(rest);
   return out;
 }
 

@@ -10,7 +10,6 @@ namespace {
 
 constexpr double kLongestLogVelocityStep = 0.5;
 constexpr int kHalvings = 5;
-constexpr double kEnough = 1e-3;        // change of the objective, in nats
 constexpr double kNothingToGain = 0.5;  // nats that the linearised problem promises and the kinks in it deny
 constexpr double kShareFelt = 1e-3;
 constexpr double kDoubtReach = 8.0;  // scaled sigmas; layers further apart do not compete for a pick
@@ -203,7 +202,7 @@ double SectionInversion::hoped(const SectionFit& fit) const {
   return 0.5 * (fit.factor.matrixU() * step).squaredNorm();
 }
 
-bool SectionInversion::iterate(int steps) {
+bool SectionInversion::iterate(int steps, double enough) {
   for (int step = 0; step < steps; ++step) {
     const SectionFit fit = linearise().fit(state_.choice);
     const Eigen::VectorXd& goal = fit.xi;
@@ -224,7 +223,7 @@ bool SectionInversion::iterate(int steps) {
     if (!moved) {
       return hoped(fit) < kNothingToGain;
     }
-    if (whole && gain < kEnough) {
+    if (whole && gain < enough) {
       return true;
     }
   }

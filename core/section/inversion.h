@@ -52,8 +52,8 @@ class SectionInversion {
  public:
   SectionInversion(const SectionProblem& problem, const SectionPrior& prior, SectionState state);
 
-  /// At most `steps` steps; true when it has converged.
-  bool iterate(int steps);
+  /// At most `steps` steps; true when the last one gained less than `enough` nats.
+  bool iterate(int steps, double enough = 1e-3);
   /// Replaces the state and predicts anew.
   void restart(SectionState state);
   /// The problem linearised where it stands, picks weighted as they are now.

@@ -44,8 +44,9 @@ struct ProgressPart {
   }
 };
 
-/// Inverts for one number of layers from several starts. One layer means: no refractor at all.
-SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& times, int layers,
+/// Inverts for one number of layers from several starts. One layer means: no refractor at all. What falls far short
+/// of the log evidence `toBeat` is left unfinished, without fits.
+SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& times, int layers, double toBeat,
                              const ProgressPart& progress);
 
 }  // namespace strikeplate

@@ -62,7 +62,9 @@ SectionPrior::SectionPrior(const SectionGrid& grid, const SectionLayout& layout,
       lineLength_(grid.length()),
       knotSpacing_(grid.knotSpacing),
       firstSigma_(centre.firstSigma),
-      otherSigma_(centre.logVelocitySigma) {
+      otherSigma_(centre.logVelocitySigma),
+      knotX_(grid.knotX),
+      centre_(0.5 * (grid.lineStart + grid.lineEnd)) {
   columns_ = velocityColumn(1) + layout.layers + 2 * layout.velocityKnots + layout.delays;
   mean_ = Eigen::VectorXd::Zero(layout.size());
   const Eigen::VectorXd trend = groundTrend(grid);
@@ -72,17 +74,21 @@ SectionPrior::SectionPrior(const SectionGrid& grid, const SectionLayout& layout,
   for (int layer = 1; layer <= layout.layers; ++layer) {
     mean_[layout.logVelocity(layer)] = centre.logVelocity[layer - 1];
   }
-  for (int i = 0; i < kLengths; ++i) {
-    Eigen::MatrixXd unit(layout.knots, layout.knots + 2);
-    unit.col(0).setOnes();
-    unit.col(1) = grid.knotX.array() - 0.5 * (grid.lineStart + grid.lineEnd);
-    unit.rightCols(layout.knots) = factor(grid.knotX, length(i), Kernel::kMatern32);
-    interface_.push_back(std::move(unit));
-  }
   const Eigen::VectorXd x =
       Eigen::VectorXd::LinSpaced(layout.velocityKnots, 0.0, (layout.velocityKnots - 1) * grid.velocitySpacing);
   soil_ = factor(x, kSoilLength * lineLength_, Kernel::kMatern32);
   rock_ = factor(x, kRockLength * lineLength_, Kernel::kMatern12);
+}
+
+const Eigen::MatrixXd& SectionPrior::interfaceFactor(int lengthChoice) const {
+  Eigen::MatrixXd& unit = interface_[lengthChoice];
+  if (unit.size() == 0) {
+    unit.resize(layout_.knots, layout_.knots + 2);
+    unit.col(0).setOnes();
+    unit.col(1) = knotX_.array() - centre_;
+    unit.rightCols(layout_.knots) = factor(knotX_, length(lengthChoice), Kernel::kMatern32);
+  }
+  return unit;
 }
 
 double SectionPrior::roughness(int choice) const {
@@ -135,7 +141,7 @@ Eigen::VectorXd SectionPrior::apply(const HyperChoice& choice, const Eigen::Vect
   const int knots = layout_.knots;
   for (int k = 1; k <= layout_.interfaces(); ++k) {
     theta.segment(layout_.elevation(k), knots) +=
-        interface_[choice.length[k - 1]] * y.segment(firstColumn(k), knots + 2);
+        interfaceFactor(choice.length[k - 1]) * y.segment(firstColumn(k), knots + 2);
   }
   const int n = layout_.velocityKnots;
   int at = velocityColumn(1);
@@ -153,7 +159,7 @@ Eigen::MatrixXd SectionPrior::transposed(const HyperChoice& choice, const Eigen:
   const int knots = layout_.knots;
   for (int k = 1; k <= layout_.interfaces(); ++k) {
     out.middleRows(firstColumn(k), knots + 2).noalias() =
-        interface_[choice.length[k - 1]].transpose() * v.middleRows(layout_.elevation(k), knots);
+        interfaceFactor(choice.length[k - 1]).transpose() * v.middleRows(layout_.elevation(k), knots);
   }
   const int n = layout_.velocityKnots;
   int at = velocityColumn(1);

@@ -75,7 +75,11 @@ class SectionPrior {
   double otherSigma_;
   int columns_;
   Eigen::VectorXd mean_;
-  std::vector<Eigen::MatrixXd> interface_;  // one for each length
+  const Eigen::MatrixXd& interfaceFactor(int lengthChoice) const;
+
+  Eigen::VectorXd knotX_;
+  double centre_;
+  mutable std::array<Eigen::MatrixXd, kLengths> interface_;  // made when first asked for
   Eigen::MatrixXd soil_;
   Eigen::MatrixXd rock_;
 };

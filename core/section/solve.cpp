@@ -63,7 +63,7 @@ class LayerSearch {
     for (int layers = first; layers <= last; ++layers) {
       const double n = last - first + 1.0;
       SectionCandidate c =
-          solveLayers(problem_, times_, layers, {&progress_, (layers - first) / n, (layers - first + 1) / n});
+          solveLayers(problem_, times_, layers, best, {&progress_, (layers - first) / n, (layers - first + 1) / n});
       const bool stands = c.stands();
       const double evidence = stands ? c.logEvidence() : -std::numeric_limits<double>::infinity();
       finished_ = finished_ && c.finished;
@@ -122,7 +122,7 @@ Section solveSection(const TravelTimes& times, const SectionOptions& options, co
     return s;
   }
   if (!anyHeldDeeper(times)) {
-    const SectionCandidate one = solveLayers(problem, times, 1, {});
+    const SectionCandidate one = solveLayers(problem, times, 1, best->logEvidence(), {});
     if (one.stands() && one.logEvidence() > best->logEvidence()) {
       return undeterminedSection(times, whyOneBranch(search.first()));
     }
