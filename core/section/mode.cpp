@@ -220,6 +220,8 @@ void approachAll(SectionCandidate& candidate, const SectionProblem& problem,
   std::string why;
   for (std::size_t i = 0; i < starts.size(); ++i) {
     if (!progress.at(0.6 * static_cast<double>(i) / static_cast<double>(starts.size()))) {
+      candidate.finished = false;
+      why = "it was stopped early";
       break;
     }
     SectionMode mode = approach(problem, prior, startState(problem, *prior, candidate.centre, starts[i]));
@@ -265,7 +267,8 @@ SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& t
   std::erase_if(out.modes, [best](const SectionMode& m) { return m.logEvidence < best - kLogModeHope; });
   out.modes.resize(std::min<std::size_t>(out.modes.size(), kMostModes));
   for (std::size_t i = 0; i < out.modes.size(); ++i) {
-    out.finished = progress.at(0.6 + 0.4 * static_cast<double>(i) / static_cast<double>(out.modes.size()));
+    out.finished =
+        out.finished && progress.at(0.6 + 0.4 * static_cast<double>(i) / static_cast<double>(out.modes.size()));
     finish(out.modes[i], layers);
     if (!out.finished) {
       out.modes.resize(i + 1);
