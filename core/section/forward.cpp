@@ -42,7 +42,7 @@ double lengthUnderGround(const Ground& ground, SectionPoint a, SectionPoint b) {
 /// Best way over nodes of each pick along interface k.
 class NodeSearch {
  public:
-  NodeSearch(const SectionModel& model, int k, const HullTable& hull) : model_(model), along_(hull.lengths()) {
+  NodeSearch(const SectionModel& model, int k, Eigen::MatrixXd lengths) : model_(model), along_(std::move(lengths)) {
     const int n = model.grid->nodes;
     if (!model.layout.varies(k + 1)) {
       along_ *= model.slowness[k][0];
@@ -92,8 +92,8 @@ class NodeSearch {
 
 std::vector<HeadWave> headWaves(const SectionModel& model, int k, const SectionPicks& picks,
                                 const std::vector<Descent>& shots, const std::vector<Descent>& geophones) {
-  const HullTable hull(model.z[k], model.grid->nodeSpacing);
-  NodeSearch search(model, k, hull);
+  HullTable hull(model.z[k], model.grid->nodeSpacing);
+  NodeSearch search(model, k, hull.takeLengths());
   std::vector<HeadWave> out(picks.picks.size());
   int shot = -1;
   for (int i = 0; i < picks.count(); ++i) {

@@ -176,7 +176,7 @@ LinearisedPosterior SectionInversion::linearise() const {
     const double r = p.time - expected(i);
     picks.add(row, r + row.dot(fromMean), noise.weight(r / (s * p.sigma)) / (p.sigma * p.sigma));
   }
-  NormalEquations exact(layout.size());
+  NormalEquations exact(problem_->boreholes.empty() ? 0 : layout.size());
   for (const Borehole& b : problem_->boreholes) {
     if (b.layer > layout.layers) {
       continue;

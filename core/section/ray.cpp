@@ -123,6 +123,9 @@ bool leastLowest(const SectionModel& model, const Leg& leg, int k, std::array<do
     const OnSegment s = leastOnSegment({above, leg.target, ua, ub}, node, onInterface(model, k, near), 0.0);
     bestTime = s.time;
     c[k - 1] = leg.node + leg.direction * s.t;
+    if (s.t > 0.0) {
+      return false;
+    }
   }
   if (far == leg.node) {
     return false;
