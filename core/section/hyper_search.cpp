@@ -25,11 +25,13 @@ std::vector<Coordinate> coordinates(HyperChoice& choice, const SectionPrior& pri
   std::vector<Coordinate> out;
   for (int k = 0; k < prior.layout().interfaces(); ++k) {
     out.push_back({&choice.roughness[k], 0, SectionPrior::kRoughnesses});
-    out.push_back({&choice.length[k], 0, SectionPrior::kLengths});
+    if (limits.all) {
+      out.push_back({&choice.length[k], 0, SectionPrior::kLengths});
+    }
   }
   out.push_back({&choice.noise, limits.leastNoise, SectionPrior::kNoises});
   out.push_back({&choice.soil, 0, SectionPrior::kDeviations});
-  if (prior.layout().interfaces() > 0 && limits.rock) {
+  if (prior.layout().interfaces() > 0 && limits.all) {
     out.push_back({&choice.rock, 0, SectionPrior::kDeviations});
   }
   return out;

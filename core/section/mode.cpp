@@ -8,6 +8,9 @@ namespace {
 
 constexpr int kMostStarts = 3;
 constexpr int kMovedStartsBelow = 200;  // picks; larger surveys need no moved crossovers
+constexpr int kSmallSurvey = 120;       // picks; few enough that a layer may own a handful, so more ways are tried
+constexpr int kMostStartsSmall = 8;
+constexpr std::size_t kMostModesSmall = 5;
 constexpr int kMostFits = 40;
 constexpr int kMostRounds = 6;
 constexpr int kLeastRounds = 2;  // the doubt of labels settles in two
@@ -71,8 +74,9 @@ PriorCentre centreOf(const SectionProblem& problem, const LineStart& start) {
 }
 
 std::vector<LineStart> startsFor(const TravelTimes& times, int layers) {
-  std::vector<LineStart> starts = lineStarts(times, layers, kMostStarts);
-  if (!starts.empty() && layers > 1 && static_cast<int>(times.arrivals.size()) < kMovedStartsBelow) {
+  const int picks = static_cast<int>(times.arrivals.size());
+  std::vector<LineStart> starts = lineStarts(times, layers, picks < kSmallSurvey ? kMostStartsSmall : kMostStarts);
+  if (!starts.empty() && layers > 1 && picks < kMovedStartsBelow) {
     const LineStart best = starts.front();
     starts.push_back(withCrossoversMoved(times, best, 0.6));
     starts.push_back(withCrossoversMoved(times, best, 1.6));
@@ -100,11 +104,11 @@ int leastNoise(const SectionInversion& inversion) {
 
 /// Searches the hyperparameters where the inversion stands and moves it to the best ones' mean. True when they have
 /// changed.
-bool learn(SectionInversion& inversion, bool rock, int sweeps) {
+bool learn(SectionInversion& inversion, bool all, int sweeps) {
   SectionState next = inversion.state();
   const HyperChoice before = next.choice;
   const LinearisedPosterior posterior = inversion.linearise();
-  next.choice = searchHyper(posterior, next.choice, {leastNoise(inversion), rock}, sweeps);
+  next.choice = searchHyper(posterior, next.choice, {leastNoise(inversion), all}, sweeps);
   const bool changed = next.choice != before;
   if (changed) {
     next.xi = posterior.fit(next.choice).xi;
@@ -265,7 +269,7 @@ SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& t
     return out;
   }
   std::erase_if(out.modes, [best](const SectionMode& m) { return m.logEvidence < best - kLogModeHope; });
-  out.modes.resize(std::min<std::size_t>(out.modes.size(), kMostModes));
+  out.modes.resize(std::min(out.modes.size(), problem.picks.count() < kSmallSurvey ? kMostModesSmall : kMostModes));
   for (std::size_t i = 0; i < out.modes.size(); ++i) {
     out.finished =
         out.finished && progress.at(0.6 + 0.4 * static_cast<double>(i) / static_cast<double>(out.modes.size()));
