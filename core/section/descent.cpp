@@ -29,7 +29,7 @@ Descent toFirst(const SectionModel& model, const std::vector<SectionPoint>& stat
       const int j = w.first + static_cast<int>(i);
       const double dx = grid.nodeX[j] - s.x;
       const double dy = model.z[1][j] - s.y;
-      w.time[i] = std::sqrt(dx * dx + dy * dy) * model.meanSlowness(1, s.x, grid.nodeX[j]);
+      w.time[i] = model.firstLayer(s, {grid.nodeX[j], model.z[1][j]}, std::sqrt(dx * dx + dy * dy)).time;
     }
     out.windows.push_back(std::move(w));
   }

@@ -134,8 +134,8 @@ SectionForward::SectionForward(SectionModel model, const SectionPicks& picks)
   direct_.reserve(picks.picks.size());
   for (int i = 0; i < picks.count(); ++i) {
     const SectionPick& p = picks.picks[i];
-    direct_.push_back(picks.directLength[i] *
-                      model_.meanSlowness(1, picks.shots[p.shot].x, picks.geophones[p.geophone].x));
+    direct_.push_back(
+        model_.firstLayer(picks.shots[p.shot], picks.geophones[p.geophone], picks.directLength[i]).time);
   }
   if (model_.layout.interfaces() == 0) {
     return;

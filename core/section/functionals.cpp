@@ -22,12 +22,17 @@ Eigen::VectorXd meanWeights(const SectionGrid& grid) {
   return w;
 }
 
+/// Depth half-way down the first layer, mean over the line, m.
+double halfWay(const SectionFunctionals& f, const SectionModel& model) {
+  return 0.5 * (model.z[0] - model.z[1]).segment(f.firstNode, f.nodeCount).mean();
+}
+
 }  // namespace
 
-SectionFunctionals functionalsOf(const SectionProblem& problem, int layers) {
+SectionFunctionals functionalsOf(const SectionProblem& problem, const SectionLayout& layout) {
   const SectionGrid& grid = problem.grid;
   SectionFunctionals f;
-  f.layout = problem.layout(layers);
+  f.layout = layout;
   f.firstNode = std::max(0, static_cast<int>(std::floor(grid.coordinate(grid.lineStart) + 1e-9)));
   const int last = std::min(grid.nodes - 1, static_cast<int>(std::ceil(grid.coordinate(grid.lineEnd) - 1e-9)));
   f.nodeCount = last - f.firstNode + 1;
@@ -56,6 +61,9 @@ Eigen::VectorXd functionalValues(const SectionProblem& problem, const SectionFun
     double v = theta[f.layout.logVelocity(layer)];
     if (f.layout.varies(layer)) {
       v += mean.dot(theta.segment(f.layout.deviation(layer), f.layout.velocityKnots));
+    }
+    if (layer == 1 && f.layout.gradient) {
+      v += std::log1p(model.gradient * halfWay(f, model) * std::exp(-v));
     }
     out[f.logVelocity(layer)] = v;
   }
@@ -94,6 +102,13 @@ Eigen::MatrixXd functionalDerivatives(const SectionProblem& problem, const Secti
     if (f.layout.varies(layer)) {
       out.col(f.logVelocity(layer) + shift).segment(f.layout.deviation(layer), f.layout.velocityKnots) = mean;
     }
+  }
+  if (f.layout.gradient) {
+    // ln(v_0 + k h): the share of v_0 goes to its unknowns, the rest to the gradient.
+    const int column = f.logVelocity(1) + shift;
+    const double grown = model.gradient * halfWay(f, model) * model.slowness[0].mean();
+    out.col(column) /= 1.0 + grown;
+    out(f.layout.gradientIndex(), column) = grown / (1.0 + grown) / model.gradient * model.gradientSlope;
   }
   for (int s = 0; s < f.layout.delays; ++s) {
     out(f.layout.delay(s), f.delay(s) + shift) = 1.0;

@@ -9,7 +9,8 @@
 namespace strikeplate {
 
 /// The quantities of a section that get an interval, as functions of the unknowns: elevation of each interface at
-/// the nodes first ... first + count - 1, slope of each interface, mean log velocity of each layer, delays.
+/// the nodes first ... first + count - 1, slope of each interface, mean log velocity of each layer (half-way down the
+/// first layer if it grows with depth), delays.
 /// Derivatives of elevations are made at the `anchors` only, the nodes at which knots lie; standard deviations are
 /// straight in between.
 struct SectionFunctionals {
@@ -25,7 +26,7 @@ struct SectionFunctionals {
   [[nodiscard]] int count() const { return delay(layout.delays); }
 };
 
-SectionFunctionals functionalsOf(const SectionProblem& problem, int layers);
+SectionFunctionals functionalsOf(const SectionProblem& problem, const SectionLayout& layout);
 
 /// Their values at theta.
 Eigen::VectorXd functionalValues(const SectionProblem& problem, const SectionFunctionals& f,

@@ -9,6 +9,12 @@
 
 namespace strikeplate {
 
+/// A place in the vertical plane of the line, m; y is elevation.
+struct SectionPoint {
+  double x = 0.0;
+  double y = 0.0;
+};
+
 /// Where the unknowns of a section live along the line.
 ///
 /// Interfaces are unknown at *knots*, one geophone spacing apart between the outermost geophones and three beyond,

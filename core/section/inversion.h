@@ -19,8 +19,8 @@ struct SectionProblem {
   std::vector<Borehole> boreholes;  ///< only those that enter as data
   bool solveDelays = false;
 
-  [[nodiscard]] SectionLayout layout(int layers) const {
-    return {layers, grid.knots, grid.velocityKnots, solveDelays ? static_cast<int>(picks.shots.size()) : 0};
+  [[nodiscard]] SectionLayout layout(int layers, bool gradient = false) const {
+    return {layers, grid.knots, grid.velocityKnots, solveDelays ? static_cast<int>(picks.shots.size()) : 0, gradient};
   }
 };
 

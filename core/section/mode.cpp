@@ -20,7 +20,9 @@ constexpr double kLogModeWorth = -4.0;
 constexpr double kLogModeHope = 6.0;   // an unfinished mode so far behind the best one is given up
 constexpr double kLogHopeless = 10.0;  // a number of layers so far behind another one is not finished
 constexpr std::size_t kMostModes = 2;
-constexpr double kRoughly = 0.3;  // nats
+constexpr double kLogAskedFor = 1.0;   // a gradient cannot be negative, so where there is none it would only bias
+constexpr double kSlowerOnTop = 0.15;  // of the logarithm of velocity
+constexpr double kRoughly = 0.3;       // nats
 
 constexpr double kLogLayerPenalty = 1.0986122886681098;  // ln 3
 constexpr double kFirstVelocity = 450.0;                 // m/s, where next to no direct arrival was picked
@@ -281,6 +283,31 @@ SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& t
   weighModes(out.modes);
   out.rejected = whyNot(*out.modes.front().inversion);
   return out;
+}
+
+void addGradient(const SectionProblem& problem, SectionCandidate& candidate) {
+  const SectionInversion& plain = *candidate.modes.front().inversion;
+  const auto prior =
+      std::make_shared<const SectionPrior>(problem.grid, problem.layout(candidate.layers, true), candidate.centre);
+  SectionState start = plain.state();
+  start.xi.conservativeResize(prior->columns());
+  start.xi.tail(1).setZero();
+  start.xi[prior->velocityColumn(1)] -= kSlowerOnTop / prior->scales(start.choice)[prior->velocityColumn(1)];
+  start.doubt.clear();
+  SectionMode mode;
+  mode.prior = prior;
+  mode.inversion = std::make_shared<SectionInversion>(problem, *prior, std::move(start));
+  mode.inversion->iterate(8, kRoughly);
+  const double soFar = evidenceNow(*mode.inversion) - (candidate.layers + 1) * kLogLayerPenalty;
+  if (!(soFar > candidate.logEvidence() - kLogModeHope) || !whyNot(*mode.inversion).empty()) {
+    return;
+  }
+  finish(mode, candidate.layers + 1);
+  if (!(mode.logEvidence > candidate.logEvidence() + kLogAskedFor) || !whyNot(*mode.inversion).empty()) {
+    return;
+  }
+  candidate.modes.push_back(std::move(mode));
+  weighModes(candidate.modes);
 }
 
 }  // namespace strikeplate

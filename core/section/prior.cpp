@@ -10,7 +10,9 @@ namespace {
 
 constexpr double kPlaneDepthSigma = 0.2;  // line lengths
 constexpr double kSlopeSigma = 0.15;
-constexpr double kDelaySigma = 3e-3;  // s
+constexpr double kDelaySigma = 3e-3;     // s
+constexpr double kGradientMean = 20.0;   // 1/s
+constexpr double kGradientSigma = 40.0;  // 1/s
 constexpr double kLogNoiseSigma = 0.7;
 constexpr double kNoiseStep = 1.15;
 constexpr int kNoiseUnit = 23;       // choice at which the stated sigmas are right
@@ -65,7 +67,7 @@ SectionPrior::SectionPrior(const SectionGrid& grid, const SectionLayout& layout,
       otherSigma_(centre.logVelocitySigma),
       knotX_(grid.knotX),
       centre_(0.5 * (grid.lineStart + grid.lineEnd)) {
-  columns_ = velocityColumn(1) + layout.layers + 2 * layout.velocityKnots + layout.delays;
+  columns_ = velocityColumn(1) + layout.layers + 2 * layout.velocityKnots + layout.delays + (layout.gradient ? 1 : 0);
   mean_ = Eigen::VectorXd::Zero(layout.size());
   const Eigen::VectorXd trend = groundTrend(grid);
   for (int k = 1; k <= layout.interfaces(); ++k) {
@@ -73,6 +75,9 @@ SectionPrior::SectionPrior(const SectionGrid& grid, const SectionLayout& layout,
   }
   for (int layer = 1; layer <= layout.layers; ++layer) {
     mean_[layout.logVelocity(layer)] = centre.logVelocity[layer - 1];
+  }
+  if (layout.gradient) {
+    mean_[layout.gradientIndex()] = kGradientMean;
   }
   const Eigen::VectorXd x =
       Eigen::VectorXd::LinSpaced(layout.velocityKnots, 0.0, (layout.velocityKnots - 1) * grid.velocitySpacing);
@@ -131,7 +136,10 @@ Eigen::VectorXd SectionPrior::scales(const HyperChoice& choice) const {
   at += layout_.layers;
   s.segment(at, layout_.velocityKnots).setConstant(deviation(choice.soil));
   s.segment(at + layout_.velocityKnots, layout_.velocityKnots).setConstant(deviation(choice.rock));
-  s.tail(layout_.delays).setConstant(kDelaySigma);
+  s.segment(at + 2 * layout_.velocityKnots, layout_.delays).setConstant(kDelaySigma);
+  if (layout_.gradient) {
+    s[columns_ - 1] = kGradientSigma;
+  }
   return s;
 }
 
@@ -150,7 +158,8 @@ Eigen::VectorXd SectionPrior::apply(const HyperChoice& choice, const Eigen::Vect
   const int deviations = layout_.logVelocity(layout_.layers) + 1;
   theta.segment(deviations, n) += soil_ * y.segment(at, n);
   theta.segment(deviations + n, n) += rock_ * y.segment(at + n, n);
-  theta.tail(layout_.delays) += y.tail(layout_.delays);
+  const int rest = layout_.delays + (layout_.gradient ? 1 : 0);
+  theta.tail(rest) += y.tail(rest);
   return theta;
 }
 
@@ -168,7 +177,8 @@ Eigen::MatrixXd SectionPrior::transposed(const HyperChoice& choice, const Eigen:
   const int deviations = layout_.logVelocity(layout_.layers) + 1;
   out.middleRows(at, n).noalias() = soil_.transpose() * v.middleRows(deviations, n);
   out.middleRows(at + n, n).noalias() = rock_.transpose() * v.middleRows(deviations + n, n);
-  out.bottomRows(layout_.delays) = v.bottomRows(layout_.delays);
+  const int rest = layout_.delays + (layout_.gradient ? 1 : 0);
+  out.bottomRows(rest) = v.bottomRows(rest);
   return out;
 }
 

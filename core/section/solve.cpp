@@ -127,6 +127,9 @@ Section solveSection(const TravelTimes& times, const SectionOptions& options, co
       return undeterminedSection(times, whyOneBranch(search.first()));
     }
   }
+  if (search.finished()) {
+    addGradient(problem, *best);
+  }
   Section s = assembleSection(problem, times, options, *best);
   s.layerCounts = search.evidences(*best);
   s.finished = search.finished();
@@ -148,8 +151,8 @@ Section resolveSection(const TravelTimes& times, const SectionOptions& options, 
   candidate.layers = memory.layers;
   candidate.centre = recalled->centre;
   SectionMode mode;
-  const auto prior =
-      std::make_shared<const SectionPrior>(problem.grid, problem.layout(memory.layers), recalled->centre);
+  const auto prior = std::make_shared<const SectionPrior>(
+      problem.grid, problem.layout(memory.layers, recalled->gradient), recalled->centre);
   if (recalled->xi.size() != prior->columns()) {
     return solveSection(times, options);
   }
