@@ -20,7 +20,7 @@ constexpr double kLogModeWorth = -4.0;
 constexpr double kLogModeHope = 6.0;   // an unfinished mode so far behind the best one is given up
 constexpr double kLogHopeless = 10.0;  // a number of layers so far behind another one is not finished
 constexpr std::size_t kMostModes = 2;
-constexpr double kLogAskedFor = 1.0;   // a gradient cannot be negative, so where there is none it would only bias
+constexpr double kLogAskedFor = 3.0;   // a gradient cannot be negative, so where there is none it would only bias
 constexpr double kSlowerOnTop = 0.15;  // of the logarithm of velocity
 constexpr double kRoughly = 0.3;       // nats
 
@@ -126,12 +126,6 @@ void freeLabels(SectionInversion& inversion) {
   inversion.restart(std::move(next));
 }
 
-void doubtLabels(SectionInversion& inversion) {
-  SectionState next = inversion.state();
-  next.doubt = inversion.measureDoubt();
-  inversion.restart(std::move(next));
-}
-
 /// ln evidence where the inversion stands, hyperparameters held.
 double evidenceNow(const SectionInversion& inversion) {
   const SectionFit fit = inversion.linearise().fit(inversion.state().choice);
@@ -146,7 +140,7 @@ void finish(SectionMode& mode, int layers) {
     if (!changed && round >= kLeastRounds) {
       break;
     }
-    doubtLabels(inversion);
+    inversion.setDoubt(inversion.measureDoubt());
     mode.converged = inversion.iterate(8);
   }
   const LinearisedPosterior posterior = inversion.linearise();

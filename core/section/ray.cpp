@@ -10,6 +10,9 @@ namespace strikeplate {
 namespace {
 
 constexpr double kTouching = 1e-9;  // m
+// Times are stationary in the crossings, so these leave errors of their squares.
+constexpr double kCloseEnough = 1e-4;  // of a segment, in Newton's method
+constexpr double kStill = 4e-3;        // nodes, between sweeps over a leg
 
 double distance(SectionPoint a, SectionPoint b) {
   return std::hypot(a.x - b.x, a.y - b.y);
@@ -85,7 +88,7 @@ OnSegment leastOnSegment(const Crossing& c, SectionPoint p0, SectionPoint p1, do
     }
     const double move = std::abs(next - t);
     t = next;
-    if (move < 1e-5) {
+    if (move < kCloseEnough) {
       break;
     }
   }
@@ -191,7 +194,7 @@ bool refineLeg(const SectionModel& model, const Leg& leg, int k, std::array<doub
     for (int i = 0; i < k; ++i) {
       move = std::max(move, std::abs(c[i] - old[i]));
     }
-    if (move < 1e-3) {
+    if (move < kStill) {
       break;
     }
   }
@@ -244,10 +247,14 @@ void refineHeadWave(const SectionModel& model, const HullTable& hull, SectionPoi
     bool entryBends = false;
     bool exitBends = false;
     for (int round = 0; round < rounds; ++round) {
+      const double before = wave.up[k - 1];
       const SectionPoint first = onInterface(model, k, wave.bends.empty() ? wave.up[k - 1] : wave.bends.front());
       entryBends = refineLeg(model, {shot, first, entry, direction}, k, wave.down);
       const SectionPoint last = onInterface(model, k, wave.bends.empty() ? wave.down[k - 1] : wave.bends.back());
       exitBends = refineLeg(model, {geophone, last, exit, -direction}, k, wave.up);
+      if (round > 0 && std::abs(wave.up[k - 1] - before) < kStill) {
+        break;
+      }
     }
     if (entryBends) {
       wave.bends.insert(wave.bends.begin(), entry);

@@ -15,6 +15,8 @@ namespace {
 
 constexpr int kMostLayersTried = 5;  // by evidence; more only when asked for
 constexpr int kLiveSteps = 2;
+constexpr int kLiveHalvings = 2;
+constexpr double kLiveEnough = 0.02;  // nats
 
 SectionProblem problemOf(const TravelTimes& times, const SectionOptions& options) {
   SectionProblem p;
@@ -163,11 +165,9 @@ Section resolveSection(const TravelTimes& times, const SectionOptions& options, 
   state.labelsFree = true;
   state.noise = PickNoise::Shape::kMixture;
   mode.prior = prior;
-  mode.inversion = std::make_shared<SectionInversion>(problem, *prior, state);
-  state = mode.inversion->state();
-  state.doubt = mode.inversion->measureDoubt();
-  mode.inversion->restart(std::move(state));
-  mode.converged = mode.inversion->iterate(kLiveSteps);
+  mode.inversion = std::make_shared<SectionInversion>(problem, *prior, std::move(state));
+  mode.inversion->setDoubt(mode.inversion->measureDoubt());
+  mode.converged = mode.inversion->iterate(kLiveSteps, kLiveEnough, kLiveHalvings);
   const LinearisedPosterior posterior = mode.inversion->linearise();
   for (const auto& [choice, weight] : recalled->choices) {
     mode.fits.push_back({posterior.fit(choice), weight});
