@@ -45,12 +45,14 @@ struct Posterior {
   Eigen::VectorXd theta;  ///< mean of the unknowns
 };
 
-Posterior mix(const SectionProblem& problem, const SectionFunctionals& f, const SectionCandidate& candidate) {
+Posterior mix(const SectionProblem& problem, const SectionCandidate& candidate) {
+  const SectionLayout& best = candidate.modes.front().prior->layout();
   Posterior out;
-  out.functionals.resize(f.count());
-  out.theta = Eigen::VectorXd::Zero(f.layout.size());
+  out.functionals.resize(functionalsOf(problem, best).count());
+  out.theta = Eigen::VectorXd::Zero(best.size());
   double sum = 0.0;
   for (const SectionMode& mode : candidate.modes) {
+    const SectionFunctionals f = functionalsOf(problem, mode.prior->layout());
     const Eigen::MatrixXd rows = functionalDerivatives(problem, f, mode.inversion->forward().model());
     std::array<int, kMostLayers - 1> lengths{};
     Eigen::MatrixXd transposed;
@@ -63,14 +65,16 @@ Posterior mix(const SectionProblem& problem, const SectionFunctionals& f, const 
         lengths = w.fit.choice.length;
         transposed = mode.prior->transposed(w.fit.choice, rows);
       }
-      const Eigen::VectorXd variances = w.fit.variances(*mode.prior, transposed);
+      const Eigen::VectorXd variances = allVariances(f, w.fit.variances(*mode.prior, transposed));
       const Eigen::VectorXd theta = mode.prior->apply(w.fit.choice, w.fit.xi);
       const Eigen::VectorXd values = functionalValues(problem, f, theta);
       for (int i = 0; i < f.count(); ++i) {
         out.functionals[i].add(weight, values[i], variances[i]);
       }
-      out.theta += weight * theta;
-      sum += weight;
+      if (f.layout.gradient == best.gradient) {
+        out.theta += weight * theta;
+        sum += weight;
+      }
     }
   }
   out.theta /= sum;
@@ -153,7 +157,11 @@ void addVelocities(Section& s, const SectionProblem& problem, const SectionFunct
         e, [](double v) { return std::exp(v); }, std::exp(e.value), true));
     std::vector<double> along;
     for (const double x : s.x) {
-      along.push_back(1.0 / problem.grid.at(model.slowness[layer - 1], x));
+      double v = 1.0 / problem.grid.at(model.slowness[layer - 1], x);
+      if (layer == 1) {
+        v += model.gradient * 0.5 * (problem.grid.at(model.z[0], x) - problem.grid.at(model.z[1], x));
+      }
+      along.push_back(v);
     }
     s.velocityAlong.push_back(std::move(along));
   }
@@ -193,9 +201,9 @@ void addPicks(Section& s, const SectionProblem& problem, const SectionCandidate&
     squares += r * r;
   }
   s.rms = std::sqrt(squares / count);
-  RowGatherer gatherer(best.prior().layout().size());
   for (const SectionMode& mode : candidate.modes) {
     const SectionInversion& inversion = *mode.inversion;
+    RowGatherer gatherer(mode.prior->layout().size());
     const Eigen::MatrixXd covariance = mode.fits.front().fit.covariance(*mode.prior);
     const double scale = SectionPrior::noise(inversion.state().choice.noise);
     for (int i = 0; i < count; ++i) {
@@ -224,8 +232,8 @@ Section assembleSection(const SectionProblem& problem, const TravelTimes& times,
   for (const double x : s.x) {
     s.ground.push_back(times.ground.at(x));
   }
-  const SectionFunctionals f = functionalsOf(problem, candidate.layers);
-  const Posterior posterior = mix(problem, f, candidate);
+  const SectionFunctionals f = functionalsOf(problem, candidate.modes.front().prior->layout());
+  const Posterior posterior = mix(problem, candidate);
   for (int k = 1; k < candidate.layers; ++k) {
     s.interfaces.push_back(interfaceOf(s, problem, f, posterior, k));
   }

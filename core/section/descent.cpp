@@ -29,7 +29,7 @@ Descent toFirst(const SectionModel& model, const std::vector<SectionPoint>& stat
       const int j = w.first + static_cast<int>(i);
       const double dx = grid.nodeX[j] - s.x;
       const double dy = model.z[1][j] - s.y;
-      w.time[i] = std::sqrt(dx * dx + dy * dy) * model.meanSlowness(1, s.x, grid.nodeX[j]);
+      w.time[i] = model.firstLayer(s, {grid.nodeX[j], model.z[1][j]}, std::sqrt(dx * dx + dy * dy)).time;
     }
     out.windows.push_back(std::move(w));
   }
@@ -40,15 +40,16 @@ Descent toFirst(const SectionModel& model, const std::vector<SectionPoint>& stat
 Eigen::MatrixXd crossTimes(const SectionModel& model, int k) {
   const int n = model.grid->nodes;
   const double h = model.grid->nodeSpacing;
+  const double u = model.slowness[k - 1][0];
   Eigen::MatrixXd t(n, n);
   for (int j = 0; j < n; ++j) {
     for (int i = 0; i < n; ++i) {
       const double dx = (j - i) * h;
       const double dy = model.z[k][j] - model.z[k - 1][i];
-      t(i, j) = std::sqrt(dx * dx + dy * dy);
+      t(i, j) = u * std::sqrt(dx * dx + dy * dy);
     }
   }
-  return t * model.slowness[k - 1][0];
+  return t;
 }
 
 Descent toNext(const SectionModel& model, int k, const std::vector<SectionPoint>& stations, const Descent& above) {

@@ -42,7 +42,7 @@ double lengthUnderGround(const Ground& ground, SectionPoint a, SectionPoint b) {
 /// Best way over nodes of each pick along interface k.
 class NodeSearch {
  public:
-  NodeSearch(const SectionModel& model, int k, const HullTable& hull) : model_(model), along_(hull.lengths()) {
+  NodeSearch(const SectionModel& model, int k, Eigen::MatrixXd lengths) : model_(model), along_(std::move(lengths)) {
     const int n = model.grid->nodes;
     if (!model.layout.varies(k + 1)) {
       along_ *= model.slowness[k][0];
@@ -92,8 +92,8 @@ class NodeSearch {
 
 std::vector<HeadWave> headWaves(const SectionModel& model, int k, const SectionPicks& picks,
                                 const std::vector<Descent>& shots, const std::vector<Descent>& geophones) {
-  const HullTable hull(model.z[k], model.grid->nodeSpacing);
-  NodeSearch search(model, k, hull);
+  HullTable hull(model.z[k], model.grid->nodeSpacing);
+  NodeSearch search(model, k, hull.takeLengths());
   std::vector<HeadWave> out(picks.picks.size());
   int shot = -1;
   for (int i = 0; i < picks.count(); ++i) {
@@ -134,8 +134,8 @@ SectionForward::SectionForward(SectionModel model, const SectionPicks& picks)
   direct_.reserve(picks.picks.size());
   for (int i = 0; i < picks.count(); ++i) {
     const SectionPick& p = picks.picks[i];
-    direct_.push_back(picks.directLength[i] *
-                      model_.meanSlowness(1, picks.shots[p.shot].x, picks.geophones[p.geophone].x));
+    direct_.push_back(
+        model_.firstLayer(picks.shots[p.shot], picks.geophones[p.geophone], picks.directLength[i]).time);
   }
   if (model_.layout.interfaces() == 0) {
     return;

@@ -22,15 +22,27 @@ Eigen::VectorXd meanWeights(const SectionGrid& grid) {
   return w;
 }
 
+/// Depth half-way down the first layer, mean over the line, m.
+double halfWay(const SectionFunctionals& f, const SectionModel& model) {
+  return 0.5 * (model.z[0] - model.z[1]).segment(f.firstNode, f.nodeCount).mean();
+}
+
 }  // namespace
 
-SectionFunctionals functionalsOf(const SectionProblem& problem, int layers) {
+SectionFunctionals functionalsOf(const SectionProblem& problem, const SectionLayout& layout) {
   const SectionGrid& grid = problem.grid;
   SectionFunctionals f;
-  f.layout = problem.layout(layers);
+  f.layout = layout;
   f.firstNode = std::max(0, static_cast<int>(std::floor(grid.coordinate(grid.lineStart) + 1e-9)));
   const int last = std::min(grid.nodes - 1, static_cast<int>(std::ceil(grid.coordinate(grid.lineEnd) - 1e-9)));
   f.nodeCount = last - f.firstNode + 1;
+  f.anchors.push_back(f.firstNode);
+  for (const int node : grid.knotNode) {
+    if (node > f.firstNode && node < last) {
+      f.anchors.push_back(node);
+    }
+  }
+  f.anchors.push_back(last);
   return f;
 }
 
@@ -50,6 +62,9 @@ Eigen::VectorXd functionalValues(const SectionProblem& problem, const SectionFun
     if (f.layout.varies(layer)) {
       v += mean.dot(theta.segment(f.layout.deviation(layer), f.layout.velocityKnots));
     }
+    if (layer == 1 && f.layout.gradient) {
+      v += std::log1p(model.gradient * halfWay(f, model) * std::exp(-v));
+    }
     out[f.logVelocity(layer)] = v;
   }
   for (int s = 0; s < f.layout.delays; ++s) {
@@ -63,29 +78,59 @@ Eigen::MatrixXd functionalDerivatives(const SectionProblem& problem, const Secti
   const SectionGrid& grid = problem.grid;
   const Eigen::VectorXd slope = slopeWeights(problem, f);
   const Eigen::VectorXd mean = meanWeights(grid);
-  Eigen::MatrixXd out = Eigen::MatrixXd::Zero(f.layout.size(), f.count());
-  for (int k = 1; k <= f.layout.interfaces(); ++k) {
-    for (int j = 0; j < f.nodeCount; ++j) {
-      const int node = f.firstNode + j;
-      const SectionGrid::Weights& t = grid.toKnots[node];
-      for (int l = 1; l <= k; ++l) {
-        for (int i = 0; i < 4; ++i) {
-          const double d = model.chain[k][l][node] * t.w[i];
-          out(f.layout.elevation(l) + t.first + i, f.elevation(k, node)) += d;
-          out(f.layout.elevation(l) + t.first + i, f.slope(k)) += slope[j] * d;
-        }
+  const int anchors = static_cast<int>(f.anchors.size());
+  const int shift = f.layout.interfaces() * (anchors - f.nodeCount);  // columns behind the elevations move by this
+  Eigen::MatrixXd out = Eigen::MatrixXd::Zero(f.layout.size(), f.count() + shift);
+  const auto node = [&](int k, int j, int column, double weight) {
+    const SectionGrid::Weights& t = grid.toKnots[j];
+    for (int l = 1; l <= k; ++l) {
+      for (int i = 0; i < 4; ++i) {
+        out(f.layout.elevation(l) + t.first + i, column) += weight * model.chain[k][l][j] * t.w[i];
       }
+    }
+  };
+  for (int k = 1; k <= f.layout.interfaces(); ++k) {
+    for (int a = 0; a < anchors; ++a) {
+      node(k, f.anchors[a], (k - 1) * anchors + a, 1.0);
+    }
+    for (int j = 0; j < f.nodeCount; ++j) {
+      node(k, f.firstNode + j, f.slope(k) + shift, slope[j]);
     }
   }
   for (int layer = 1; layer <= f.layout.layers; ++layer) {
-    out(f.layout.logVelocity(layer), f.logVelocity(layer)) = 1.0;
+    out(f.layout.logVelocity(layer), f.logVelocity(layer) + shift) = 1.0;
     if (f.layout.varies(layer)) {
-      out.col(f.logVelocity(layer)).segment(f.layout.deviation(layer), f.layout.velocityKnots) = mean;
+      out.col(f.logVelocity(layer) + shift).segment(f.layout.deviation(layer), f.layout.velocityKnots) = mean;
     }
   }
-  for (int s = 0; s < f.layout.delays; ++s) {
-    out(f.layout.delay(s), f.delay(s)) = 1.0;
+  if (f.layout.gradient) {
+    // ln(v_0 + k h): the share of v_0 goes to its unknowns, the rest to the gradient.
+    const int column = f.logVelocity(1) + shift;
+    const double grown = model.gradient * halfWay(f, model) * model.slowness[0].mean();
+    out.col(column) /= 1.0 + grown;
+    out(f.layout.gradientIndex(), column) = grown / (1.0 + grown) / model.gradient * model.gradientSlope;
   }
+  for (int s = 0; s < f.layout.delays; ++s) {
+    out(f.layout.delay(s), f.delay(s) + shift) = 1.0;
+  }
+  return out;
+}
+
+Eigen::VectorXd allVariances(const SectionFunctionals& f, const Eigen::VectorXd& ofColumns) {
+  Eigen::VectorXd out(f.count());
+  const int anchors = static_cast<int>(f.anchors.size());
+  for (int k = 1; k <= f.layout.interfaces(); ++k) {
+    const Eigen::VectorXd sigma = ofColumns.segment((k - 1) * anchors, anchors).cwiseSqrt();
+    for (int a = 0; a + 1 < anchors; ++a) {
+      const int gap = f.anchors[a + 1] - f.anchors[a];
+      for (int i = 0; i <= gap; ++i) {
+        const double s = sigma[a] + (sigma[a + 1] - sigma[a]) * i / gap;
+        out[f.elevation(k, f.anchors[a] + i)] = s * s;
+      }
+    }
+  }
+  const int rest = f.count() - f.slope(1);
+  out.tail(rest) = ofColumns.tail(rest);
   return out;
 }
 

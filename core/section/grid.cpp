@@ -8,9 +8,10 @@ namespace strikeplate {
 namespace {
 
 constexpr int kNodesPerKnot = 2;
+constexpr int kFarStride = 3;       // knot spacings between knots where no geophone is near
 constexpr int kMargin = 3;          // knots beyond the outermost station
 constexpr int kMostKnots = 300;     // longer lines get wider spacing
-constexpr int kVelocityKnots = 24;  // about so many along a line, but not denser than every other knot
+constexpr int kVelocityKnots = 16;  // about so many along a line, but not denser than every other knot
 
 std::vector<double> positions(const TravelTimes& times) {
   std::vector<double> x;
@@ -40,11 +41,30 @@ double typicalSpacing(const TravelTimes& times, double length) {
   return std::clamp(gaps[gaps.size() / 2], length / kMostKnots, length / 8.0);
 }
 
-SectionGrid::Weights weightsOf(int node, int knots) {
-  const int k = node / kNodesPerKnot;
-  const double f = static_cast<double>(node % kNodesPerKnot) / kNodesPerKnot;
+/// Knots at every other node near the geophones, at every sixth further out, and at both ends.
+std::vector<int> knotNodes(const TravelTimes& times, const SectionGrid& g) {
+  const double first = times.geophones.front().x - kMargin * g.knotSpacing;
+  const double last = times.geophones.back().x + kMargin * g.knotSpacing;
+  std::vector<int> out;
+  for (int j = 0; j < g.nodes; j += kNodesPerKnot) {
+    const double x = g.start + j * g.nodeSpacing;
+    const bool dense = x >= first && x <= last;
+    if (dense || j == 0 || j + kNodesPerKnot >= g.nodes || j - out.back() >= kFarStride * kNodesPerKnot) {
+      out.push_back(j);
+    }
+  }
+  return out;
+}
+
+/// Weights of a node between knots k and k + 1.
+SectionGrid::Weights weightsOf(const std::vector<int>& knotNode, int k, int node) {
+  const int knots = static_cast<int>(knotNode.size());
+  const int gap = knotNode[k + 1] - knotNode[k];
+  const double f = static_cast<double>(node - knotNode[k]) / gap;
   SectionGrid::Weights weights;
-  if (k >= 1 && k + 2 < knots) {
+  const bool even =
+      k >= 1 && k + 2 < knots && knotNode[k] - knotNode[k - 1] == gap && knotNode[k + 2] - knotNode[k + 1] == gap;
+  if (even) {
     // Keys' kernel with a = -1/2.
     weights.first = k - 1;
     weights.w = {0.5 * f * (-1.0 + f * (2.0 - f)), 1.0 + 0.5 * f * f * (-5.0 + 3.0 * f),
@@ -53,9 +73,7 @@ SectionGrid::Weights weightsOf(int node, int knots) {
   }
   weights.first = std::clamp(k, 0, knots - 4);
   weights.w[k - weights.first] = 1.0 - f;
-  if (f > 0.0) {
-    weights.w[k + 1 - weights.first] = f;
-  }
+  weights.w[k + 1 - weights.first] = f;
   return weights;
 }
 
@@ -94,13 +112,16 @@ SectionGrid makeSectionGrid(const TravelTimes& times) {
   g.knotSpacing = typicalSpacing(times, g.length());
   g.nodeSpacing = g.knotSpacing / kNodesPerKnot;
   g.start = g.lineStart - kMargin * g.knotSpacing;
-  g.knots = static_cast<int>(std::ceil(g.length() / g.knotSpacing - 1e-9)) + 2 * kMargin + 1;
-  g.nodes = (g.knots - 1) * kNodesPerKnot + 1;
-  g.knotX = Eigen::VectorXd::LinSpaced(g.knots, g.start, g.start + (g.knots - 1) * g.knotSpacing);
-  g.nodeX = Eigen::VectorXd::LinSpaced(g.nodes, g.knotX[0], g.knotX[g.knots - 1]);
+  const int steps = static_cast<int>(std::ceil(g.length() / g.knotSpacing - 1e-9)) + 2 * kMargin;
+  g.nodes = steps * kNodesPerKnot + 1;
+  g.knotNode = knotNodes(times, g);
+  g.knots = static_cast<int>(g.knotNode.size());
+  g.nodeX = Eigen::VectorXd::LinSpaced(g.nodes, g.start, g.start + (g.nodes - 1) * g.nodeSpacing);
+  g.knotX = g.nodeX(g.knotNode);
   g.ground = g.nodeX.unaryExpr([&times](double x) { return times.ground.at(x); });
-  for (int j = 0; j < g.nodes; ++j) {
-    g.toKnots.push_back(weightsOf(j, g.knots));
+  for (int j = 0, k = 0; j < g.nodes; ++j) {
+    k += k + 2 < g.knots && j >= g.knotNode[k + 1] ? 1 : 0;
+    g.toKnots.push_back(weightsOf(g.knotNode, k, j));
   }
   const double reach = g.nodeX[g.nodes - 1] - g.start;
   g.velocitySpacing = std::max(2.0 * g.knotSpacing, reach / kVelocityKnots);

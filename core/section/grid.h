@@ -9,12 +9,19 @@
 
 namespace strikeplate {
 
+/// A place in the vertical plane of the line, m; y is elevation.
+struct SectionPoint {
+  double x = 0.0;
+  double y = 0.0;
+};
+
 /// Where the unknowns of a section live along the line.
 ///
-/// Interfaces are unknown at *knots*, one geophone spacing apart, and are drawn through *nodes*, twice as dense, by
-/// cubic convolution (Keys 1981 IEEE Trans. ASSP 29:1153, reproduces parabolas); between nodes they are straight.
-/// Velocities that vary along the line are unknown at coarser *velocity knots*, straight in between. All reach a
-/// little beyond the outermost geophone or shot. Lengths in m.
+/// Interfaces are unknown at *knots*, one geophone spacing apart between the outermost geophones and three beyond,
+/// and are drawn through *nodes*, evenly half a spacing apart, by cubic convolution (Keys 1981 IEEE Trans. ASSP
+/// 29:1153, reproduces parabolas; straight where knots are uneven); between nodes they are straight. Velocities that
+/// vary along the line are unknown at coarser *velocity knots*, straight in between. All reach a little beyond the
+/// outermost geophone or shot. Lengths in m.
 struct SectionGrid {
   struct Weights {
     int first = 0;
@@ -30,6 +37,7 @@ struct SectionGrid {
   int velocityKnots = 0;
   double lineStart = 0.0;  ///< outermost geophone or shot
   double lineEnd = 0.0;
+  std::vector<int> knotNode;  ///< node at which each knot lies
   Eigen::VectorXd knotX;
   Eigen::VectorXd nodeX;
   Eigen::VectorXd ground;        ///< elevation at nodes

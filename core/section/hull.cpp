@@ -13,12 +13,13 @@ constexpr double kTurn = 1e-9;
 
 HullTable::HullTable(const Eigen::VectorXd& z, double spacing) {
   const int n = static_cast<int>(z.size());
-  length_ = Eigen::MatrixXd::Zero(n, n);
-  previous_ = Eigen::MatrixXi::Zero(n, n);
+  length_.resize(n, n);
+  previous_.resize(n, n);
   std::vector<int> stack(n);
   std::vector<double> along(n);
   for (int a = 0; a < n; ++a) {
     int top = 0;
+    length_(a, a) = 0.0;
     stack[0] = a;
     along[0] = 0.0;
     for (int b = a + 1; b < n; ++b) {
@@ -38,10 +39,10 @@ HullTable::HullTable(const Eigen::VectorXd& z, double spacing) {
       along[top + 1] = along[top] + std::sqrt(run * run + rise * rise);
       stack[++top] = b;
       length_(b, a) = along[top];
+      length_(a, b) = along[top];
       previous_(b, a) = p;
     }
   }
-  length_.triangularView<Eigen::StrictlyUpper>() = length_.transpose();
 }
 
 void HullTable::bends(int a, int b, std::vector<int>& out) const {

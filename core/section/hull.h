@@ -1,5 +1,6 @@
 #pragma once
 
+#include <utility>
 #include <vector>
 
 #include <Eigen/Core>
@@ -19,6 +20,8 @@ class HullTable {
 
   /// Length of the way between nodes a and b, m; symmetric.
   [[nodiscard]] const Eigen::MatrixXd& lengths() const { return length_; }
+  /// The same, given away; only the bends can be asked for afterwards.
+  [[nodiscard]] Eigen::MatrixXd takeLengths() { return std::move(length_); }
   /// Nodes strictly between a and b at which the way bends, in order from a to b.
   void bends(int a, int b, std::vector<int>& out) const;
 

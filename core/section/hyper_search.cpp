@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <map>
 #include <set>
 #include <utility>
 
@@ -24,11 +25,13 @@ std::vector<Coordinate> coordinates(HyperChoice& choice, const SectionPrior& pri
   std::vector<Coordinate> out;
   for (int k = 0; k < prior.layout().interfaces(); ++k) {
     out.push_back({&choice.roughness[k], 0, SectionPrior::kRoughnesses});
-    out.push_back({&choice.length[k], 0, SectionPrior::kLengths});
+    if (limits.all) {
+      out.push_back({&choice.length[k], 0, SectionPrior::kLengths});
+    }
   }
   out.push_back({&choice.noise, limits.leastNoise, SectionPrior::kNoises});
   out.push_back({&choice.soil, 0, SectionPrior::kDeviations});
-  if (prior.layout().interfaces() > 0 && limits.rock) {
+  if (prior.layout().interfaces() > 0 && limits.all) {
     out.push_back({&choice.rock, 0, SectionPrior::kDeviations});
   }
   return out;
@@ -52,11 +55,33 @@ std::vector<HyperChoice> neighbours(const HyperChoice& choice, const SectionPrio
 
 }  // namespace
 
+namespace {
+
+/// Evidences already worked out.
+class Evidences {
+ public:
+  explicit Evidences(const LinearisedPosterior& posterior) : posterior_(posterior) {}
+  double operator()(const HyperChoice& choice) {
+    const auto [at, fresh] = known_.try_emplace(choice, 0.0);
+    if (fresh) {
+      at->second = posterior_.fit(choice).logEvidence;
+    }
+    return at->second;
+  }
+
+ private:
+  const LinearisedPosterior& posterior_;
+  std::map<HyperChoice, double> known_;
+};
+
+}  // namespace
+
 HyperChoice searchHyper(const LinearisedPosterior& posterior, HyperChoice start, const HyperLimits& limits,
                         int sweeps) {
   start.noise = std::max(start.noise, limits.leastNoise);
   HyperChoice best = start;
-  double bestEvidence = posterior.fit(best).logEvidence;
+  Evidences evidences(posterior);
+  double bestEvidence = evidences(best);
   for (int sweep = 0; sweep < sweeps; ++sweep) {
     const HyperChoice before = best;
     HyperChoice trial = best;
@@ -67,7 +92,7 @@ HyperChoice searchHyper(const LinearisedPosterior& posterior, HyperChoice start,
         int worse = 0;
         for (int v = bestValue + direction; v >= c.least && v < c.count && worse < 2; v += direction) {
           *c.value = v;
-          const double evidence = posterior.fit(trial).logEvidence;
+          const double evidence = evidences(trial);
           if (evidence > bestEvidence) {
             bestEvidence = evidence;
             bestValue = v;

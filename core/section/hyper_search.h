@@ -9,7 +9,7 @@ namespace strikeplate {
 /// What a search may touch.
 struct HyperLimits {
   int leastNoise = 0;
-  bool rock = true;  ///< deviations of the deepest layer's velocity
+  bool all = true;  ///< correlation lengths and deviations of the deepest layer's velocity too
 };
 
 /// The choice of hyperparameters with the greatest evidence found by searching one coordinate of the grid after the

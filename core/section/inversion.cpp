@@ -9,8 +9,6 @@ namespace strikeplate {
 namespace {
 
 constexpr double kLongestLogVelocityStep = 0.5;
-constexpr int kHalvings = 5;
-constexpr double kEnough = 1e-3;        // change of the objective, in nats
 constexpr double kNothingToGain = 0.5;  // nats that the linearised problem promises and the kinks in it deny
 constexpr double kShareFelt = 1e-3;
 constexpr double kDoubtReach = 8.0;  // scaled sigmas; layers further apart do not compete for a pick
@@ -148,20 +146,31 @@ SectionInversion::Trial SectionInversion::tryState(SectionState state) const {
   t.theta = prior_->apply(t.state.choice, t.state.xi);
   t.forward =
       std::make_unique<SectionForward>(makeSectionModel(problem_->grid, prior_->layout(), t.theta), problem_->picks);
-  const PickNoise noise(t.state.noise);
-  const double s = SectionPrior::noise(t.state.choice.noise);
-  t.objective = 0.5 * t.state.xi.squaredNorm() + boreholeMisfit(*t.forward);
+  if (t.state.labelsFree) {
+    for (int i = 0; i < problem_->picks.count(); ++i) {
+      const int held = problem_->picks.picks[i].heldLayer;
+      t.state.labels[i] = held > 0 ? std::min(held, prior_->layout().layers) : t.forward->earliest(i);
+    }
+  }
+  t.objective = objectiveOf(t.state, t.theta, *t.forward);
+  return t;
+}
+
+double SectionInversion::objectiveOf(const SectionState& state, const Eigen::VectorXd& theta,
+                                     const SectionForward& forward) const {
+  const PickNoise noise(state.noise);
+  const double s = SectionPrior::noise(state.choice.noise);
+  double sum = 0.5 * state.xi.squaredNorm() + boreholeMisfit(forward);
   for (int i = 0; i < problem_->picks.count(); ++i) {
     const SectionPick& p = problem_->picks.picks[i];
-    if (t.state.labelsFree) {
-      t.state.labels[i] = p.heldLayer > 0 ? std::min(p.heldLayer, prior_->layout().layers) : t.forward->earliest(i);
-    }
-    t.objective += noise.loss((p.time - expectedFor(*t.forward, t.state, t.theta, i)) / (s * p.sigma));
+    sum += noise.loss((p.time - expectedFor(forward, state, theta, i)) / (s * p.sigma));
   }
-  if (!std::isfinite(t.objective)) {
-    t.objective = std::numeric_limits<double>::infinity();
-  }
-  return t;
+  return std::isfinite(sum) ? sum : std::numeric_limits<double>::infinity();
+}
+
+void SectionInversion::setDoubt(std::vector<double> doubt) {
+  state_.doubt = std::move(doubt);
+  objective_ = objectiveOf(state_, theta_, *forward_);
 }
 
 LinearisedPosterior SectionInversion::linearise() const {
@@ -177,7 +186,7 @@ LinearisedPosterior SectionInversion::linearise() const {
     const double r = p.time - expected(i);
     picks.add(row, r + row.dot(fromMean), noise.weight(r / (s * p.sigma)) / (p.sigma * p.sigma));
   }
-  NormalEquations exact(layout.size());
+  NormalEquations exact(problem_->boreholes.empty() ? 0 : layout.size());
   for (const Borehole& b : problem_->boreholes) {
     if (b.layer > layout.layers) {
       continue;
@@ -203,7 +212,7 @@ double SectionInversion::hoped(const SectionFit& fit) const {
   return 0.5 * (fit.factor.matrixU() * step).squaredNorm();
 }
 
-bool SectionInversion::iterate(int steps) {
+bool SectionInversion::iterate(int steps, double enough, int halvings) {
   for (int step = 0; step < steps; ++step) {
     const SectionFit fit = linearise().fit(state_.choice);
     const Eigen::VectorXd& goal = fit.xi;
@@ -211,7 +220,7 @@ bool SectionInversion::iterate(int steps) {
     const bool whole = share == 1.0;
     bool moved = false;
     double gain = 0.0;
-    for (int half = 0; half <= kHalvings && !moved; ++half, share *= 0.5) {
+    for (int half = 0; half <= halvings && !moved; ++half, share *= 0.5) {
       SectionState next = state_;
       next.xi = state_.xi + share * (goal - state_.xi);
       Trial trial = tryState(std::move(next));
@@ -224,7 +233,7 @@ bool SectionInversion::iterate(int steps) {
     if (!moved) {
       return hoped(fit) < kNothingToGain;
     }
-    if (whole && gain < kEnough) {
+    if (whole && gain < enough) {
       return true;
     }
   }

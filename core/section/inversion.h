@@ -19,8 +19,8 @@ struct SectionProblem {
   std::vector<Borehole> boreholes;  ///< only those that enter as data
   bool solveDelays = false;
 
-  [[nodiscard]] SectionLayout layout(int layers) const {
-    return {layers, grid.knots, grid.velocityKnots, solveDelays ? static_cast<int>(picks.shots.size()) : 0};
+  [[nodiscard]] SectionLayout layout(int layers, bool gradient = false) const {
+    return {layers, grid.knots, grid.velocityKnots, solveDelays ? static_cast<int>(picks.shots.size()) : 0, gradient};
   }
 };
 
@@ -52,8 +52,11 @@ class SectionInversion {
  public:
   SectionInversion(const SectionProblem& problem, const SectionPrior& prior, SectionState state);
 
-  /// At most `steps` steps; true when it has converged.
-  bool iterate(int steps);
+  /// At most `steps` steps, each halved up to `halvings` times while it does not help; true when the last one gained
+  /// less than `enough` nats.
+  bool iterate(int steps, double enough = 1e-3, int halvings = 5);
+  /// Takes over doubts about labels; nothing is predicted anew.
+  void setDoubt(std::vector<double> doubt);
   /// Replaces the state and predicts anew.
   void restart(SectionState state);
   /// The problem linearised where it stands, picks weighted as they are now.
@@ -90,6 +93,8 @@ class SectionInversion {
   [[nodiscard]] double hoped(const SectionFit& fit) const;
   [[nodiscard]] double stepLimit(const Eigen::VectorXd& towards) const;
   void accept(Trial trial);
+  [[nodiscard]] double objectiveOf(const SectionState& state, const Eigen::VectorXd& theta,
+                                   const SectionForward& forward) const;
 
   const SectionProblem* problem_;
   const SectionPrior* prior_;

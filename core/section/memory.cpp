@@ -75,6 +75,7 @@ SectionMemory remember(const SectionProblem& problem, const SectionCandidate& ca
   m.layers = candidate.layers;
   std::vector<double>& n = m.numbers;
   n = signature(problem, candidate.layers);
+  n.push_back(mode.prior->layout().gradient ? 1.0 : 0.0);
   n.insert(n.end(), candidate.centre.depth.begin(), candidate.centre.depth.end());
   n.insert(n.end(), candidate.centre.logVelocity.begin(), candidate.centre.logVelocity.end());
   n.push_back(candidate.centre.firstSigma);
@@ -102,6 +103,7 @@ std::optional<Recalled> recall(const SectionProblem& problem, const SectionMemor
     }
   }
   Recalled out;
+  out.gradient = reader.integer(1) == 1;
   for (int k = 1; k < memory.layers; ++k) {
     out.centre.depth.push_back(reader.number());
   }

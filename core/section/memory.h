@@ -14,6 +14,7 @@ SectionMemory remember(const SectionProblem& problem, const SectionCandidate& ca
 /// What a live solve starts from.
 struct Recalled {
   PriorCentre centre;
+  bool gradient = false;
   HyperChoice choice;
   Eigen::VectorXd xi;
   std::vector<std::pair<HyperChoice, double>> choices;  ///< with weights, heaviest first

@@ -2,20 +2,28 @@
 
 #include <algorithm>
 #include <cmath>
-#include <cstdio>
-#include <cstdlib>
 
 namespace strikeplate {
 namespace {
 
 constexpr int kMostStarts = 3;
 constexpr int kMovedStartsBelow = 200;  // picks; larger surveys need no moved crossovers
+constexpr int kSmallSurvey = 120;       // picks; few enough that a layer may own a handful, so more ways are tried
+constexpr int kMostStartsSmall = 8;
+constexpr std::size_t kMostModesSmall = 5;
 constexpr int kMostFits = 40;
 constexpr int kMostRounds = 6;
 constexpr int kLeastRounds = 2;  // the doubt of labels settles in two
 constexpr int kLeastPicks = 4;   // on a refractor
 constexpr double kLeastContrast = 1.05;
 constexpr double kLogModeWorth = -4.0;
+constexpr double kLogModeHope = 6.0;   // an unfinished mode so far behind the best one is given up
+constexpr double kLogHopeless = 10.0;  // a number of layers so far behind another one is not finished
+constexpr std::size_t kMostModes = 2;
+constexpr double kLogAskedFor = 3.0;   // a gradient cannot be negative, so where there is none it would only bias
+constexpr double kSlowerOnTop = 0.15;  // of the logarithm of velocity
+constexpr double kRoughly = 0.3;       // nats
+
 constexpr double kLogLayerPenalty = 1.0986122886681098;  // ln 3
 constexpr double kFirstVelocity = 450.0;                 // m/s, where next to no direct arrival was picked
 
@@ -68,8 +76,9 @@ PriorCentre centreOf(const SectionProblem& problem, const LineStart& start) {
 }
 
 std::vector<LineStart> startsFor(const TravelTimes& times, int layers) {
-  std::vector<LineStart> starts = lineStarts(times, layers, kMostStarts);
-  if (!starts.empty() && layers > 1 && static_cast<int>(times.arrivals.size()) < kMovedStartsBelow) {
+  const int picks = static_cast<int>(times.arrivals.size());
+  std::vector<LineStart> starts = lineStarts(times, layers, picks < kSmallSurvey ? kMostStartsSmall : kMostStarts);
+  if (!starts.empty() && layers > 1 && picks < kMovedStartsBelow) {
     const LineStart best = starts.front();
     starts.push_back(withCrossoversMoved(times, best, 0.6));
     starts.push_back(withCrossoversMoved(times, best, 1.6));
@@ -97,11 +106,11 @@ int leastNoise(const SectionInversion& inversion) {
 
 /// Searches the hyperparameters where the inversion stands and moves it to the best ones' mean. True when they have
 /// changed.
-bool learn(SectionInversion& inversion, bool rock, int sweeps) {
+bool learn(SectionInversion& inversion, bool all, int sweeps) {
   SectionState next = inversion.state();
   const HyperChoice before = next.choice;
   const LinearisedPosterior posterior = inversion.linearise();
-  next.choice = searchHyper(posterior, next.choice, {leastNoise(inversion), rock}, sweeps);
+  next.choice = searchHyper(posterior, next.choice, {leastNoise(inversion), all}, sweeps);
   const bool changed = next.choice != before;
   if (changed) {
     next.xi = posterior.fit(next.choice).xi;
@@ -114,12 +123,6 @@ void freeLabels(SectionInversion& inversion) {
   SectionState next = inversion.state();
   next.noise = PickNoise::Shape::kMixture;
   next.labelsFree = true;
-  inversion.restart(std::move(next));
-}
-
-void doubtLabels(SectionInversion& inversion) {
-  SectionState next = inversion.state();
-  next.doubt = inversion.measureDoubt();
   inversion.restart(std::move(next));
 }
 
@@ -137,7 +140,7 @@ void finish(SectionMode& mode, int layers) {
     if (!changed && round >= kLeastRounds) {
       break;
     }
-    doubtLabels(inversion);
+    inversion.setDoubt(inversion.measureDoubt());
     mode.converged = inversion.iterate(8);
   }
   const LinearisedPosterior posterior = inversion.linearise();
@@ -146,11 +149,11 @@ void finish(SectionMode& mode, int layers) {
                      logSpread(mode.fits) - layers * kLogLayerPenalty;
 }
 
-std::string whyNot(const SectionCandidate& c, const SectionProblem& problem) {
-  const SectionInversion& inversion = *c.modes.front().inversion;
-  const SectionLayout layout = problem.layout(c.layers);
-  for (int layer = 2; layer <= c.layers; ++layer) {
-    const std::vector<int>& labels = inversion.state().labels;
+/// Why a mode cannot stand; empty when it can.
+std::string whyNot(const SectionInversion& inversion) {
+  const SectionLayout& layout = inversion.prior().layout();
+  const std::vector<int>& labels = inversion.state().labels;
+  for (int layer = 2; layer <= layout.layers; ++layer) {
     if (std::count(labels.begin(), labels.end(), layer) < kLeastPicks) {
       return "fewer than four arrivals came through layer " + std::to_string(layer);
     }
@@ -178,14 +181,69 @@ void weighModes(std::vector<SectionMode>& modes) {
   }
 }
 
-/// Two inversions that came to the same place.
-bool sameMode(const SectionInversion& a, const SectionInversion& b) {
-  return a.state().labels == b.state().labels && (a.theta() - b.theta()).cwiseAbs().maxCoeff() < 0.05;
+/// Two inversions on their way to the same place.
+bool sameMode(const SectionMode& a, const SectionMode& b) {
+  const SectionInversion& p = *a.inversion;
+  const SectionInversion& q = *b.inversion;
+  const SectionLayout& layout = a.prior->layout();
+  std::size_t other = 0;
+  for (std::size_t i = 0; i < p.state().labels.size(); ++i) {
+    other += p.state().labels[i] != q.state().labels[i] ? 1 : 0;
+  }
+  const int first = layout.logVelocity(1);
+  return other * 100 <= p.state().labels.size() && std::abs(a.logEvidence - b.logEvidence) < 1.0 &&
+         (p.theta() - q.theta()).segment(first, layout.layers).cwiseAbs().maxCoeff() < 0.02;
+}
+
+/// From a start to the neighbourhood of a maximum: labels held and heavy tails first, then labels by earliest time.
+SectionMode approach(const SectionProblem& problem, const std::shared_ptr<const SectionPrior>& prior,
+                     SectionState start) {
+  SectionMode mode;
+  mode.prior = prior;
+  mode.inversion = std::make_shared<SectionInversion>(problem, *prior, std::move(start));
+  SectionInversion& inversion = *mode.inversion;
+  inversion.iterate(8, kRoughly);
+  learn(inversion, false, 1);
+  freeLabels(inversion);
+  inversion.iterate(4, kRoughly);
+  learn(inversion, false, 1);
+  inversion.iterate(4, kRoughly);
+  mode.logEvidence = evidenceNow(inversion) - prior->layout().layers * kLogLayerPenalty;
+  return mode;
+}
+
+/// Modes worth finishing, best first; when there is none, `candidate.rejected` says why.
+void approachAll(SectionCandidate& candidate, const SectionProblem& problem,
+                 const std::shared_ptr<const SectionPrior>& prior, const std::vector<LineStart>& starts,
+                 const ProgressPart& progress) {
+  std::vector<SectionMode>& out = candidate.modes;
+  std::string why;
+  for (std::size_t i = 0; i < starts.size(); ++i) {
+    if (!progress.at(0.6 * static_cast<double>(i) / static_cast<double>(starts.size()))) {
+      candidate.finished = false;
+      why = "it was stopped early";
+      break;
+    }
+    SectionMode mode = approach(problem, prior, startState(problem, *prior, candidate.centre, starts[i]));
+    const std::string whyThis = whyNot(*mode.inversion);
+    if (!whyThis.empty() || !std::isfinite(mode.logEvidence)) {
+      why = whyThis.empty() ? "the inversion found no section that explains the times" : whyThis;
+      continue;
+    }
+    const bool fresh =
+        std::none_of(out.begin(), out.end(), [&mode](const SectionMode& m) { return sameMode(m, mode); });
+    if (fresh) {
+      out.push_back(std::move(mode));
+    }
+  }
+  candidate.rejected = out.empty() ? why : "";
+  std::stable_sort(out.begin(), out.end(),
+                   [](const SectionMode& a, const SectionMode& b) { return a.logEvidence > b.logEvidence; });
 }
 
 }  // namespace
 
-SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& times, int layers,
+SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& times, int layers, double toBeat,
                              const ProgressPart& progress) {
   SectionCandidate out;
   out.layers = layers;
@@ -197,55 +255,53 @@ SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& t
   }
   out.centre = centreOf(problem, starts.front());
   const auto prior = std::make_shared<const SectionPrior>(problem.grid, problem.layout(layers), out.centre);
-  std::vector<SectionMode> tried;
-  for (std::size_t i = 0; i < starts.size(); ++i) {
-    if (!progress.at(0.6 * static_cast<double>(i) / static_cast<double>(starts.size()))) {
-      out.finished = false;
-      break;
-    }
-    SectionMode mode;
-    mode.prior = prior;
-    mode.inversion =
-        std::make_shared<SectionInversion>(problem, *prior, startState(problem, *prior, out.centre, starts[i]));
-    mode.inversion->iterate(8);
-    learn(*mode.inversion, false, 1);
-    freeLabels(*mode.inversion);
-    mode.inversion->iterate(4);
-    learn(*mode.inversion, false, 1);
-    mode.inversion->iterate(4);
-    mode.logEvidence = evidenceNow(*mode.inversion);
-    if (getenv("SPDEBUG"))
-      fprintf(stderr, "start %zu lnE %.2f rock %d soil %d noise %d\n", i, mode.logEvidence,
-              mode.inversion->state().choice.rock, mode.inversion->state().choice.soil,
-              mode.inversion->state().choice.noise);
-    const bool fresh = std::none_of(tried.begin(), tried.end(), [&mode](const SectionMode& m) {
-      return sameMode(*m.inversion, *mode.inversion);
-    });
-    if (fresh && std::isfinite(mode.logEvidence)) {
-      tried.push_back(std::move(mode));
-    }
-  }
-  if (tried.empty()) {
-    out.rejected = "the inversion found no section that explains the times";
+  approachAll(out, problem, prior, starts, progress);
+  if (out.modes.empty()) {
     return out;
   }
-  std::stable_sort(tried.begin(), tried.end(),
-                   [](const SectionMode& a, const SectionMode& b) { return a.logEvidence > b.logEvidence; });
-  const double best = tried.front().logEvidence;
-  for (std::size_t i = 0; i < tried.size(); ++i) {
-    if (tried[i].logEvidence < best - 8.0 || i >= 3) {
-      break;
+  const double best = out.modes.front().logEvidence;
+  if (best < toBeat - kLogHopeless) {
+    out.modes.resize(1);
+    return out;
+  }
+  std::erase_if(out.modes, [best](const SectionMode& m) { return m.logEvidence < best - kLogModeHope; });
+  out.modes.resize(std::min(out.modes.size(), problem.picks.count() < kSmallSurvey ? kMostModesSmall : kMostModes));
+  for (std::size_t i = 0; i < out.modes.size(); ++i) {
+    out.finished =
+        out.finished && progress.at(0.6 + 0.4 * static_cast<double>(i) / static_cast<double>(out.modes.size()));
+    finish(out.modes[i], layers);
+    if (!out.finished) {
+      out.modes.resize(i + 1);
     }
-    out.finished = progress.at(0.6 + 0.1 * static_cast<double>(i)) && out.finished;
-    finish(tried[i], layers);
-    if (getenv("SPDEBUG"))
-      fprintf(stderr, "  mode %zu finished lnE %.2f rock %d soil %d\n", i, tried[i].logEvidence,
-              tried[i].inversion->state().choice.rock, tried[i].inversion->state().choice.soil);
-    out.modes.push_back(std::move(tried[i]));
   }
   weighModes(out.modes);
-  out.rejected = whyNot(out, problem);
+  out.rejected = whyNot(*out.modes.front().inversion);
   return out;
+}
+
+void addGradient(const SectionProblem& problem, SectionCandidate& candidate) {
+  const SectionInversion& plain = *candidate.modes.front().inversion;
+  const auto prior =
+      std::make_shared<const SectionPrior>(problem.grid, problem.layout(candidate.layers, true), candidate.centre);
+  SectionState start = plain.state();
+  start.xi.conservativeResize(prior->columns());
+  start.xi.tail(1).setZero();
+  start.xi[prior->velocityColumn(1)] -= kSlowerOnTop / prior->scales(start.choice)[prior->velocityColumn(1)];
+  start.doubt.clear();
+  SectionMode mode;
+  mode.prior = prior;
+  mode.inversion = std::make_shared<SectionInversion>(problem, *prior, std::move(start));
+  mode.inversion->iterate(8, kRoughly);
+  const double soFar = evidenceNow(*mode.inversion) - (candidate.layers + 1) * kLogLayerPenalty;
+  if (!(soFar > candidate.logEvidence() - kLogModeHope) || !whyNot(*mode.inversion).empty()) {
+    return;
+  }
+  finish(mode, candidate.layers + 1);
+  if (!(mode.logEvidence > candidate.logEvidence() + kLogAskedFor) || !whyNot(*mode.inversion).empty()) {
+    return;
+  }
+  candidate.modes.push_back(std::move(mode));
+  weighModes(candidate.modes);
 }
 
 }  // namespace strikeplate

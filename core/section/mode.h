@@ -44,8 +44,13 @@ struct ProgressPart {
   }
 };
 
-/// Inverts for one number of layers from several starts. One layer means: no refractor at all.
-SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& times, int layers,
+/// Inverts for one number of layers from several starts. One layer means: no refractor at all. What falls far short
+/// of the log evidence `toBeat` is left unfinished, without fits.
+SectionCandidate solveLayers(const SectionProblem& problem, const TravelTimes& times, int layers, double toBeat,
                              const ProgressPart& progress);
+
+/// Lets velocity grow with depth in the first layer of a finished candidate. When the evidence asks for that (a
+/// gradient costs ln 3, and must gain by more), what comes of it joins the candidate's modes.
+void addGradient(const SectionProblem& problem, SectionCandidate& candidate);
 
 }  // namespace strikeplate

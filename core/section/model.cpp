@@ -5,6 +5,9 @@
 namespace strikeplate {
 namespace {
 
+constexpr double kGradientBend = 5.0;    // 1/s
+constexpr double kLeastGradient = 1e-3;  // 1/s, as good as none
+
 struct Softplus {
   double value;
   double slope;
@@ -78,6 +81,29 @@ double SectionModel::meanSlowness(int layer, double xa, double xb) const {
   return (integral(layer, xb) - integral(layer, xa)) / (xb - xa);
 }
 
+SectionModel::FirstLayerTime SectionModel::firstLayer(SectionPoint a, SectionPoint b, double length) const {
+  const double u = meanSlowness(1, a.x, b.x);
+  const double rise = length > 0.0 ? (b.y - a.y) / length : 0.0;
+  if (gradient == 0.0) {
+    return {length * u, -length * u, u * rise, 0.0};
+  }
+  const double da = std::max(0.0, grid->at(grid->ground, a.x) - a.y);
+  const double db = std::max(0.0, grid->at(grid->ground, b.x) - b.y);
+  const double v = 1.0 / u;
+  const double va = v + gradient * da;
+  const double vb = v + gradient * db;
+  const double y = 0.5 * gradient * length / std::sqrt(va * vb);
+  const double time = 2.0 / gradient * std::asinh(y);
+  // dT = f dlog(y), f = 2 / k y / sqrt(1 + y^2).
+  const double f = 2.0 / gradient * y / std::sqrt(1.0 + y * y);
+  FirstLayerTime out;
+  out.time = time;
+  out.perLogVelocity = -0.5 * f * (v / va + v / vb);
+  out.perRise = f * ((length > 0.0 ? rise / length : 0.0) + 0.5 * gradient / vb);
+  out.perGradient = (f - time) / gradient - 0.5 * f * (da / va + db / vb);
+  return out;
+}
+
 SectionModel makeSectionModel(const SectionGrid& grid, const SectionLayout& layout, const Eigen::VectorXd& theta) {
   SectionModel m;
   m.layout = layout;
@@ -86,6 +112,11 @@ SectionModel makeSectionModel(const SectionGrid& grid, const SectionLayout& layo
   m.chain.emplace_back();
   for (int k = 1; k <= layout.interfaces(); ++k) {
     stackInterface(m, k, grid.spread(theta.segment(layout.elevation(k), layout.knots)));
+  }
+  if (layout.gradient) {
+    const Softplus k = softplus(theta[layout.gradientIndex()], kGradientBend);
+    m.gradient = std::max(k.value, kLeastGradient);
+    m.gradientSlope = k.slope;
   }
   for (int layer = 1; layer <= layout.layers; ++layer) {
     Eigen::VectorXd u = slownessOf(grid, layout, theta, layer);

@@ -72,16 +72,24 @@ SectionFit LinearisedPosterior::fit(const HyperChoice& choice) const {
   }
   const double s = SectionPrior::noise(choice.noise);
   const double perVariance = 1.0 / (s * s);
-  const auto d = scales(out.active).asDiagonal();
-  Eigen::MatrixXd b = p.picks(out.active, out.active) * perVariance;
+  const Eigen::VectorXd d = scales(out.active);
+  const auto n = static_cast<Eigen::Index>(out.active.size());
+  Eigen::MatrixXd b(n, n);
+  for (Eigen::Index j = 0; j < n; ++j) {
+    for (Eigen::Index i = j; i < n; ++i) {
+      double h = p.picks(out.active[i], out.active[j]) * perVariance;
+      if (exact_.count > 0) {
+        h += p.exact(out.active[i], out.active[j]);
+      }
+      b(i, j) = d[i] * d[j] * h;
+    }
+    b(j, j) += 1.0;
+  }
   Eigen::VectorXd v = p.b(out.active) * perVariance;
   if (exact_.count > 0) {
-    b += p.exact(out.active, out.active);
     v += p.bExact(out.active);
   }
-  b = d * b * d;
-  b.diagonal().array() += 1.0;
-  v = d * v;
+  v.array() *= d.array();
   out.factor.compute(b);
   const Eigen::VectorXd xi = out.factor.solve(v);
   out.halfLogDet = out.factor.matrixLLT().diagonal().array().log().sum();

@@ -10,7 +10,9 @@ namespace {
 
 constexpr double kPlaneDepthSigma = 0.2;  // line lengths
 constexpr double kSlopeSigma = 0.15;
-constexpr double kDelaySigma = 3e-3;  // s
+constexpr double kDelaySigma = 3e-3;     // s
+constexpr double kGradientMean = 20.0;   // 1/s
+constexpr double kGradientSigma = 40.0;  // 1/s
 constexpr double kLogNoiseSigma = 0.7;
 constexpr double kNoiseStep = 1.15;
 constexpr int kNoiseUnit = 23;       // choice at which the stated sigmas are right
@@ -62,8 +64,10 @@ SectionPrior::SectionPrior(const SectionGrid& grid, const SectionLayout& layout,
       lineLength_(grid.length()),
       knotSpacing_(grid.knotSpacing),
       firstSigma_(centre.firstSigma),
-      otherSigma_(centre.logVelocitySigma) {
-  columns_ = velocityColumn(1) + layout.layers + 2 * layout.velocityKnots + layout.delays;
+      otherSigma_(centre.logVelocitySigma),
+      knotX_(grid.knotX),
+      centre_(0.5 * (grid.lineStart + grid.lineEnd)) {
+  columns_ = velocityColumn(1) + layout.layers + 2 * layout.velocityKnots + layout.delays + (layout.gradient ? 1 : 0);
   mean_ = Eigen::VectorXd::Zero(layout.size());
   const Eigen::VectorXd trend = groundTrend(grid);
   for (int k = 1; k <= layout.interfaces(); ++k) {
@@ -72,17 +76,24 @@ SectionPrior::SectionPrior(const SectionGrid& grid, const SectionLayout& layout,
   for (int layer = 1; layer <= layout.layers; ++layer) {
     mean_[layout.logVelocity(layer)] = centre.logVelocity[layer - 1];
   }
-  for (int i = 0; i < kLengths; ++i) {
-    Eigen::MatrixXd unit(layout.knots, layout.knots + 2);
-    unit.col(0).setOnes();
-    unit.col(1) = grid.knotX.array() - 0.5 * (grid.lineStart + grid.lineEnd);
-    unit.rightCols(layout.knots) = factor(grid.knotX, length(i), Kernel::kMatern32);
-    interface_.push_back(std::move(unit));
+  if (layout.gradient) {
+    mean_[layout.gradientIndex()] = kGradientMean;
   }
   const Eigen::VectorXd x =
       Eigen::VectorXd::LinSpaced(layout.velocityKnots, 0.0, (layout.velocityKnots - 1) * grid.velocitySpacing);
   soil_ = factor(x, kSoilLength * lineLength_, Kernel::kMatern32);
   rock_ = factor(x, kRockLength * lineLength_, Kernel::kMatern12);
+}
+
+const Eigen::MatrixXd& SectionPrior::interfaceFactor(int lengthChoice) const {
+  Eigen::MatrixXd& unit = interface_[lengthChoice];
+  if (unit.size() == 0) {
+    unit.resize(layout_.knots, layout_.knots + 2);
+    unit.col(0).setOnes();
+    unit.col(1) = knotX_.array() - centre_;
+    unit.rightCols(layout_.knots) = factor(knotX_, length(lengthChoice), Kernel::kMatern32);
+  }
+  return unit;
 }
 
 double SectionPrior::roughness(int choice) const {
@@ -125,7 +136,10 @@ Eigen::VectorXd SectionPrior::scales(const HyperChoice& choice) const {
   at += layout_.layers;
   s.segment(at, layout_.velocityKnots).setConstant(deviation(choice.soil));
   s.segment(at + layout_.velocityKnots, layout_.velocityKnots).setConstant(deviation(choice.rock));
-  s.tail(layout_.delays).setConstant(kDelaySigma);
+  s.segment(at + 2 * layout_.velocityKnots, layout_.delays).setConstant(kDelaySigma);
+  if (layout_.gradient) {
+    s[columns_ - 1] = kGradientSigma;
+  }
   return s;
 }
 
@@ -135,7 +149,7 @@ Eigen::VectorXd SectionPrior::apply(const HyperChoice& choice, const Eigen::Vect
   const int knots = layout_.knots;
   for (int k = 1; k <= layout_.interfaces(); ++k) {
     theta.segment(layout_.elevation(k), knots) +=
-        interface_[choice.length[k - 1]] * y.segment(firstColumn(k), knots + 2);
+        interfaceFactor(choice.length[k - 1]) * y.segment(firstColumn(k), knots + 2);
   }
   const int n = layout_.velocityKnots;
   int at = velocityColumn(1);
@@ -144,7 +158,8 @@ Eigen::VectorXd SectionPrior::apply(const HyperChoice& choice, const Eigen::Vect
   const int deviations = layout_.logVelocity(layout_.layers) + 1;
   theta.segment(deviations, n) += soil_ * y.segment(at, n);
   theta.segment(deviations + n, n) += rock_ * y.segment(at + n, n);
-  theta.tail(layout_.delays) += y.tail(layout_.delays);
+  const int rest = layout_.delays + (layout_.gradient ? 1 : 0);
+  theta.tail(rest) += y.tail(rest);
   return theta;
 }
 
@@ -153,7 +168,7 @@ Eigen::MatrixXd SectionPrior::transposed(const HyperChoice& choice, const Eigen:
   const int knots = layout_.knots;
   for (int k = 1; k <= layout_.interfaces(); ++k) {
     out.middleRows(firstColumn(k), knots + 2).noalias() =
-        interface_[choice.length[k - 1]].transpose() * v.middleRows(layout_.elevation(k), knots);
+        interfaceFactor(choice.length[k - 1]).transpose() * v.middleRows(layout_.elevation(k), knots);
   }
   const int n = layout_.velocityKnots;
   int at = velocityColumn(1);
@@ -162,7 +177,8 @@ Eigen::MatrixXd SectionPrior::transposed(const HyperChoice& choice, const Eigen:
   const int deviations = layout_.logVelocity(layout_.layers) + 1;
   out.middleRows(at, n).noalias() = soil_.transpose() * v.middleRows(deviations, n);
   out.middleRows(at + n, n).noalias() = rock_.transpose() * v.middleRows(deviations + n, n);
-  out.bottomRows(layout_.delays) = v.bottomRows(layout_.delays);
+  const int rest = layout_.delays + (layout_.gradient ? 1 : 0);
+  out.bottomRows(rest) = v.bottomRows(rest);
   return out;
 }
 

@@ -34,8 +34,9 @@ struct PriorCentre {
 ///
 /// An interface is a plane (depth sd 0.2 line lengths, slope sd 0.15) plus a Matern 3/2 process along the line
 /// (Rasmussen & Williams 2006, eq. 4.17); log velocities are normal; their deviations along the line Matern 3/2 in
-/// the first layer and 1/2 in the deepest; delays of shots normal with sd 3 ms. Only scales depend on amplitudes: the
-/// columns of Lambda are unit factors times a diagonal, so an amplitude is tried without a matrix product.
+/// the first layer and 1/2 in the deepest; delays of shots normal with sd 3 ms; q of a gradient normal about 20 with
+/// sd 40 per second. Only scales depend on amplitudes: the columns of Lambda are unit factors times a diagonal, so an
+/// amplitude is tried without a matrix product.
 class SectionPrior {
  public:
   SectionPrior(const SectionGrid& grid, const SectionLayout& layout, const PriorCentre& centre);
@@ -75,7 +76,11 @@ class SectionPrior {
   double otherSigma_;
   int columns_;
   Eigen::VectorXd mean_;
-  std::vector<Eigen::MatrixXd> interface_;  // one for each length
+  const Eigen::MatrixXd& interfaceFactor(int lengthChoice) const;
+
+  Eigen::VectorXd knotX_;
+  double centre_;
+  mutable std::array<Eigen::MatrixXd, kLengths> interface_;  // made when first asked for
   Eigen::MatrixXd soil_;
   Eigen::MatrixXd rock_;
 };

@@ -2,11 +2,17 @@
 
 #include <algorithm>
 #include <cmath>
+#include <cstdint>
+
+#include <boost/math/tools/minima.hpp>
 
 namespace strikeplate {
 namespace {
 
 constexpr double kTouching = 1e-9;  // m
+// Times are stationary in the crossings, so these leave errors of their squares.
+constexpr double kCloseEnough = 1e-4;  // of a segment, in Newton's method
+constexpr double kStill = 4e-3;        // nodes, between sweeps over a leg
 
 double distance(SectionPoint a, SectionPoint b) {
   return std::hypot(a.x - b.x, a.y - b.y);
@@ -24,7 +30,11 @@ struct Crossing {
   SectionPoint b;
   double ua;
   double ub;
-  [[nodiscard]] double time(SectionPoint p) const { return ua * fastDistance(a, p) + ub * fastDistance(p, b); }
+  const SectionModel* curved = nullptr;  ///< set when the piece from a runs through a first layer with a gradient
+  [[nodiscard]] double time(SectionPoint p) const {
+    const double length = fastDistance(a, p);
+    return (curved != nullptr ? curved->firstLayer(a, p, length).time : ua * length) + ub * fastDistance(p, b);
+  }
 };
 
 struct OnSegment {
@@ -32,9 +42,27 @@ struct OnSegment {
   double time;
 };
 
+/// Least time of a crossing whose first piece is curved: Brent's method on the segment, its ends looked at too.
+OnSegment leastOnSegmentCurved(const Crossing& c, SectionPoint p0, SectionPoint p1) {
+  const auto time = [&](double t) { return c.time({p0.x + t * (p1.x - p0.x), p0.y + t * (p1.y - p0.y)}); };
+  constexpr int kBits = 16;
+  std::uintmax_t steps = 24;
+  const auto [t, least] = boost::math::tools::brent_find_minima(time, 0.0, 1.0, kBits, steps);
+  OnSegment best{t, least};
+  for (const double end : {0.0, 1.0}) {
+    if (const double there = time(end); there <= best.time) {
+      best = {end, there};
+    }
+  }
+  return best;
+}
+
 /// Least time of a crossing on the segment from p0 to p1. It is convex there: Newton's method within the bracket that
 /// the sign of the slope leaves, halving where Newton would leave it.
 OnSegment leastOnSegment(const Crossing& c, SectionPoint p0, SectionPoint p1, double t) {
+  if (c.curved != nullptr) {
+    return leastOnSegmentCurved(c, p0, p1);
+  }
   const SectionPoint d{p1.x - p0.x, p1.y - p0.y};
   const double dd = d.x * d.x + d.y * d.y;
   double low = 0.0;
@@ -60,7 +88,7 @@ OnSegment leastOnSegment(const Crossing& c, SectionPoint p0, SectionPoint p1, do
     }
     const double move = std::abs(next - t);
     t = next;
-    if (move < 1e-5) {
+    if (move < kCloseEnough) {
       break;
     }
   }
@@ -103,6 +131,11 @@ struct Leg {
   int direction;  ///< +1 when the target lies at larger x
 };
 
+/// The model when the piece down to interface i is curved.
+const SectionModel* curvedAbove(const SectionModel& model, int i) {
+  return i == 1 && model.gradient > 0.0 ? &model : nullptr;
+}
+
 SectionPoint before(const SectionModel& model, const Leg& leg, const std::array<double, kMostLayers - 1>& c, int i) {
   return i == 1 ? leg.station : onInterface(model, i - 1, c[i - 2]);
 }
@@ -114,15 +147,19 @@ bool leastLowest(const SectionModel& model, const Leg& leg, int k, std::array<do
   const SectionPoint node = onInterface(model, k, leg.node);
   const double ua = model.meanSlowness(k, above.x, node.x);
   const double ub = model.meanSlowness(k + 1, node.x, leg.target.x);
+  const SectionModel* curved = curvedAbove(model, k);
   const int last = model.grid->nodes - 1;
   double bestTime = std::numeric_limits<double>::infinity();
   bool bend = false;
   const int near = std::clamp(leg.node + leg.direction, 0, last);
   const int far = std::clamp(leg.node - leg.direction, 0, last);
   if (near != leg.node) {
-    const OnSegment s = leastOnSegment({above, leg.target, ua, ub}, node, onInterface(model, k, near), 0.0);
+    const OnSegment s = leastOnSegment({above, leg.target, ua, ub, curved}, node, onInterface(model, k, near), 0.0);
     bestTime = s.time;
     c[k - 1] = leg.node + leg.direction * s.t;
+    if (s.t > 0.0) {
+      return false;
+    }
   }
   if (far == leg.node) {
     return false;
@@ -130,7 +167,7 @@ bool leastLowest(const SectionModel& model, const Leg& leg, int k, std::array<do
   const SectionPoint end = onInterface(model, k, far);
   const double chord = end.y + (leg.target.y - end.y) * (node.x - end.x) / (leg.target.x - end.x);
   const bool viaNode = node.y < chord - 1e-9;
-  const OnSegment s = leastOnSegment({above, viaNode ? node : leg.target, ua, ub}, node, end, 0.0);
+  const OnSegment s = leastOnSegment({above, viaNode ? node : leg.target, ua, ub, curved}, node, end, 0.0);
   const double time = s.time + (viaNode ? ub * fastDistance(node, leg.target) : 0.0);
   if (time < bestTime - 1e-15) {
     c[k - 1] = leg.node - leg.direction * s.t;
@@ -149,14 +186,15 @@ bool refineLeg(const SectionModel& model, const Leg& leg, int k, std::array<doub
       const SectionPoint a = before(model, leg, c, i);
       const SectionPoint b = onInterface(model, i + 1, c[i]);
       const double x = onInterface(model, i, c[i - 1]).x;
-      c[i - 1] = leastOnInterface(model, i, c[i - 1],
-                                  {a, b, model.meanSlowness(i, a.x, x), model.meanSlowness(i + 1, x, b.x)});
+      c[i - 1] = leastOnInterface(
+          model, i, c[i - 1],
+          {a, b, model.meanSlowness(i, a.x, x), model.meanSlowness(i + 1, x, b.x), curvedAbove(model, i)});
     }
     double move = 0.0;
     for (int i = 0; i < k; ++i) {
       move = std::max(move, std::abs(c[i] - old[i]));
     }
-    if (move < 1e-3) {
+    if (move < kStill) {
       break;
     }
   }
@@ -164,9 +202,9 @@ bool refineLeg(const SectionModel& model, const Leg& leg, int k, std::array<doub
 }
 
 double legTime(const SectionModel& model, SectionPoint station, int k, const std::array<double, kMostLayers - 1>& c) {
-  double time = 0.0;
-  SectionPoint from = station;
-  for (int i = 1; i <= k; ++i) {
+  SectionPoint from = onInterface(model, 1, c[0]);
+  double time = model.firstLayer(station, from, distance(station, from)).time;
+  for (int i = 2; i <= k; ++i) {
     const SectionPoint to = onInterface(model, i, c[i - 1]);
     time += distance(from, to) * model.meanSlowness(i, from.x, to.x);
     from = to;
@@ -209,10 +247,14 @@ void refineHeadWave(const SectionModel& model, const HullTable& hull, SectionPoi
     bool entryBends = false;
     bool exitBends = false;
     for (int round = 0; round < rounds; ++round) {
+      const double before = wave.up[k - 1];
       const SectionPoint first = onInterface(model, k, wave.bends.empty() ? wave.up[k - 1] : wave.bends.front());
       entryBends = refineLeg(model, {shot, first, entry, direction}, k, wave.down);
       const SectionPoint last = onInterface(model, k, wave.bends.empty() ? wave.down[k - 1] : wave.bends.back());
       exitBends = refineLeg(model, {geophone, last, exit, -direction}, k, wave.up);
+      if (round > 0 && std::abs(wave.up[k - 1] - before) < kStill) {
+        break;
+      }
     }
     if (entryBends) {
       wave.bends.insert(wave.bends.begin(), entry);

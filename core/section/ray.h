@@ -9,12 +9,6 @@
 
 namespace strikeplate {
 
-/// Place of a geophone or a shot in the vertical plane of the line, m; y is elevation.
-struct SectionPoint {
-  double x = 0.0;
-  double y = 0.0;
-};
-
 /// A way from a shot to a geophone along the top of layer `refractor` + 1.
 ///
 /// down[i - 1] and up[i - 1] say where the shot's and the geophone's leg cross interface i, in node units; between

@@ -60,18 +60,25 @@ class Derivative {
     return length * slowness;
   }
 
+  /// Through the first layer; `atB` takes the derivative by b's elevation.
+  template <class AtB>
+  void first(SectionPoint a, SectionPoint b, double length, AtB&& atB) {
+    const SectionModel::FirstLayerTime t = model_.firstLayer(a, b, length);
+    velocity(1, a.x, b.x, -t.perLogVelocity);
+    atB(t.perRise);
+    if (model_.layout.gradient) {
+      gatherer_.add(model_.layout.gradientIndex(), t.perGradient * model_.gradientSlope);
+    }
+  }
+
   void leg(SectionPoint station, int k, const std::array<double, kMostLayers - 1>& c) {
-    SectionPoint from = station;
-    for (int i = 1; i <= k; ++i) {
+    SectionPoint from = onInterface(model_, 1, c[0]);
+    first(station, from, std::hypot(from.x - station.x, from.y - station.y),
+          [&](double d) { interface(1, c[0], d); });
+    for (int i = 2; i <= k; ++i) {
       const SectionPoint to = onInterface(model_, i, c[i - 1]);
-      const double u = model_.meanSlowness(i, from.x, to.x);
       const double time = piece(
-          from, to, u,
-          [&](double d) {
-            if (i > 1) {
-              interface(i - 1, c[i - 2], d);
-            }
-          },
+          from, to, model_.meanSlowness(i, from.x, to.x), [&](double d) { interface(i - 1, c[i - 2], d); },
           [&](double d) { interface(i, c[i - 1], d); });
       velocity(i, from.x, to.x, time);
       from = to;
@@ -157,7 +164,7 @@ SparseRow timeDerivative(const SectionForward& forward, int pick, int layer, Row
   const SectionPoint geophone = picks.geophones[p.geophone];
   Derivative derivative(model, gatherer);
   if (layer == 1) {
-    derivative.velocity(1, shot.x, geophone.x, forward.time(pick, 1));
+    derivative.first(shot, geophone, picks.directLength[pick], [](double) {});
   } else {
     const HeadWave& wave = forward.wave(pick, layer);
     derivative.leg(shot, wave.refractor, wave.down);

@@ -15,6 +15,8 @@ namespace {
 
 constexpr int kMostLayersTried = 5;  // by evidence; more only when asked for
 constexpr int kLiveSteps = 2;
+constexpr int kLiveHalvings = 2;
+constexpr double kLiveEnough = 0.02;  // nats
 
 SectionProblem problemOf(const TravelTimes& times, const SectionOptions& options) {
   SectionProblem p;
@@ -63,7 +65,7 @@ class LayerSearch {
     for (int layers = first; layers <= last; ++layers) {
       const double n = last - first + 1.0;
       SectionCandidate c =
-          solveLayers(problem_, times_, layers, {&progress_, (layers - first) / n, (layers - first + 1) / n});
+          solveLayers(problem_, times_, layers, best, {&progress_, (layers - first) / n, (layers - first + 1) / n});
       const bool stands = c.stands();
       const double evidence = stands ? c.logEvidence() : -std::numeric_limits<double>::infinity();
       finished_ = finished_ && c.finished;
@@ -122,10 +124,13 @@ Section solveSection(const TravelTimes& times, const SectionOptions& options, co
     return s;
   }
   if (!anyHeldDeeper(times)) {
-    const SectionCandidate one = solveLayers(problem, times, 1, {});
+    const SectionCandidate one = solveLayers(problem, times, 1, best->logEvidence(), {});
     if (one.stands() && one.logEvidence() > best->logEvidence()) {
       return undeterminedSection(times, whyOneBranch(search.first()));
     }
+  }
+  if (search.finished()) {
+    addGradient(problem, *best);
   }
   Section s = assembleSection(problem, times, options, *best);
   s.layerCounts = search.evidences(*best);
@@ -148,8 +153,8 @@ Section resolveSection(const TravelTimes& times, const SectionOptions& options, 
   candidate.layers = memory.layers;
   candidate.centre = recalled->centre;
   SectionMode mode;
-  const auto prior =
-      std::make_shared<const SectionPrior>(problem.grid, problem.layout(memory.layers), recalled->centre);
+  const auto prior = std::make_shared<const SectionPrior>(
+      problem.grid, problem.layout(memory.layers, recalled->gradient), recalled->centre);
   if (recalled->xi.size() != prior->columns()) {
     return solveSection(times, options);
   }
@@ -160,11 +165,9 @@ Section resolveSection(const TravelTimes& times, const SectionOptions& options, 
   state.labelsFree = true;
   state.noise = PickNoise::Shape::kMixture;
   mode.prior = prior;
-  mode.inversion = std::make_shared<SectionInversion>(problem, *prior, state);
-  state = mode.inversion->state();
-  state.doubt = mode.inversion->measureDoubt();
-  mode.inversion->restart(std::move(state));
-  mode.converged = mode.inversion->iterate(kLiveSteps);
+  mode.inversion = std::make_shared<SectionInversion>(problem, *prior, std::move(state));
+  mode.inversion->setDoubt(mode.inversion->measureDoubt());
+  mode.converged = mode.inversion->iterate(kLiveSteps, kLiveEnough, kLiveHalvings);
   const LinearisedPosterior posterior = mode.inversion->linearise();
   for (const auto& [choice, weight] : recalled->choices) {
     mode.fits.push_back({posterior.fit(choice), weight});

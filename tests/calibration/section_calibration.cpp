@@ -158,7 +158,8 @@ void printTables(const std::vector<Outcome>& all) {
   printClass("noise misstated by 2", all,
              [](const Outcome& o) { return o.kind.noise == SurveyKind::Noise::kMisstated; });
   printClass("5 % gross", all, [](const Outcome& o) { return o.kind.noise == SurveyKind::Noise::kGross; });
-  printVelocity("first layer", all, [](const Outcome&) { return 1; });
+  printVelocity("first, constant", all, [](const Outcome& o) { return o.kind.soilVaries ? 0 : 1; });
+  printVelocity("first, varying", all, [](const Outcome& o) { return o.kind.soilVaries ? 1 : 0; });
   printVelocity("middle layer", all, [](const Outcome& o) { return o.kind.layers == 3 ? 2 : 0; });
   printVelocity("deepest layer", all, [](const Outcome& o) { return o.kind.layers; });
 }
@@ -170,7 +171,8 @@ int main(int argc, char** argv) {
   const unsigned seed = argc > 2 ? static_cast<unsigned>(std::atoi(argv[2])) : 1U;
   std::vector<Outcome> all;
   for (int i = 0; i < surveys; ++i) {
-    std::mt19937 random(seed * 100003U + static_cast<unsigned>(i));
+    std::seed_seq sequence{seed, static_cast<unsigned>(i)};
+    std::mt19937 random(sequence);
     const SurveyKind kind = randomKind(random);
     all.push_back(judge(randomSurvey(kind, random)));
     if (std::getenv("STRIKEPLATE_EACH") != nullptr) {

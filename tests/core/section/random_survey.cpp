@@ -141,7 +141,7 @@ RandomSurvey randomSurvey(const SurveyKind& kind, std::mt19937& random) {
   RandomSurvey s;
   s.kind = kind;
   do {
-    const double spacing = uniform(random, 1.5, 4.0);
+    const double spacing = uniform(random, 2.0, 5.0);
     drawSpread(s, random, spacing);
     const double length = (kind.geophones - 1) * spacing;
     drawVelocities(s, random, length);
