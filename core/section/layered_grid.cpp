@@ -3,6 +3,8 @@
 #include <algorithm>
 #include <cassert>
 #include <cmath>
+#include <limits>
+#include <utility>
 
 namespace strikeplate {
 
@@ -17,9 +19,12 @@ std::vector<double> topsAt(const LayeredGround& ground, double x) {
   return tops;
 }
 
-/// Mean slowness between two elevations of one column, the part above the ground counted as the first layer.
+/// Slowness that stands for the ground between two elevations of one column, the part above the surface counted as
+/// the first layer: the vertical slowness of a ray critical in the fastest part is kept in the mean, so that a head
+/// wave that leaves an interface between nodes is on time.
 double meanSlowness(const LayeredGround& ground, const std::vector<double>& tops, double x, double high, double low) {
-  double sum = 0.0;
+  std::vector<std::pair<double, double>> parts;  // share of the height, slowness
+  double least = std::numeric_limits<double>::infinity();
   for (int n = 0; n < ground.layers; ++n) {
     const auto k = static_cast<std::size_t>(n);
     const double upper = n == 0 ? high : std::min(high, tops[k]);
@@ -27,9 +32,13 @@ double meanSlowness(const LayeredGround& ground, const std::vector<double>& tops
     if (!(upper > lower))
       continue;
     const double middle = std::max(0.0, tops[k] - 0.5 * (upper + lower));
-    sum += (upper - lower) / ground.velocity(n, x, middle);
+    parts.emplace_back((upper - lower) / (high - low), 1.0 / ground.velocity(n, x, middle));
+    least = std::min(least, parts.back().second);
   }
-  return sum / (high - low);
+  double vertical = 0.0;
+  for (const auto& [share, slowness] : parts)
+    vertical += share * std::sqrt(slowness * slowness - least * least);
+  return std::hypot(least, vertical);
 }
 
 }  // namespace
