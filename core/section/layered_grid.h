@@ -20,8 +20,8 @@ struct LayeredGround {
 /// Slowness at the nodes of `grid`. Each node stands for the ground within half a step above and below: where an
 /// interface crosses that, its vertical slowness is the mean of both sides' for a ray critical in the faster one (own
 /// derivation, no source), so that head waves are on time wherever the interface lies between nodes. Above the ground
-/// the first layer goes on for two steps, for times at points between nodes; higher up `airVelocity` (m/s) holds, which
-/// must be slow enough that no first arrival runs there.
+/// the first layer goes on for two steps, for times at points between nodes; higher up `airVelocity` (m/s) holds,
+/// which must be slow enough that no first arrival runs there.
 SlownessGrid layeredSlowness(const LayeredGround& ground, const PlaneGrid& grid, double airVelocity = 20.0);
 
 }  // namespace strikeplate
