@@ -23,6 +23,7 @@ struct Scene {
   std::shared_ptr<const Interpretation> interpretation;  ///< null until there is one; may lag by one step of a drag
   std::shared_ptr<const std::vector<Gather>>
       gathers;  ///< one for each shot, never null; empty traces where no record
+  Selection selection;
 };
 
 /// Where a gesture stands. While it lasts a view proposes Live edits, each made from the survey as it was at the

@@ -9,18 +9,9 @@
 #include "core/survey/survey.h"
 #include "core/traveltime/arrivals.h"
 #include "core/traveltime/branch.h"
+#include "core/traveltime/reciprocity.h"
 
 namespace strikeplate {
-
-/// Times of one pair of shots read at each other's place. From the section's curves or the branches' lines,
-/// extrapolated to the shot points.
-struct ReciprocalPair {
-  int shotA = 0, shotB = 0;  ///< indices into the survey's shots
-  double timeAB = 0.0;       ///< s, shot A read at shot B
-  double timeBA = 0.0;       ///< s, shot B read at shot A
-  double tolerance = 0.0;    ///< s, 95 % from the picks' sigmas
-  [[nodiscard]] double difference() const { return timeAB - timeBA; }
-};
 
 /// A reason not to trust something.
 struct Doubt {
@@ -38,6 +29,7 @@ struct Interpretation {
   TravelTimes times;  ///< used picks, with the layer that was settled on
   std::vector<Branch> branches;
   std::vector<ReciprocalPair> reciprocals;
+  std::vector<Estimate> triggerCorrections;  ///< s, what each shot's times still seem to lack; for each shot
   std::vector<Opinion> opinions;
   Section section;
   std::vector<Doubt> doubts;
