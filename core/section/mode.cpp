@@ -150,6 +150,9 @@ void finish(SectionMode& mode, int layers) {
 }
 
 /// Why a mode cannot stand; empty when it can.
+// m/s; P waves are no faster anywhere in the crust (Sheriff and Geldart, Exploration Seismology, 1995; from memory).
+constexpr double kFastestGround = 8000.0;
+
 std::string whyNot(const SectionInversion& inversion) {
   const SectionLayout& layout = inversion.prior().layout();
   const std::vector<int>& labels = inversion.state().labels;
@@ -161,6 +164,9 @@ std::string whyNot(const SectionInversion& inversion) {
         inversion.theta()[layout.logVelocity(layer)] - inversion.theta()[layout.logVelocity(layer - 1)];
     if (!(contrast > std::log(kLeastContrast))) {
       return "layer " + std::to_string(layer) + " came out no faster than the layer above it";
+    }
+    if (!(inversion.theta()[layout.logVelocity(layer)] < std::log(kFastestGround))) {
+      return "layer " + std::to_string(layer) + " came out faster than any ground";
     }
   }
   return {};
