@@ -1,10 +1,16 @@
 #!/bin/sh
-# Sets up, builds, interprets the demo line and prints its sheet to PDF; records named after it are taken instead.
+# Sets up, builds, and opens the workstation on the demo line; files named after it are opened instead.
+# Without a display the demo line is interpreted and its sheet printed to PDF.
 set -eu
 here=$(cd "$(dirname "$0")/.." && pwd)
 sh "$here/packaging/setup.sh"
 build="$here/build/release"
-(cd "$here" && cmake --preset release && cmake --build --preset release --target strikeplate-batch)
+(cd "$here" && cmake --preset release && cmake --build --preset release --target strikeplate strikeplate-batch)
+
+if [ -n "${DISPLAY:-}" ] || [ -n "${WAYLAND_DISPLAY:-}" ]; then
+  exec "$build/app/strikeplate" "$@"
+fi
+echo "There is no display, so the sheet is printed to PDF."
 
 if [ $# -gt 0 ]; then
   set -- "$@" --sheet "$build/sheet.pdf"

@@ -25,6 +25,10 @@ SectionOptions sectionOptions(const Survey& survey) {
 
 /// Straight branches common to all shots, for times that make no section; layers stay 0 where not even that holds.
 void takeLayersFromLines(TravelTimes& times, int layers) {
+  constexpr std::size_t kFewest = 4;  // fewer make no branches
+  if (times.arrivals.size() < kFewest) {
+    return;
+  }
   for (const int count : layers > 0 ? std::vector<int>{layers} : std::vector<int>{2, 1}) {
     const std::vector<LineStart> starts = lineStarts(times, count, 1);
     if (starts.empty()) {

@@ -1,0 +1,106 @@
+#pragma once
+
+#include <vector>
+
+#include <QMainWindow>
+#include <QStringList>
+
+#include "app/desk.h"
+#include "app/job.h"
+#include "core/survey/load.h"
+#include "widgets/view.h"
+
+class QAction;
+class QLabel;
+class QProgressBar;
+class QSplitter;
+
+namespace strikeplate {
+
+class AnswerLine;
+class RecordView;
+class SectionPanel;
+class TravelTimePlot;
+
+/// The workstation's window: line strip, record view, travel-time plot, section panel and answer line over one desk.
+class MainWindow : public QMainWindow {
+  Q_OBJECT
+ public:
+  explicit MainWindow(QWidget* parent = nullptr);
+  ~MainWindow() override;
+
+  /// Reads records (files or folders) as a new line, or adds them to the present one. Runs in the background.
+  void openRecords(const QStringList& paths, bool addToLine);
+  /// Opens the demo line and picks it.
+  void openDemo();
+  void openSurvey(const QString& path);
+  [[nodiscard]] Desk& desk() { return desk_; }
+  /// True while records are being read, picked or interpreted.
+  [[nodiscard]] bool busy() const { return job_.running() || desk_.interpreting(); }
+
+ public slots:
+  void pickLine();
+  void pickShot();
+
+ protected:
+  void dragEnterEvent(QDragEnterEvent* event) override;
+  void dropEvent(QDropEvent* event) override;
+  void closeEvent(QCloseEvent* event) override;
+
+ private:
+  void buildPanes();
+  void buildMenus();
+  void buildFileMenu();
+  void buildEditMenu();
+  void buildPicksMenu();
+  void buildSectionMenu();
+  void buildViewMenu();
+  void buildHelpMenu();
+  void connectView(View* view);
+  void chooseRecords(bool addToLine);
+  void chooseSurvey();
+  void saveSurveyAs();
+  void importPicks();
+  void loadGeometry();
+  void exportCsv();
+  void printSheet();
+  void saveSheet();
+  void editInfo();
+  void editBoreholes();
+  void showKeys();
+  void showAbout();
+  void askTriggerCorrections();
+  void showScene();
+  void showSelection();
+  void showHistory();
+  void showAnswer();
+  void takeLine(const LoadedLine& line, bool addToLine, bool pickAfterwards);
+  void startPicking(int shot);
+  void setLookKind(LookKind kind);
+  void setLayers(int layers);
+  void setFeet(bool feet);
+  void say(const QString& title, const QString& sentence);
+  [[nodiscard]] QString newSurveyPath() const;
+
+  Desk desk_;
+  Job job_;
+  std::vector<View*> views_;
+  RecordView* recordView_ = nullptr;
+  TravelTimePlot* travelTimePlot_ = nullptr;
+  SectionPanel* sectionPanel_ = nullptr;
+  AnswerLine* answerLine_ = nullptr;
+  QSplitter* columns_ = nullptr;
+  QSplitter* rows_ = nullptr;
+  QProgressBar* progress_ = nullptr;
+  QLabel* hint_ = nullptr;
+  QAction* undo_ = nullptr;
+  QAction* redo_ = nullptr;
+  QAction* feet_ = nullptr;
+  QAction* solveTriggers_ = nullptr;
+  std::vector<QAction*> layerActions_;
+  double plumbLine_ = Estimate::kNaN;
+  double rangeLeft_ = 0.0, rangeRight_ = 0.0;
+  bool rangeSet_ = false;
+};
+
+}  // namespace strikeplate
