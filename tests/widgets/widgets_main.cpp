@@ -4,6 +4,10 @@
 
 int main(int argc, char** argv) {
   ::testing::InitGoogleTest(&argc, argv);
+  // Listing the tests, which the build does, needs no display either.
+  if (qEnvironmentVariableIsEmpty("QT_QPA_PLATFORM")) {
+    qputenv("QT_QPA_PLATFORM", "offscreen");
+  }
   const QApplication application(argc, argv);
   return RUN_ALL_TESTS();
 }
