@@ -3,6 +3,7 @@
 #include <map>
 #include <utility>
 
+#include "core/base/file_names.h"
 #include "core/base/numbers.h"
 #include "core/line/geometry_table.h"
 #include "core/record/oddity_list.h"
@@ -11,11 +12,6 @@ namespace strikeplate {
 namespace {
 
 constexpr double kSame = 0.01;  // m, positions closer than this do not contradict each other
-
-std::string lastPart(const std::string& path) {
-  const auto slash = path.find_last_of("/\\");
-  return slash == std::string::npos ? path : path.substr(slash + 1);
-}
 
 bool matchesFile(const GeometryRow& row, const ShotRecord& record) {
   return row.file.empty() || row.file == record.file || lastPart(row.file) == lastPart(record.file);

@@ -5,7 +5,7 @@
 #include <utility>
 
 #include "core/line/geometry_table.h"
-#include "core/record/read_records.h"
+#include "core/record/read_files.h"
 #include "core/survey/assemble.h"
 #include "core/survey/merge.h"
 #include "core/survey/survey_file.h"
@@ -56,24 +56,22 @@ class Loading {
     }
   }
 
-  void read(const std::string& path) {
-    if (isSurveyFile(path)) {
-      auto file = SurveyFile::open(path, Access::Read);
-      if (file) {
-        surveys_.push_back(file->survey());
-        ++line_.filesRead;
-      } else {
-        line_.problems.push_back(file.message());
-      }
-      return;
+  void readSurvey(const std::string& path) {
+    auto file = SurveyFile::open(path, Access::Read);
+    if (file) {
+      surveys_.push_back(file->survey());
+      ++line_.filesRead;
+    } else {
+      line_.problems.push_back(file.message());
     }
-    auto records = readRecords(path);
-    if (!records) {
-      line_.problems.push_back(records.message());
-      return;
-    }
-    ++line_.filesRead;
-    for (ShotRecord& record : *records) {
+  }
+
+  void readRecordFiles(const std::vector<std::string>& paths, const Progress& progress) {
+    FilesRead read = readFiles(paths, progress);
+    line_.finished = !read.unfinished;
+    line_.filesRead += static_cast<int>(paths.size() - read.failures.size());
+    line_.problems.insert(line_.problems.end(), read.failures.begin(), read.failures.end());
+    for (RecordPtr& record : read.records) {
       take(std::move(record));
     }
   }
@@ -102,13 +100,13 @@ class Loading {
   }
 
  private:
-  void take(ShotRecord record) {
+  void take(RecordPtr record) {
     if (table_) {
-      GeometryApplied applied = applyGeometry(*table_, record);
+      GeometryApplied applied = applyGeometry(*table_, *record);
       remarks_.insert(remarks_.end(), applied.remarks.begin(), applied.remarks.end());
-      record = std::move(applied.record);
+      record = std::make_shared<const ShotRecord>(std::move(applied.record));
     }
-    records_.push_back(std::make_shared<const ShotRecord>(std::move(record)));
+    records_.push_back(std::move(record));
   }
 
   LoadedLine& line_;
@@ -127,12 +125,17 @@ LoadedLine loadLine(const std::vector<std::string>& paths, const std::string& ge
   if (!geometryTable.empty()) {
     loading.readTable(geometryTable);
   }
-  for (std::size_t i = 0; i < paths.size(); ++i) {
-    if (!goOn(progress, 0.9 * static_cast<double>(i) / static_cast<double>(paths.size()))) {
-      line.finished = false;
-      return line;
+  std::vector<std::string> recordPaths;
+  for (const std::string& path : paths) {
+    if (isSurveyFile(path)) {
+      loading.readSurvey(path);
+    } else {
+      recordPaths.push_back(path);
     }
-    loading.read(paths[i]);
+  }
+  loading.readRecordFiles(recordPaths, progress);
+  if (!line.finished) {
+    return line;
   }
   loading.finish();
   return line;

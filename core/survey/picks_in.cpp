@@ -7,15 +7,11 @@
 #include <utility>
 
 #include "core/base/csv.h"
+#include "core/base/file_names.h"
 #include "core/base/numbers.h"
 
 namespace strikeplate {
 namespace {
-
-std::string lastPart(const std::string& path) {
-  const auto slash = path.find_last_of("/\\");
-  return slash == std::string::npos ? path : path.substr(slash + 1);
-}
 
 /// Where a trace of a file stands in the survey.
 struct Place {

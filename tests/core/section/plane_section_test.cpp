@@ -49,7 +49,7 @@ TEST(PlaneSection, TwoFlatLayersComeOutFlat) {
   expectFlat({500.0, 2000.0}, {5.0}, evenSpread(24, 2.0, {-1.0, 11.0, 23.0, 35.0, 47.0, -20.0, 66.0}));
 }
 
-// Worked example: 800 over 3200 m/s at 12 m (open course notes, University of Washington).
+// Worked example: 800 over 3200 m/s at 12 m (open worked examples, University of Washington).
 TEST(PlaneSection, TwelveMetresUnderEightHundredMetresPerSecond) {
   expectFlat({800.0, 3200.0}, {12.0}, evenSpread(24, 4.0, {-2.0, 22.0, 46.0, 70.0, 94.0}));
 }
