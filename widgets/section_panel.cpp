@@ -11,8 +11,7 @@
 
 namespace strikeplate {
 
-SectionPanel::SectionPanel(QWidget* parent)
-    : View(parent), plot_(new QCustomPlot(this)), doubts_(new QListWidget(this)) {
+SectionPanel::SectionPanel(QWidget* parent) : PositionView(parent), doubts_(new QListWidget(this)) {
   setMinimumHeight(220);
   setAccessibleName(tr("Section"));
   doubts_->setMaximumHeight(96);
@@ -21,7 +20,7 @@ SectionPanel::SectionPanel(QWidget* parent)
   auto* layout = new QVBoxLayout(this);
   layout->setContentsMargins(0, 0, 0, 0);
   layout->setSpacing(0);
-  layout->addWidget(plot_, 1);
+  layout->addWidget(&plot(), 1);
   layout->addWidget(doubts_);
   connect(doubts_, &QListWidget::currentRowChanged, this, [this](int row) {
     if (row >= 0 && scene_.interpretation && row < static_cast<int>(scene_.interpretation->doubts.size())) {
@@ -32,10 +31,6 @@ SectionPanel::SectionPanel(QWidget* parent)
       }
     }
   });
-}
-
-void SectionPanel::setAxisMargins(int left, int right) {
-  fixSideMargins(*plot_, left, right);
 }
 
 void SectionPanel::showScene(const Scene& scene) {
@@ -53,23 +48,6 @@ void SectionPanel::showScene(const Scene& scene) {
   draw();
 }
 
-void SectionPanel::showPlumbLine(double x) {
-  plumbLine_ = x;
-  draw();
-}
-
-void SectionPanel::showPositionRange(double left, double right) {
-  left_ = left;
-  right_ = right;
-  draw();
-}
-
-void SectionPanel::setLook(const Look& look) {
-  look_ = look;
-  applyLook(*plot_, look);
-  draw();
-}
-
 void SectionPanel::drawInterface(const Section& section, std::size_t index, double& lowest) {
   const Units units{scene_.survey->settings.feet};
   const SectionInterface& interface = section.interfaces[index];
@@ -84,41 +62,35 @@ void SectionPanel::drawInterface(const Section& section, std::size_t index, doub
       lowest = std::min(lowest, low.back());
     }
   }
-  const QColor colour = look_.layerColour(interface.layer);
+  const QColor colour = look().layerColour(interface.layer);
   QColor fill = colour;
   fill.setAlpha(60);
-  auto* top = plot_->addGraph();
+  auto* top = plot().addGraph();
   top->setData(x, high, true);
   top->setPen(Qt::NoPen);
-  auto* bottom = plot_->addGraph();
+  auto* bottom = plot().addGraph();
   bottom->setData(x, low, true);
   bottom->setPen(Qt::NoPen);
   top->setBrush(fill);
   top->setChannelFillGraph(bottom);
-  auto* line = plot_->addGraph();
+  auto* line = plot().addGraph();
   line->setData(x, middle, true);
-  line->setPen(QPen(colour, 1.6 * look_.lineWidth));
+  line->setPen(QPen(colour, 1.6 * look().lineWidth));
 }
 
-void SectionPanel::draw() {
-  plot_->clearPlottables();
-  plot_->clearItems();
-  if (!scene_.survey) {
-    return;
-  }
+void SectionPanel::drawData() {
   const Units units{scene_.survey->settings.feet};
   const QString unit = QString::fromStdString(units.lengthUnit());
-  plot_->xAxis->setRange(units.fromMetres(left_), units.fromMetres(right_));
-  plot_->xAxis->setLabel(tr("Position along the line (%1)").arg(unit));
-  plot_->yAxis->setLabel(tr("Elevation (%1)").arg(unit));
+  plot().xAxis->setLabel(tr("Position along the line (%1)").arg(unit));
+  plot().yAxis->setLabel(tr("Elevation (%1)").arg(unit));
   QVector<double> x, ground;
   for (const Geophone& geophone : scene_.survey->geophones) {
     x << units.fromMetres(geophone.x);
     ground << units.fromMetres(geophone.elevation);
   }
-  auto* surface = plot_->addGraph();
+  auto* surface = plot().addGraph();
   surface->setData(x, ground, true);
-  surface->setPen(QPen(look_.ground, 1.6 * look_.lineWidth));
+  surface->setPen(QPen(look().ground, 1.6 * look().lineWidth));
   surface->setScatterStyle(QCPScatterStyle(QCPScatterStyle::ssTriangleInverted, 5));
   const double highest = ground.isEmpty() ? 0.0 : *std::max_element(ground.begin(), ground.end());
   double lowest = highest - 5.0;
@@ -128,9 +100,7 @@ void SectionPanel::draw() {
     }
   }
   const double edge = 0.1 * (highest - lowest);
-  plot_->yAxis->setRange(lowest - edge, highest + edge);
-  addPlumbLine(*plot_, look_, units.fromMetres(plumbLine_));
-  plot_->replot(QCustomPlot::rpQueuedReplot);
+  plot().yAxis->setRange(lowest - edge, highest + edge);
 }
 
 }  // namespace strikeplate

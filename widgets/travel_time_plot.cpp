@@ -13,27 +13,18 @@
 
 namespace strikeplate {
 
-TravelTimePlot::TravelTimePlot(QWidget* parent) : View(parent), plot_(new QCustomPlot(this)) {
+TravelTimePlot::TravelTimePlot(QWidget* parent) : PositionView(parent) {
   setFocusPolicy(Qt::StrongFocus);
   setMinimumHeight(160);
   setAccessibleName(tr("Travel times"));
   auto* layout = new QVBoxLayout(this);
   layout->setContentsMargins(0, 0, 0, 0);
-  layout->addWidget(plot_);
-  connect(plot_, &QCustomPlot::mousePress, this, [this](QMouseEvent* event) { click(event->position()); });
-  connect(plot_, &QCustomPlot::mouseMove, this, [this](QMouseEvent* event) {
+  layout->addWidget(&plot());
+  connect(&plot(), &QCustomPlot::mousePress, this, [this](QMouseEvent* event) { click(event->position()); });
+  connect(&plot(), &QCustomPlot::mouseMove, this, [this](QMouseEvent* event) {
     const Units units{scene_.survey && scene_.survey->settings.feet};
-    emit plumbLineWanted(units.toMetres(plot_->xAxis->pixelToCoord(event->position().x())));
+    emit plumbLineWanted(units.toMetres(plot().xAxis->pixelToCoord(event->position().x())));
   });
-}
-
-void TravelTimePlot::setAxisMargins(int left, int right) {
-  fixSideMargins(*plot_, left, right);
-}
-
-void TravelTimePlot::showScene(const Scene& scene) {
-  scene_ = scene;
-  draw();
 }
 
 void TravelTimePlot::showSelection(const Selection& selection) {
@@ -41,32 +32,9 @@ void TravelTimePlot::showSelection(const Selection& selection) {
   draw();
 }
 
-void TravelTimePlot::showPlumbLine(double x) {
-  plumbLine_ = x;
-  draw();
-}
-
-void TravelTimePlot::showPositionRange(double left, double right) {
-  left_ = left;
-  right_ = right;
-  draw();
-}
-
-void TravelTimePlot::setLook(const Look& look) {
-  look_ = look;
-  applyLook(*plot_, look);
-  draw();
-}
-
-void TravelTimePlot::draw() {
-  plot_->clearPlottables();
-  plot_->clearItems();
-  if (!scene_.survey) {
-    return;
-  }
+void TravelTimePlot::drawData() {
   const Units units{scene_.survey->settings.feet};
-  plot_->xAxis->setRange(units.fromMetres(left_), units.fromMetres(right_));
-  plot_->yAxis->setLabel(tr("Time (ms)"));
+  plot().yAxis->setLabel(tr("Time (ms)"));
   double most = 10.0;
   if (scene_.interpretation) {
     const TravelTimes& times = scene_.interpretation->times;
@@ -88,20 +56,18 @@ void TravelTimePlot::draw() {
           pt << 1e3 * section.predicted[i];
         }
       }
-      auto* curve = plot_->addGraph();
+      auto* curve = plot().addGraph();
       curve->setData(px, pt, true);
-      curve->setPen(QPen(shot == scene_.selection.shot ? look_.ink : look_.faint, weight));
+      curve->setPen(QPen(shot == scene_.selection.shot ? look().ink : look().faint, weight));
       for (int layer = 0; layer < 7; ++layer) {
-        auto* graph = plot_->addGraph();
+        auto* graph = plot().addGraph();
         graph->setData(lx[layer], lt[layer], true);
         graph->setLineStyle(QCPGraph::lsNone);
-        graph->setScatterStyle(layerScatter(look_, layer, shot == scene_.selection.shot ? 8.0 : 5.0));
+        graph->setScatterStyle(layerScatter(look(), layer, shot == scene_.selection.shot ? 8.0 : 5.0));
       }
     }
   }
-  plot_->yAxis->setRange(0.0, 1.06 * most);
-  addPlumbLine(*plot_, look_, units.fromMetres(plumbLine_));
-  plot_->replot(QCustomPlot::rpQueuedReplot);
+  plot().yAxis->setRange(0.0, 1.06 * most);
 }
 
 void TravelTimePlot::click(const QPointF& position) {
@@ -111,9 +77,9 @@ void TravelTimePlot::click(const QPointF& position) {
   const Units units{scene_.survey->settings.feet};
   double nearest = 20.0;
   for (const Arrival& a : scene_.interpretation->times.arrivals) {
-    const double x = plot_->xAxis->coordToPixel(
+    const double x = plot().xAxis->coordToPixel(
         units.fromMetres(scene_.interpretation->times.geophones[static_cast<std::size_t>(a.geophone)].x));
-    const double distance = std::hypot(x - position.x(), plot_->yAxis->coordToPixel(1e3 * a.time) - position.y());
+    const double distance = std::hypot(x - position.x(), plot().yAxis->coordToPixel(1e3 * a.time) - position.y());
     if (distance < nearest) {
       nearest = distance;
       scene_.selection = {a.shot, a.trace, a.layer};
@@ -129,7 +95,7 @@ void TravelTimePlot::keyPressEvent(QKeyEvent* event) {
   if (layer >= 0 && layer <= 6 && s.shot >= 0 && s.trace >= 0) {
     emit proposed(edits::assignLayer(*scene_.survey, s.shot, {s.trace}, layer), Phase::Commit);
   } else {
-    View::keyPressEvent(event);
+    PositionView::keyPressEvent(event);
   }
 }
 

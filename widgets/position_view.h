@@ -1,0 +1,41 @@
+#pragma once
+
+#include "widgets/view.h"
+
+class QCPItemStraightLine;
+class QCustomPlot;
+
+namespace strikeplate {
+
+/// What the views with a plot over the position axis have in common: the plot, the shared range, the look, and the
+/// plumb line, which stands on a layer of its own so that following the pointer repaints nothing else.
+class PositionView : public View {
+  Q_OBJECT
+ public:
+  explicit PositionView(QWidget* parent = nullptr);
+  /// Left and right margins of the plot, px; equal ones make equal position axes.
+  void setAxisMargins(int left, int right);
+  void showScene(const Scene& scene) override;
+  void showPlumbLine(double x) override;
+  void showPositionRange(double left, double right) override;
+  void setLook(const Look& look) override;
+
+ protected:
+  /// Fills the plot anew from scene() and look(); the position axis is set already.
+  virtual void drawData() = 0;
+  void draw();
+
+  [[nodiscard]] QCustomPlot& plot() const { return *plot_; }
+  [[nodiscard]] const Look& look() const { return look_; }
+  Scene scene_;
+
+ private:
+  void placePlumbLine();
+
+  Look look_ = Look::of(LookKind::Light);
+  QCustomPlot* plot_;
+  QCPItemStraightLine* line_;
+  double left_ = 0.0, right_ = 100.0, plumbLine_ = Estimate::kNaN;
+};
+
+}  // namespace strikeplate
