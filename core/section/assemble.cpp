@@ -239,8 +239,9 @@ Section assembleSection(const SectionProblem& problem, const TravelTimes& times,
   }
   addVelocities(s, problem, f, posterior);
   addPicks(s, problem, candidate);
-  for (int shot = 0; shot < f.layout.delays; ++shot) {
-    s.triggerDelays.push_back(posterior.functionals[f.delay(shot)].estimate());
+  for (int shot = 0; problem.solvesDelays() && shot < f.layout.delays; ++shot) {
+    s.triggerDelays.push_back(problem.delaySigma[shot] > 0.0 ? posterior.functionals[f.delay(shot)].estimate()
+                                                             : Estimate::none("not solved for"));
   }
   s.noiseScale = SectionPrior::noise(candidate.modes.front().inversion->state().choice.noise);
   s.memory = remember(problem, candidate);

@@ -15,6 +15,10 @@ constexpr double kDoubtReach = 8.0;  // scaled sigmas; layers further apart do n
 
 }  // namespace
 
+bool SectionProblem::solvesDelays() const {
+  return std::any_of(delaySigma.begin(), delaySigma.end(), [](double s) { return s > 0.0; });
+}
+
 SectionInversion::SectionInversion(const SectionProblem& problem, const SectionPrior& prior, SectionState state)
     : problem_(&problem), prior_(&prior) {
   restart(std::move(state));
@@ -49,14 +53,13 @@ EarliestTime earliestTime(const SectionForward& forward, int pick, double doubt)
 }
 
 double SectionInversion::predicted(int pick) const {
-  const double delay = problem_->solveDelays ? theta_[prior_->layout().delay(problem_->picks.picks[pick].shot)] : 0.0;
-  return forward_->time(pick, state_.labels[pick]) + delay;
+  return forward_->time(pick, state_.labels[pick]) + theta_[prior_->layout().delay(problem_->picks.picks[pick].shot)];
 }
 
 double SectionInversion::expectedFor(const SectionForward& forward, const SectionState& state,
                                      const Eigen::VectorXd& theta, int pick) const {
   const SectionPick& p = problem_->picks.picks[pick];
-  const double delay = problem_->solveDelays ? theta[prior_->layout().delay(p.shot)] : 0.0;
+  const double delay = theta[prior_->layout().delay(p.shot)];
   if (state.doubt.empty() || p.heldLayer > 0) {
     return forward.time(pick, state.labels[pick]) + delay;
   }
@@ -173,7 +176,7 @@ void SectionInversion::setDoubt(std::vector<double> doubt) {
   objective_ = objectiveOf(state_, theta_, *forward_);
 }
 
-LinearisedPosterior SectionInversion::linearise() const {
+NormalEquations SectionInversion::pickEquations() const {
   const SectionLayout& layout = prior_->layout();
   const Eigen::VectorXd fromMean = theta_ - prior_->mean();
   const PickNoise noise(state_.noise);
@@ -186,6 +189,13 @@ LinearisedPosterior SectionInversion::linearise() const {
     const double r = p.time - expected(i);
     picks.add(row, r + row.dot(fromMean), noise.weight(r / (s * p.sigma)) / (p.sigma * p.sigma));
   }
+  return picks;
+}
+
+LinearisedPosterior SectionInversion::linearise() const {
+  const SectionLayout& layout = prior_->layout();
+  const Eigen::VectorXd fromMean = theta_ - prior_->mean();
+  RowGatherer gatherer(layout.size());
   NormalEquations exact(problem_->boreholes.empty() ? 0 : layout.size());
   for (const Borehole& b : problem_->boreholes) {
     if (b.layer > layout.layers) {
@@ -196,7 +206,7 @@ LinearisedPosterior SectionInversion::linearise() const {
     const double r = m.grid->at(m.z[0], b.x) - b.depth - m.grid->at(m.z[b.layer - 1], b.x);
     exact.add(row, r + row.dot(fromMean), 1.0 / (b.sigma * b.sigma));
   }
-  return {*prior_, std::move(picks), std::move(exact)};
+  return {*prior_, pickEquations(), std::move(exact)};
 }
 
 double SectionInversion::stepLimit(const Eigen::VectorXd& towards) const {

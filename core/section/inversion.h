@@ -17,10 +17,12 @@ struct SectionProblem {
   SectionGrid grid;
   SectionPicks picks;
   std::vector<Borehole> boreholes;  ///< only those that enter as data
-  bool solveDelays = false;
+  std::vector<double> delaySigma;   ///< s, prior of each shot's trigger delay; 0 where it is held at none
+  std::vector<double> delayStart;   ///< s, where the search for the delays starts; empty: at none
 
+  [[nodiscard]] bool solvesDelays() const;
   [[nodiscard]] SectionLayout layout(int layers, bool gradient = false) const {
-    return {layers, grid.knots, grid.velocityKnots, solveDelays ? static_cast<int>(picks.shots.size()) : 0, gradient};
+    return {layers, grid.knots, grid.velocityKnots, static_cast<int>(delaySigma.size()), gradient};
   }
 };
 
@@ -59,6 +61,8 @@ class SectionInversion {
   void setDoubt(std::vector<double> doubt);
   /// Replaces the state and predicts anew.
   void restart(SectionState state);
+  /// Normal equations of the picks linearised where it stands, weighted as they are now; lower triangle.
+  [[nodiscard]] NormalEquations pickEquations() const;
   /// The problem linearised where it stands, picks weighted as they are now.
   [[nodiscard]] LinearisedPosterior linearise() const;
   /// ln of likelihood (mixture) times prior at the state.

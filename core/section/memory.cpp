@@ -12,12 +12,17 @@ std::vector<double> signature(const SectionProblem& problem, int layers) {
   const SectionLayout layout = problem.layout(layers);
   return {static_cast<double>(layers),
           static_cast<double>(layout.knots),
-          static_cast<double>(layout.delays),
+          static_cast<double>(problem.picks.shots.size()),
           static_cast<double>(layout.velocityKnots),
           problem.grid.start,
           problem.grid.knotSpacing,
           problem.grid.lineStart,
           problem.grid.lineEnd};
+}
+
+/// Delays of all shots are solved for only when asked for; the evidence asks for some at most.
+bool allSolved(const std::vector<double>& delaySigma) {
+  return !delaySigma.empty() && std::all_of(delaySigma.begin(), delaySigma.end(), [](double s) { return s > 0.0; });
 }
 
 void put(std::vector<double>& out, const HyperChoice& c) {
@@ -76,6 +81,7 @@ SectionMemory remember(const SectionProblem& problem, const SectionCandidate& ca
   std::vector<double>& n = m.numbers;
   n = signature(problem, candidate.layers);
   n.push_back(mode.prior->layout().gradient ? 1.0 : 0.0);
+  n.insert(n.end(), problem.delaySigma.begin(), problem.delaySigma.end());
   n.insert(n.end(), candidate.centre.depth.begin(), candidate.centre.depth.end());
   n.insert(n.end(), candidate.centre.logVelocity.begin(), candidate.centre.logVelocity.end());
   n.push_back(candidate.centre.firstSigma);
@@ -104,6 +110,13 @@ std::optional<Recalled> recall(const SectionProblem& problem, const SectionMemor
   }
   Recalled out;
   out.gradient = reader.integer(1) == 1;
+  out.centre.delaySigma.resize(problem.picks.shots.size());
+  for (double& sigma : out.centre.delaySigma) {
+    sigma = reader.number();
+  }
+  if (problem.solvesDelays() != allSolved(out.centre.delaySigma)) {
+    return std::nullopt;
+  }
   for (int k = 1; k < memory.layers; ++k) {
     out.centre.depth.push_back(reader.number());
   }

@@ -60,6 +60,10 @@ SectionState startState(const SectionProblem& problem, const SectionPrior& prior
     const int column = prior.velocityColumn(layer);
     s.xi[column] = (logVelocities[layer - 1] - prior.mean()[layout.logVelocity(layer)]) / scales[column];
   }
+  for (std::size_t shot = 0; shot < problem.delayStart.size(); ++shot) {
+    const Eigen::Index column = prior.delayColumn(static_cast<int>(shot));
+    s.xi[column] = scales[column] > 0.0 ? problem.delayStart[shot] / scales[column] : 0.0;
+  }
   return s;
 }
 
@@ -67,6 +71,7 @@ PriorCentre centreOf(const SectionProblem& problem, const LineStart& start) {
   PriorCentre c;
   c.depth = start.depths(0.5 * (problem.grid.lineStart + problem.grid.lineEnd), 0.25 * problem.grid.knotSpacing);
   c.logVelocity = start.logVelocities();
+  c.delaySigma = problem.delaySigma;
   const auto direct = std::count(start.labels.begin(), start.labels.end(), 1);
   if (direct < 5) {
     c.logVelocity[0] = std::min(std::log(kFirstVelocity), c.logVelocity.back() - 0.3);

@@ -10,7 +10,6 @@ namespace {
 
 constexpr double kPlaneDepthSigma = 0.2;  // line lengths
 constexpr double kSlopeSigma = 0.15;
-constexpr double kDelaySigma = 3e-3;     // s
 constexpr double kGradientMean = 20.0;   // 1/s
 constexpr double kGradientSigma = 40.0;  // 1/s
 constexpr double kLogNoiseSigma = 0.7;
@@ -65,6 +64,7 @@ SectionPrior::SectionPrior(const SectionGrid& grid, const SectionLayout& layout,
       knotSpacing_(grid.knotSpacing),
       firstSigma_(centre.firstSigma),
       otherSigma_(centre.logVelocitySigma),
+      delaySigma_(Eigen::VectorXd::Map(centre.delaySigma.data(), layout.delays)),
       knotX_(grid.knotX),
       centre_(0.5 * (grid.lineStart + grid.lineEnd)) {
   columns_ = velocityColumn(1) + layout.layers + 2 * layout.velocityKnots + layout.delays + (layout.gradient ? 1 : 0);
@@ -136,7 +136,7 @@ Eigen::VectorXd SectionPrior::scales(const HyperChoice& choice) const {
   at += layout_.layers;
   s.segment(at, layout_.velocityKnots).setConstant(deviation(choice.soil));
   s.segment(at + layout_.velocityKnots, layout_.velocityKnots).setConstant(deviation(choice.rock));
-  s.segment(at + 2 * layout_.velocityKnots, layout_.delays).setConstant(kDelaySigma);
+  s.segment(at + 2 * layout_.velocityKnots, layout_.delays) = delaySigma_;
   if (layout_.gradient) {
     s[columns_ - 1] = kGradientSigma;
   }

@@ -28,15 +28,16 @@ struct PriorCentre {
   std::vector<double> logVelocity;  ///< of each layer
   double logVelocitySigma = 0.5;    ///< of all layers but the first
   double firstSigma = 0.5;          ///< of the first layer
+  std::vector<double> delaySigma;   ///< s, of each shot's trigger delay; empty when the layout has none
 };
 
 /// Gaussian prior of the unknowns, theta = mean + Lambda xi with xi standard normal.
 ///
 /// An interface is a plane (depth sd 0.2 line lengths, slope sd 0.15) plus a Matern 3/2 process along the line
 /// (Rasmussen & Williams 2006, eq. 4.17); log velocities are normal; their deviations along the line Matern 3/2 in
-/// the first layer and 1/2 in the deepest; delays of shots normal with sd 3 ms; q of a gradient normal about 20 with
-/// sd 40 per second. Only scales depend on amplitudes: the columns of Lambda are unit factors times a diagonal, so an
-/// amplitude is tried without a matrix product.
+/// the first layer and 1/2 in the deepest; delays of shots normal with the given sd; q of a gradient normal about 20
+/// with sd 40 per second. Only scales depend on amplitudes: the columns of Lambda are unit factors times a diagonal,
+/// so an amplitude is tried without a matrix product.
 class SectionPrior {
  public:
   SectionPrior(const SectionGrid& grid, const SectionLayout& layout, const PriorCentre& centre);
@@ -67,6 +68,9 @@ class SectionPrior {
   /// First column of interface k: the plane's two, then the process.
   [[nodiscard]] int firstColumn(int k) const { return (k - 1) * (layout_.knots + 2); }
   [[nodiscard]] int velocityColumn(int layer) const { return layout_.interfaces() * (layout_.knots + 2) + layer - 1; }
+  [[nodiscard]] int delayColumn(int shot) const {
+    return velocityColumn(layout_.layers + 1) + 2 * layout_.velocityKnots + shot;
+  }
 
  private:
   SectionLayout layout_;
@@ -74,6 +78,7 @@ class SectionPrior {
   double knotSpacing_;
   double firstSigma_;
   double otherSigma_;
+  Eigen::VectorXd delaySigma_;
   int columns_;
   Eigen::VectorXd mean_;
   const Eigen::MatrixXd& interfaceFactor(int lengthChoice) const;

@@ -46,7 +46,7 @@ struct Section {
   std::vector<int> layerOf;                        ///< layer of the earliest predicted arrival, for each arrival
   std::vector<double> layerProbability;            ///< posterior probability of that assignment, 0 to 1
   std::vector<double> inlierProbability;           ///< that the pick belongs to the well-behaved ones, 0 to 1
-  std::vector<Estimate> triggerDelays;             ///< s, for each shot, when they were solved for
+  std::vector<Estimate> triggerDelays;             ///< s, for each shot; empty when none was solved for
   double noiseScale = 1.0;                         ///< factor on the stated pick sigmas, learnt from the misfit
   double rms = 0.0;                                ///< s, of used picks' residuals
   std::vector<LayerCountEvidence> layerCounts;

@@ -2,11 +2,14 @@
 
 #include <algorithm>
 #include <cmath>
+#include <limits>
+#include <memory>
 #include <optional>
 #include <utility>
 
 #include "core/section/assemble.h"
 #include "core/section/check.h"
+#include "core/section/late_shots.h"
 #include "core/section/memory.h"
 #include "core/section/mode.h"
 
@@ -16,13 +19,14 @@ namespace {
 constexpr int kMostLayersTried = 5;  // by evidence; more only when asked for
 constexpr int kLiveSteps = 2;
 constexpr int kLiveHalvings = 2;
-constexpr double kLiveEnough = 0.02;  // nats
+constexpr double kLiveEnough = 0.02;    // nats
+constexpr double kLogDelayWorth = 3.0;  // what trigger delays must gain
 
 SectionProblem problemOf(const TravelTimes& times, const SectionOptions& options) {
   SectionProblem p;
   p.grid = makeSectionGrid(times);
   p.picks = makeSectionPicks(times);
-  p.solveDelays = options.solveTriggerDelays;
+  p.delaySigma.assign(p.picks.shots.size(), options.solveTriggerDelays ? kTriggerSigma : 0.0);
   for (const Borehole& b : options.boreholes) {
     if (b.used && b.layer >= 2 && b.sigma > 0.0 && std::isfinite(b.depth) && b.x >= p.grid.lineStart &&
         b.x <= p.grid.lineEnd) {
@@ -54,22 +58,30 @@ std::string whyOneBranch(const SectionCandidate& two) {
          "; no refractor shows: a longer line or farther shots might reach one, a slower layer below stays unseen.";
 }
 
-/// Tries numbers of layers upwards until the evidence falls.
+/// Tries numbers of layers upwards until the evidence falls. Shots that stand off the section get a trigger delay
+/// of their own where the evidence asks for it, so that a late trigger does not pass for a layer.
 class LayerSearch {
  public:
-  LayerSearch(const SectionProblem& problem, const TravelTimes& times, const Progress& progress)
-      : problem_(problem), times_(times), progress_(progress) {}
+  struct Found {
+    std::shared_ptr<const SectionProblem> problem;  // the candidate's inversions refer to it
+    SectionCandidate candidate;
+
+    [[nodiscard]] double logEvidence() const {
+      return candidate.stands() ? candidate.logEvidence() : -std::numeric_limits<double>::infinity();
+    }
+  };
+
+  LayerSearch(std::shared_ptr<const SectionProblem> problem, const TravelTimes& times, const Progress& progress)
+      : problem_(std::move(problem)), times_(times), progress_(progress) {}
 
   void run(int first, int last) {
     double best = -std::numeric_limits<double>::infinity();
     for (int layers = first; layers <= last; ++layers) {
       const double n = last - first + 1.0;
-      SectionCandidate c =
-          solveLayers(problem_, times_, layers, best, {&progress_, (layers - first) / n, (layers - first + 1) / n});
-      const bool stands = c.stands();
-      const double evidence = stands ? c.logEvidence() : -std::numeric_limits<double>::infinity();
-      finished_ = finished_ && c.finished;
-      tried_.push_back(std::move(c));
+      Found found = solve(layers, best, {&progress_, (layers - first) / n, (layers - first + 1) / n});
+      const double evidence = found.logEvidence();
+      finished_ = finished_ && found.candidate.finished;
+      tried_.push_back(std::move(found));
       if (!finished_ || (layers > 2 && evidence < best)) {
         break;
       }
@@ -77,32 +89,77 @@ class LayerSearch {
     }
   }
 
-  [[nodiscard]] SectionCandidate* best() {
-    SectionCandidate* found = nullptr;
-    for (SectionCandidate& c : tried_) {
-      if (c.stands() && (found == nullptr || c.logEvidence() > found->logEvidence())) {
-        found = &c;
+  [[nodiscard]] Found* best() {
+    Found* found = nullptr;
+    for (Found& f : tried_) {
+      if (f.candidate.stands() && (found == nullptr || f.logEvidence() > found->logEvidence())) {
+        found = &f;
       }
     }
     return found;
   }
 
-  [[nodiscard]] const SectionCandidate& first() const { return tried_.front(); }
+  [[nodiscard]] const SectionCandidate& first() const { return tried_.front().candidate; }
   [[nodiscard]] bool finished() const { return finished_; }
 
-  [[nodiscard]] std::vector<LayerCountEvidence> evidences(const SectionCandidate& chosen) const {
+  [[nodiscard]] std::vector<LayerCountEvidence> evidences(const Found& chosen) const {
     std::vector<LayerCountEvidence> out;
-    for (const SectionCandidate& c : tried_) {
-      out.push_back({c.layers, c.stands() ? c.logEvidence() - chosen.logEvidence() : Estimate::kNaN, c.stands()});
+    for (const Found& f : tried_) {
+      const bool stands = f.candidate.stands();
+      out.push_back({f.candidate.layers, stands ? f.logEvidence() - chosen.logEvidence() : Estimate::kNaN, stands});
     }
     return out;
   }
 
  private:
-  const SectionProblem& problem_;
+  Found solve(int layers, double toBeat, const ProgressPart& progress) {
+    const bool asked = problem_->solvesDelays() && delays_.empty();
+    Found found{problem_, solveLayers(*problem_, delays_.empty() ? times_ : withoutDelays(times_, delays_), layers,
+                                      toBeat, progress)};
+    charge(found, delays_);
+    constexpr int kMostDelayRounds = 2;
+    for (int round = 0; !asked && round < kMostDelayRounds && found.candidate.stands() && found.candidate.finished;
+         ++round) {
+      std::vector<double> delays = delaysAskedFor(*found.candidate.modes.front().inversion);
+      if (!more(delays, delays_)) {
+        break;
+      }
+      auto problem = std::make_shared<const SectionProblem>(withDelays(*problem_, delays));
+      Found other{problem, solveLayers(*problem, withoutDelays(times_, delays), layers, toBeat, progress)};
+      charge(other, delays);
+      if (!(other.logEvidence() > found.logEvidence() + kLogDelayWorth)) {
+        break;
+      }
+      problem_ = std::move(problem);
+      delays_ = std::move(delays);
+      found = std::move(other);
+    }
+    return found;
+  }
+
+  /// A delay may be any shot's: each costs the logarithm of the number of shots.
+  void charge(Found& found, const std::vector<double>& delays) const {
+    const auto count = delays.size() - static_cast<std::size_t>(std::count(delays.begin(), delays.end(), 0.0));
+    for (SectionMode& mode : found.candidate.modes) {
+      mode.logEvidence -= static_cast<double>(count) * std::log(static_cast<double>(times_.shots.size()));
+    }
+  }
+
+  /// True when there is a delay that did not stand before.
+  static bool more(const std::vector<double>& delays, const std::vector<double>& before) {
+    for (std::size_t s = 0; s < delays.size(); ++s) {
+      if (delays[s] != 0.0 && (before.empty() || before[s] == 0.0)) {
+        return true;
+      }
+    }
+    return false;
+  }
+
+  std::shared_ptr<const SectionProblem> problem_;
   const TravelTimes& times_;
   const Progress& progress_;
-  std::vector<SectionCandidate> tried_;
+  std::vector<double> delays_;  // s, for each shot that has one by the evidence
+  std::vector<Found> tried_;
   bool finished_ = true;
 };
 
@@ -112,11 +169,11 @@ Section solveSection(const TravelTimes& times, const SectionOptions& options, co
   if (const std::string why = whyNoSection(times, options); !why.empty()) {
     return undeterminedSection(times, why);
   }
-  const SectionProblem problem = problemOf(times, options);
+  const auto problem = std::make_shared<const SectionProblem>(problemOf(times, options));
   LayerSearch search(problem, times, progress);
   const bool byEvidence = options.layers == 0;
   search.run(byEvidence ? deepestHeld(times) : options.layers, byEvidence ? kMostLayersTried : options.layers);
-  SectionCandidate* best = search.best();
+  LayerSearch::Found* best = search.best();
   if (best == nullptr) {
     Section s = undeterminedSection(
         times, search.finished() ? whyOneBranch(search.first()) : "Stopped before a section was found.");
@@ -124,15 +181,15 @@ Section solveSection(const TravelTimes& times, const SectionOptions& options, co
     return s;
   }
   if (!anyHeldDeeper(times)) {
-    const SectionCandidate one = solveLayers(problem, times, 1, best->logEvidence(), {});
+    const SectionCandidate one = solveLayers(*problem, times, 1, best->logEvidence(), {});
     if (one.stands() && one.logEvidence() > best->logEvidence()) {
       return undeterminedSection(times, whyOneBranch(search.first()));
     }
   }
   if (search.finished()) {
-    addGradient(problem, *best);
+    addGradient(*best->problem, best->candidate);
   }
-  Section s = assembleSection(problem, times, options, *best);
+  Section s = assembleSection(*best->problem, times, options, best->candidate);
   s.layerCounts = search.evidences(*best);
   s.finished = search.finished();
   goOn(progress, 1.0);
@@ -143,12 +200,13 @@ Section resolveSection(const TravelTimes& times, const SectionOptions& options, 
   if (const std::string why = whyNoSection(times, options); !why.empty()) {
     return undeterminedSection(times, why);
   }
-  const SectionProblem problem = problemOf(times, options);
+  SectionProblem problem = problemOf(times, options);
   const std::optional<Recalled> recalled =
       options.layers == 0 || options.layers == memory.layers ? recall(problem, memory) : std::nullopt;
   if (!recalled) {
     return solveSection(times, options);
   }
+  problem.delaySigma = recalled->centre.delaySigma;
   SectionCandidate candidate;
   candidate.layers = memory.layers;
   candidate.centre = recalled->centre;

@@ -38,6 +38,10 @@ void triggers(const Survey& survey, const Interpretation& interpretation, std::v
         (correction.value > 0 ? " too early, as after a late trigger." : " too late, as after an early trigger.");
     doubt.restsOn = "Its direct branch and its reciprocal times with the other shots, sigma " +
                     milliseconds(correction.sigma, 2) + ".";
+    const auto& solved = interpretation.section.triggerDelays;
+    if (s < solved.size() && solved[s].determined) {
+      doubt.restsOn += " The section allows for " + milliseconds(std::abs(solved[s].value)) + " of it already.";
+    }
     doubt.wouldSettle = "Apply the correction of " + milliseconds(correction.value) +
                         " (Picks, Trigger corrections) if the field notes agree; it can be undone and is printed.";
     doubts.push_back(std::move(doubt));
