@@ -82,6 +82,7 @@ void MainWindow::buildPanes() {
   rows_->addWidget(sectionPanel_);
   rows_->setStretchFactor(0, 4);
   rows_->setStretchFactor(1, 5);
+  rows_->setSizes({400, 440});
   rows_->setChildrenCollapsible(false);
   auto* right = new QWidget(this);
   auto* rightLayout = new QVBoxLayout(right);

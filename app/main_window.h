@@ -12,6 +12,7 @@
 
 class QAction;
 class QLabel;
+class QMenu;
 class QProgressBar;
 class QSplitter;
 
@@ -56,6 +57,8 @@ class MainWindow : public QMainWindow {
   void buildSectionMenu();
   void buildViewMenu();
   void buildHelpMenu();
+  void buildTravelTimeMenu(QMenu* menu);
+  void askReduction();
   void connectView(View* view);
   void chooseRecords(bool addToLine);
   void chooseSurvey();

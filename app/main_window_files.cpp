@@ -1,0 +1,153 @@
+// What the window opens, saves, prints and writes.
+#include <QFileDialog>
+#include <QFileInfo>
+#include <QPageLayout>
+#include <QPrintDialog>
+#include <QPrinter>
+#include <QSettings>
+
+#include "app/answer_line.h"
+#include "app/main_window.h"
+#include "core/report/csv_out.h"
+#include "core/report/section_dxf.h"
+#include "core/survey/geometry_edit.h"
+#include "core/survey/picks_in.h"
+#include "widgets/sheet_painter.h"
+
+namespace strikeplate {
+
+void MainWindow::chooseRecords(bool addToLine) {
+  const QStringList paths = QFileDialog::getOpenFileNames(
+      this, tr("Open shot records"), QSettings().value("folder").toString(),
+      tr("Shot records (*.sg2 *.seg2 *.dat *.sgy *.segy *.SG2 *.SEG2 *.DAT *.SGY *.SEGY);;All files (*)"));
+  if (!paths.isEmpty()) {
+    QSettings().setValue("folder", QFileInfo(paths.front()).path());
+    openRecords(paths, addToLine);
+  }
+}
+
+void MainWindow::chooseSurvey() {
+  const QString path = QFileDialog::getOpenFileName(this, tr("Open a survey"), QSettings().value("folder").toString(),
+                                                    tr("Strikeplate surveys (*.splate)"));
+  if (!path.isEmpty()) {
+    openSurvey(path);
+  }
+}
+
+void MainWindow::saveSurveyAs() {
+  QString path = QFileDialog::getSaveFileName(this, tr("Save the survey as"), QSettings().value("folder").toString(),
+                                              tr("Strikeplate surveys (*.splate)"));
+  if (path.isEmpty()) {
+    return;
+  }
+  if (!path.endsWith(".splate")) {
+    path += ".splate";
+  }
+  if (const Outcome saved = desk_.saveAs(path); !saved) {
+    say(tr("Not saved"), QString::fromStdString(saved.message()));
+  }
+}
+
+void MainWindow::importPicks() {
+  const QString path = QFileDialog::getOpenFileName(
+      this, tr("Read picks from a table"), QSettings().value("folder").toString(), tr("Tables (*.csv *.txt)"));
+  if (path.isEmpty()) {
+    return;
+  }
+  const auto imported = strikeplate::importPicks(desk_.survey(), path.toStdString());
+  if (!imported) {
+    say(tr("No picks read"), QString::fromStdString(imported.message()));
+    return;
+  }
+  if (!imported->edit.changes.empty()) {
+    desk_.commit(imported->edit);
+  }
+  if (!imported->problems.empty()) {
+    say(tr("Part of the table was not used"), QString::fromStdString(imported->problems.front()));
+  }
+}
+
+void MainWindow::loadGeometry() {
+  const QString path =
+      QFileDialog::getOpenFileName(this, tr("Lay a geometry table over the headers"),
+                                   QSettings().value("folder").toString(), tr("Tables (*.csv *.txt)"));
+  if (path.isEmpty()) {
+    return;
+  }
+  const auto edit = geometryEdit(desk_.survey(), path.toStdString());
+  if (edit) {
+    rangeSet_ = false;
+    desk_.commit(*edit);
+  } else {
+    say(tr("Geometry not changed"), QString::fromStdString(edit.message()));
+  }
+}
+
+void MainWindow::exportCsv() {
+  const QString folder = QFileDialog::getExistingDirectory(this, tr("Folder for the tables"));
+  if (folder.isEmpty() || !desk_.scene().interpretation) {
+    return;
+  }
+  const std::string base = (folder + "/").toStdString();
+  const Survey& survey = desk_.survey();
+  const Interpretation& interpretation = *desk_.scene().interpretation;
+  QStringList problems;
+  for (const Outcome& outcome : {writeTextFile(base + "picks.csv", picksCsv(survey, interpretation)),
+                                 writeTextFile(base + "depths.csv", depthsCsv(survey, interpretation)),
+                                 writeTextFile(base + "layers.csv", layersCsv(interpretation)),
+                                 writeTextFile(base + "opinions.csv", opinionsCsv(interpretation)),
+                                 writeTextFile(base + "doubts.csv", doubtsCsv(interpretation)),
+                                 writeSectionDxf(base + "section.dxf", survey, interpretation)}) {
+    if (!outcome) {
+      problems << QString::fromStdString(outcome.message());
+    }
+  }
+  if (problems.isEmpty()) {
+    answerLine_->setHint(tr("Tables and section written to %1").arg(folder));
+  } else {
+    say(tr("Not everything could be written"), problems.join("\n"));
+  }
+}
+
+void MainWindow::printSheet() {
+  if (!desk_.scene().interpretation) {
+    say(tr("Nothing to print"), tr("There is no interpretation yet; open records and pick them first."));
+    return;
+  }
+  QPrinter printer(QPrinter::HighResolution);
+  printer.setDocName(tr("Refraction interpretation"));
+  printer.setPageMargins(QMarginsF(0, 0, 0, 0), QPageLayout::Millimeter);
+  QPrintDialog dialog(&printer, this);
+  if (dialog.exec() != QDialog::Accepted) {
+    return;
+  }
+  SheetOptions options;
+  options.edits = desk_.editCount();
+  if (const Outcome printed = paintSheet(printer, desk_.survey(), *desk_.scene().interpretation, options); !printed) {
+    say(tr("Not printed"), QString::fromStdString(printed.message()));
+  }
+}
+
+void MainWindow::saveSheet() {
+  if (!desk_.scene().interpretation) {
+    say(tr("Nothing to print"), tr("There is no interpretation yet; open records and pick them first."));
+    return;
+  }
+  QString path = QFileDialog::getSaveFileName(this, tr("Save the sheet as PDF"),
+                                              QSettings().value("folder").toString(), tr("PDF (*.pdf)"));
+  if (path.isEmpty()) {
+    return;
+  }
+  if (!path.endsWith(".pdf", Qt::CaseInsensitive)) {
+    path += ".pdf";
+  }
+  SheetOptions options;
+  options.edits = desk_.editCount();
+  if (const Outcome written = writeSheetPdf(path, desk_.survey(), *desk_.scene().interpretation, options); !written) {
+    say(tr("Not written"), QString::fromStdString(written.message()));
+  } else {
+    answerLine_->setHint(tr("Sheet written to %1").arg(path));
+  }
+}
+
+}  // namespace strikeplate
