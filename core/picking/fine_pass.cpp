@@ -16,8 +16,10 @@ namespace {
 constexpr std::ptrdiff_t kBefore = 24, kAfter = 12;  // onset positions about the belief
 constexpr std::size_t kBeyond = 8;                   // samples heard after the last position
 constexpr double kTemper = 0.7;                      // the pulses are not the truth
-constexpr double kMostSupport = 10.0;                // in log probability
-constexpr double kOutside = 50.0;                    // in log probability
+constexpr double kNoiseRatio = 6.0;                  // in log probability
+constexpr int kMostStretches = 3;
+constexpr double kMostSupport = 10.0;  // in log probability
+constexpr double kOutside = 50.0;      // in log probability
 constexpr double kLeastCap = 1.2, kMostCap = 8.0;
 
 /// Largest swing in noise rms where the onset is looked for.
@@ -35,6 +37,23 @@ double signedLog(double up, double down, int polarity) {
     return logAdd(up, down);
   const double likely = std::log(1.9), unlikely = std::log(0.1);
   return logAdd(up + (polarity > 0 ? likely : unlikely), down + (polarity < 0 ? likely : unlikely));
+}
+
+/// How far the likelihood ratios of a trace are to be believed, 0 to 1. Where arrivals are looked for in stretches of
+/// its noise alone, a right noise model gives seldom more than `kNoiseRatio`; noise that swells or comes in waves
+/// gives more, and would pass for arrivals.
+double trustIn(const LineTrace& t, const PulseBank& bank) {
+  constexpr auto kLength = static_cast<std::size_t>(kBefore + kAfter);
+  double most = 0.0;
+  std::size_t end = std::min(t.noiseEnd, t.white.size());
+  for (int stretch = 0; stretch < kMostStretches && end >= kLength + kBeyond; ++stretch, end -= kLength) {
+    const std::size_t first = end - kLength - kBeyond;
+    const OnsetLikelihood like =
+        onsetLikelihood(bank, t.white, first, first + kLength, kBeyond, loudnessOf(t, first, end));
+    for (std::size_t p = 0; p < like.up.size(); ++p)
+      most = std::max(most, logAdd(like.up[p], like.down[p]));
+  }
+  return std::min(1.0, kNoiseRatio / std::max(most, 1e-9));
 }
 
 struct FineEvidence {
@@ -128,6 +147,10 @@ bool finePass(LineWork& work, const PulseBank& bank, const Progress& progress) {
       beliefFromPosterior(t);
     }
     shareSupport(work, side, own);
+    for (const std::size_t i : side) {
+      LineTrace& t = work.traces[i];
+      t.sureness = t.support * trustIn(t, bank);
+    }
   }
   return true;
 }

@@ -17,11 +17,13 @@ namespace strikeplate {
 namespace {
 
 constexpr int kCoarseRounds = 3, kFineRounds = 2;
+constexpr double kCertain = 10.0;  // in log probability
 
 LinePicks emptyPicks(const std::vector<Gather>& gathers) {
   LinePicks picks;
   for (const Gather& gather : gathers) {
     picks.onsets.emplace_back(gather.traces.size());
+    picks.sureness.emplace_back(gather.traces.size(), 0.0);
     picks.reversed.emplace_back(gather.traces.size(), false);
     picks.dead.emplace_back(gather.traces.size(), false);
   }
@@ -33,6 +35,7 @@ LinePicks picksOf(const std::vector<Gather>& gathers, const LineWork& work, bool
   for (const LineTrace& t : work.traces) {
     picks.dead[t.gather][t.trace] = !t.usable;
     picks.reversed[t.gather][t.trace] = t.reversed;
+    picks.sureness[t.gather][t.trace] = t.trusted ? kCertain : t.sureness;
     picks.onsets[t.gather][t.trace] = t.trusted ? t.trusted : decide(t);
   }
   picks.finished = finished;

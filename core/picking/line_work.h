@@ -28,6 +28,7 @@ struct LineTrace {
   bool reversed = false;
   double upness = 0.0;                       ///< ln p(first swing up) - ln p(down)
   double support = 0.0;                      ///< ln p(an arrival) - ln p(noise alone), of it and its neighbours
+  double sureness = 0.0;                     ///< support, less what this trace's noise alone can pretend
   int polarity = 0;                          ///< expected sign of the first swing, 0 = not known
   double priorMean = 0.0, priorScale = 0.0;  ///< s, from the other shots; scale 0 = no prior
 

@@ -12,6 +12,7 @@
 #include "core/section/late_shots.h"
 #include "core/section/memory.h"
 #include "core/section/mode.h"
+#include "core/section/predict.h"
 
 namespace strikeplate {
 namespace {
@@ -232,6 +233,30 @@ Section resolveSection(const TravelTimes& times, const SectionOptions& options, 
   }
   candidate.modes.push_back(std::move(mode));
   return assembleSection(problem, times, options, candidate);
+}
+
+std::vector<double> predictedTimes(const TravelTimes& wanted, const Section& section, const SectionOptions& options) {
+  std::vector<double> out;
+  if (!section.determined) {
+    return out;
+  }
+  SectionProblem problem = problemOf(wanted, options);
+  const std::optional<Recalled> recalled = recall(problem, section.memory);
+  if (!recalled) {
+    return out;
+  }
+  problem.delaySigma = recalled->centre.delaySigma;
+  const SectionLayout layout = problem.layout(section.memory.layers, recalled->gradient);
+  const SectionPrior prior(problem.grid, layout, recalled->centre);
+  if (recalled->xi.size() != prior.columns()) {
+    return out;
+  }
+  const Eigen::VectorXd theta = prior.apply(recalled->choice, recalled->xi);
+  const SectionForward forward(makeSectionModel(problem.grid, layout, theta), problem.picks);
+  for (int i = 0; i < problem.picks.count(); ++i) {
+    out.push_back(forward.time(i, forward.earliest(i)) + theta[layout.delay(problem.picks.picks[i].shot)]);
+  }
+  return out;
 }
 
 }  // namespace strikeplate

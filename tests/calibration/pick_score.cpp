@@ -72,7 +72,7 @@ std::vector<ShotPointBlows> readAll(const std::vector<std::string>& files) {
 }
 
 void writePicks(std::ostream& out, const std::vector<ShotPointBlows>& shots, const LinePicks& picks) {
-  out << "file,trace,shot_x_m,geophone_x_m,time_s,sigma_s\n";
+  out << "file,trace,shot_x_m,geophone_x_m,time_s,sigma_s,sureness\n";
   for (std::size_t g = 0; g < shots.size(); ++g) {
     for (const Blow& blow : shots[g].blows) {
       for (std::size_t i = 0; i < picks.onsets[g].size(); ++i) {
@@ -80,7 +80,8 @@ void writePicks(std::ostream& out, const std::vector<ShotPointBlows>& shots, con
         out << blow.file << ',' << i + 1 << ',' << fullPrecision(shots[g].gather.shot.x) << ','
             << fullPrecision(shots[g].gather.geophones[i].x) << ','
             << (onset ? fullPrecision(onset->time + blow.lag) : "") << ','
-            << (onset ? fullPrecision(onset->sigma) : "") << '\n';
+            << (onset ? fullPrecision(onset->sigma) : "") << ','
+            << fullPrecision(picks.sureness[g][i]) << '\n';
       }
     }
   }
