@@ -9,7 +9,7 @@
 namespace strikeplate {
 namespace {
 
-constexpr double kSure = 8.0;              // in log probability
+constexpr double kSure = 9.5;              // in log probability
 constexpr double kExpectedSigma = 1.5e-3;  // s, of the section's expectation, with heavy tails
 
 bool isTrusted(const ShotTrace& trace, const AutoPickOptions& options) {
