@@ -11,7 +11,12 @@ namespace {
 /// Low and high moved and cut so that they lie within the limits.
 void keepWithin(double& low, double& high, double lowLimit, double highLimit, double least) {
   const double most = highLimit - lowLimit;
-  const double width = std::clamp(high - low, std::min(least, most), most);
+  if (high - low >= most) {
+    low = lowLimit;
+    high = highLimit;
+    return;
+  }
+  const double width = std::max(high - low, std::min(least, most));
   const double middle = std::clamp(0.5 * (low + high), lowLimit + 0.5 * width, highLimit - 0.5 * width);
   low = middle - 0.5 * width;
   high = middle + 0.5 * width;

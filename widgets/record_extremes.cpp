@@ -10,23 +10,13 @@ namespace {
 constexpr float kNone = std::numeric_limits<float>::infinity();
 
 /// Value between samples; `at` must lie within 0 and size - 1.
-float valueAt(std::span<const float> samples, double at) {
+inline float valueAt(std::span<const float> samples, double at) {
   const auto i = static_cast<std::size_t>(at);
   if (i + 1 >= samples.size()) {
     return samples.back();
   }
   const auto f = static_cast<float>(at - static_cast<double>(i));
   return samples[i] + f * (samples[i + 1] - samples[i]);
-}
-
-void extremesOf(std::span<const float> samples, float& low, float& high) {
-  float least = low, most = high;
-  for (const float value : samples) {
-    least = std::min(least, value);
-    most = std::max(most, value);
-  }
-  low = least;
-  high = most;
 }
 
 }  // namespace
@@ -39,38 +29,45 @@ void rowExtremes(std::span<const float> samples, double first, double samplesPer
     return;
   }
   const double end = static_cast<double>(samples.size() - 1);
-  for (std::size_t row = 0; row < rows; ++row) {
-    const double from = std::max(0.0, first + static_cast<double>(row) * samplesPerRow);
+  double from = std::max(0.0, first);
+  if (from > end) {
+    return;
+  }
+  float border = valueAt(samples, from);
+  const auto begin = static_cast<std::size_t>(std::max(0.0, std::floor(-first / samplesPerRow)));
+  for (std::size_t row = begin; row < rows && from <= end; ++row) {
     const double to = std::min(end, first + static_cast<double>(row + 1) * samplesPerRow);
-    if (from > to) {
+    if (to < from) {
       continue;
     }
-    const float a = valueAt(samples, from), b = valueAt(samples, to);
-    out.low[row] = std::min(a, b);
-    out.high[row] = std::max(a, b);
-    const auto inside = static_cast<std::size_t>(std::ceil(from));
-    const auto last = static_cast<std::size_t>(std::floor(to));
-    if (inside <= last) {
-      extremesOf(samples.subspan(inside, last - inside + 1), out.low[row], out.high[row]);
+    float low = border, high = border;
+    const float* const stop = samples.data() + static_cast<std::size_t>(to) + 1;
+    for (const float* at = samples.data() + static_cast<std::size_t>(from) + 1; at < stop; ++at) {
+      low = *at < low ? *at : low;
+      high = *at > high ? *at : high;
     }
+    border = valueAt(samples, to);
+    out.low[row] = std::min(low, border);
+    out.high[row] = std::max(high, border);
+    if (to >= end) {
+      break;
+    }
+    from = to;
   }
 }
 
 void widen(RowExtremes& extremes, std::size_t reach) {
   const RowExtremes before = extremes;
   const std::size_t rows = before.low.size();
-  for (std::size_t row = 0; row < rows; ++row) {
-    if (!before.has(row)) {
-      continue;
+  for (std::size_t by = 1; by <= reach && by < rows; ++by) {
+    for (std::size_t row = 0; row + by < rows; ++row) {
+      extremes.low[row] = std::min(extremes.low[row], before.low[row + by]);
+      extremes.high[row] = std::max(extremes.high[row], before.high[row + by]);
     }
-    const std::size_t from = row - std::min(row, reach), to = std::min(rows, row + reach + 1);
-    float low = before.low[row], high = before.high[row];
-    for (std::size_t i = from; i < to; ++i) {
-      low = std::min(low, before.low[i]);
-      high = std::max(high, before.high[i]);
+    for (std::size_t row = by; row < rows; ++row) {
+      extremes.low[row] = std::min(extremes.low[row], before.low[row - by]);
+      extremes.high[row] = std::max(extremes.high[row], before.high[row - by]);
     }
-    extremes.low[row] = low;
-    extremes.high[row] = high;
   }
 }
 

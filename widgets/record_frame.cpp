@@ -98,10 +98,10 @@ struct Row {
   QPainter& painter;
   double right = -1e9;  ///< px, end of the last label
 
-  /// Writes centred at x unless the label would come too near the last one or leave the widget.
-  void write(double x, const QString& text, double limit) {
+  /// Writes centred at x unless the label would come too near the last one or leave the room between the limits.
+  void write(double x, const QString& text, double leftLimit, double limit) {
     const double half = 0.5 * metrics.horizontalAdvance(text);
-    if (x - half < right + kGap || x + half > limit) {
+    if (x - half < std::max(right + kGap, leftLimit) || x + half > limit) {
       return;
     }
     painter.drawText(QRectF(x - half - 2.0, y, 2.0 * half + 4.0, metrics.height()), Qt::AlignCenter, text);
@@ -118,7 +118,7 @@ void paintTraceAxis(QPainter& painter, const RecordPicture& picture, const QFont
   for (const Geophone& g : picture.gather.geophones) {
     widest = std::max(widest, metrics.horizontalAdvance(number(units.fromMetres(g.x), decimals)));
   }
-  const double limit = plot.right() + 12.0;
+  const double from = plot.left() - 4.0, limit = plot.right() + 12.0;
   Row numbers{plot.bottom() + 6.0, metrics, painter},
       places{plot.bottom() + 7.0 + metrics.height(), metrics, painter};
   painter.setPen(picture.look.faint);
@@ -129,11 +129,11 @@ void paintTraceAxis(QPainter& painter, const RecordPicture& picture, const QFont
   }
   for (const int t : labelledTraces(axes, widest)) {
     painter.setPen(picture.look.ink);
-    numbers.write(axes.xOf(t), QString::number(t + 1), limit);
+    numbers.write(axes.xOf(t), QString::number(t + 1), from, limit);
     if (!picture.display.truePosition) {
       painter.setPen(picture.look.faint);
       places.write(axes.xOf(t),
-                   number(units.fromMetres(picture.gather.geophones[static_cast<std::size_t>(t)].x), decimals),
+                   number(units.fromMetres(picture.gather.geophones[static_cast<std::size_t>(t)].x), decimals), from,
                    limit);
     }
   }
@@ -142,7 +142,7 @@ void paintTraceAxis(QPainter& painter, const RecordPicture& picture, const QFont
     const SheetTicks ticks = sheetTicks(units.fromMetres(axes.range().left), units.fromMetres(axes.range().right),
                                         std::max(2, static_cast<int>(plot.width() / (widest + 5.0 * kGap))));
     for (const double value : ticks.at) {
-      places.write(axes.xAt(units.toMetres(value)), number(value, ticks.decimals), limit);
+      places.write(axes.xAt(units.toMetres(value)), number(value, ticks.decimals), from, limit);
     }
   }
   painter.setPen(picture.look.ink);

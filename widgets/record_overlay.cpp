@@ -78,7 +78,7 @@ void paintPick(QPainter& painter, const RecordPicture& picture, int trace, const
   paintLayerSymbol(painter, picture.layerOf(trace), QPointF(place.symbolX, place.y), place.size);
   painter.setBrush(Qt::NoBrush);
   if (isDoubtful(picture.scene.interpretation.get(), picture.shotIndex(), trace)) {
-    const double ring = std::max(8.0, place.size + 2.0);
+    const double ring = std::max(5.5, place.size + 2.0);
     withHalo(painter, picture.look, picture.look.warning, 1.8,
              [&] { painter.drawEllipse(QPointF(place.symbolX, place.y), ring, ring); });
   }

@@ -6,21 +6,23 @@
 namespace strikeplate {
 namespace {
 
-QRgb mixed(QRgb under, QRgb over, float f) {
-  const int w = static_cast<int>(256.0F * f + 0.5F);
-  const auto channel = [w](int a, int b) { return a + ((b - a) * w) / 256; };
-  return qRgb(channel(qRed(under), qRed(over)), channel(qGreen(under), qGreen(over)),
-              channel(qBlue(under), qBlue(over)));
+constexpr int kFull = 256;       // coverage of a pixel, and steps within one
+constexpr float kFarOut = 1e8F;  // of those steps: no screen is as wide
+
+/// `under` moved towards `over` by w of kFull; two channels at a time, each with room for 8 bits more.
+inline QRgb mixed(QRgb under, QRgb over, int share) {
+  const auto w = static_cast<quint32>(share);
+  const quint32 rest = kFull - w;
+  const quint32 kOdd = 0x00ff00ffU;
+  const quint32 redBlue = ((under & kOdd) * rest + (over & kOdd) * w) >> 8U;
+  const quint32 green = (((under >> 8U) & 0xffU) * rest + ((over >> 8U) & 0xffU) * w) >> 8U;
+  return 0xff000000U | (redBlue & kOdd) | (green << 8U);
 }
 
 }  // namespace
 
 TracePainter::TracePainter(QImage& image, const QRect& area, const TraceInk& ink, bool timeUp)
-    : image_(image),
-      area_(area),
-      ink_(ink),
-      timeUp_(timeUp),
-      coverage_(static_cast<std::size_t>(area.width()), 0.0F) {}
+    : image_(image), area_(area), ink_(ink), timeUp_(timeUp), coverage_(static_cast<std::size_t>(area.width()), 0) {}
 
 void TracePainter::paint(RowExtremes& extremes, const TraceColumn& column) {
   if (ink_.style == TraceStyle::Density) {
@@ -39,24 +41,23 @@ QRgb* TracePainter::line(int pixelRow) {
 }
 
 void TracePainter::paintLines(const RowExtremes& extremes, const TraceColumn& column) {
-  const double zero = column.zero - area_.left();
-  const double pen = ink_.style == TraceStyle::Area ? 0.0 : 0.5 * ink_.width;
-  const auto swing = [&](float value) {
-    const double px = column.perUnit * static_cast<double>(value);
-    return column.clip > 0.0 ? std::clamp(px, -column.clip, column.clip) : px;
-  };
+  const auto zero = static_cast<float>(kFull * (column.zero - area_.left()));
+  const auto perUnit = static_cast<float>(kFull * column.perUnit);
+  const float pen = ink_.style == TraceStyle::Area ? 0.0F : static_cast<float>(0.5 * kFull * ink_.width);
+  const float clip = column.clip > 0.0 ? static_cast<float>(kFull * column.clip) : kFarOut;
   for (int y = 0; y < area_.height(); ++y) {
     for (int sub = 0; sub < kRowsPerPixel; ++sub) {
       const auto row = static_cast<std::size_t>(y * kRowsPerPixel + sub);
       if (!extremes.has(row)) {
         continue;
       }
-      const double low = swing(extremes.low[row]), high = swing(extremes.high[row]);
-      if (ink_.style == TraceStyle::Wiggle || (ink_.style == TraceStyle::WiggleAndArea && high <= 0.0)) {
+      const float low = std::clamp(perUnit * extremes.low[row], -clip, clip);
+      const float high = std::clamp(perUnit * extremes.high[row], -clip, clip);
+      if (ink_.style == TraceStyle::Wiggle || (ink_.style == TraceStyle::WiggleAndArea && high <= 0.0F)) {
         cover(zero + low - pen, zero + high + pen);
       } else if (ink_.style == TraceStyle::WiggleAndArea) {
-        cover(zero + std::min(low - pen, 0.0), zero + high + pen);
-      } else if (high > 0.0) {
+        cover(zero + std::min(low - pen, 0.0F), zero + high + pen);
+      } else if (high > 0.0F) {
         cover(zero, zero + high);
       }
     }
@@ -64,27 +65,25 @@ void TracePainter::paintLines(const RowExtremes& extremes, const TraceColumn& co
   }
 }
 
-void TracePainter::cover(double from, double to) {
-  const double width = area_.width();
-  from = std::clamp(from, 0.0, width);
-  to = std::clamp(to, 0.0, width);
-  if (!(to > from)) {
+inline void TracePainter::cover(float from, float to) {
+  const int begin = static_cast<int>(std::max(from, 0.0F));
+  const int end = std::min(static_cast<int>(to), kFull * area_.width() - 1);
+  if (end <= begin) {
     return;
   }
-  constexpr float kShare = 1.0F / kRowsPerPixel;
-  const int a = static_cast<int>(from), b = std::min(static_cast<int>(to), area_.width() - 1);
+  const int a = begin / kFull, b = end / kFull;
   first_ = last_ < first_ ? a : std::min(first_, a);
   last_ = std::max(last_, b);
-  float* at = coverage_.data();
+  int* at = coverage_.data();
   if (a == b) {
-    at[a] += kShare * static_cast<float>(to - from);
+    at[a] += end - begin;
     return;
   }
-  at[a] += kShare * static_cast<float>(a + 1 - from);
+  at[a] += kFull * (a + 1) - begin;
   for (int i = a + 1; i < b; ++i) {
-    at[i] += kShare;
+    at[i] += kFull;
   }
-  at[b] += kShare * static_cast<float>(to - b);
+  at[b] += end - kFull * b;
 }
 
 void TracePainter::blendRow(int y) {
@@ -93,9 +92,9 @@ void TracePainter::blendRow(int y) {
   }
   QRgb* pixels = line(y);
   for (int i = first_; i <= last_; ++i) {
-    float& share = coverage_[static_cast<std::size_t>(i)];
-    pixels[i] = share >= 0.998F ? ink_.ink : mixed(pixels[i], ink_.ink, share);
-    share = 0.0F;
+    int& sum = coverage_[static_cast<std::size_t>(i)];
+    pixels[i] = mixed(pixels[i], ink_.ink, sum / kRowsPerPixel);
+    sum = 0;
   }
   first_ = 0;
   last_ = -1;
@@ -119,7 +118,7 @@ void TracePainter::paintDensity(const RowExtremes& extremes, const TraceColumn& 
     }
     if (any) {
       const double grey = 0.5 + 0.5 * std::clamp(column.perUnit * static_cast<double>(strongest) / full, -1.0, 1.0);
-      std::fill(line(y) + left, line(y) + right, mixed(ink_.paper, ink_.ink, static_cast<float>(grey)));
+      std::fill(line(y) + left, line(y) + right, mixed(ink_.paper, ink_.ink, static_cast<int>(kFull * grey)));
     }
   }
 }

@@ -11,7 +11,7 @@
 namespace strikeplate {
 
 /// Rows of extremes for each row of pixels: edges are smoothed by so many steps.
-inline constexpr int kRowsPerPixel = 3;
+inline constexpr int kRowsPerPixel = 2;
 
 /// Where one trace is drawn, in the image's pixels.
 struct TraceColumn {
@@ -42,7 +42,7 @@ class TracePainter {
  private:
   void paintLines(const RowExtremes& extremes, const TraceColumn& column);
   void paintDensity(const RowExtremes& extremes, const TraceColumn& column);
-  void cover(double from, double to);
+  void cover(float from, float to);  // in 256ths of a pixel from the area's left
   void blendRow(int y);
   [[nodiscard]] QRgb* line(int pixelRow);
 
@@ -50,8 +50,8 @@ class TracePainter {
   QRect area_;
   TraceInk ink_;
   bool timeUp_;
-  std::vector<float> coverage_;  // of the row in hand, 0 to 1
-  int first_ = 0, last_ = -1;    // columns touched in it
+  std::vector<int> coverage_;  // of the row in hand, summed over its rows of extremes
+  int first_ = 0, last_ = -1;  // columns touched in it
 };
 
 }  // namespace strikeplate

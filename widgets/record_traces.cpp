@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <numeric>
 #include <string>
 
 #include "core/base/numbers.h"
@@ -19,11 +20,24 @@ double quietUntil(const Gather& gather, const Shot& shot, std::size_t t) {
   return pick ? pick->time - pick->sigma : gather.offset(t) / kFastestGround - shot.triggerCorrection;
 }
 
+/// Takes the mean of the first `quiet` samples away, which is where the trace rests before its first break; of all
+/// when there are too few. The mean of all would move with every surface wave that the record's end cuts off.
+void centre(std::vector<float>& samples, double quiet) {
+  constexpr double kFewest = 8.0;
+  const auto count = quiet < kFewest ? samples.size() : std::min(samples.size(), static_cast<std::size_t>(quiet));
+  const double sum = std::accumulate(samples.begin(), samples.begin() + static_cast<std::ptrdiff_t>(count), 0.0);
+  const auto mean = static_cast<float>(count > 0 ? sum / static_cast<double>(count) : 0.0);
+  for (float& sample : samples) {
+    sample -= mean;
+  }
+}
+
 }  // namespace
 
 ShownTraces::ShownTraces(const Gather& gather, const Shot& shot, const RecordDisplay& display)
     : start_(gather.start), interval_(gather.sampleInterval) {
   Conditioning settings;
+  settings.removeDc = false;
   settings.humFrequency = display.hum;
   settings.band = {display.lowCut, display.highCut};
   settings.gainPower = display.gainPower;
@@ -33,6 +47,7 @@ ShownTraces::ShownTraces(const Gather& gather, const Shot& shot, const RecordDis
     std::replace_if(
         samples.begin(), samples.end(), [](float x) { return !std::isfinite(x); }, 0.0F);
     settings.noiseUntil = quietUntil(gather, shot, t);
+    centre(samples, (settings.noiseUntil - start_) / interval_);
     settings.reversePolarity = shot.traces[t].state == TraceState::Reversed;
     // Gain in time counts from the blow.
     traces_.push_back(conditioned(samples, interval_, start_ + shot.triggerCorrection, settings));
@@ -59,6 +74,11 @@ std::vector<float> ShownTraces::units(double from, double to, TraceScale scale) 
     std::fill(largest.begin(), largest.end(), *middle);
   }
   return largest;
+}
+
+bool sameConditioning(const RecordDisplay& a, const RecordDisplay& b) {
+  return a.lowCut == b.lowCut && a.highCut == b.highCut && a.hum == b.hum && a.gainPower == b.gainPower &&
+         a.agcWindow == b.agcWindow && a.scale == b.scale;
 }
 
 std::vector<std::string> conditioningWords(const RecordDisplay& display) {

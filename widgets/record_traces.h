@@ -10,7 +10,8 @@
 
 namespace strikeplate {
 
-/// A shot's traces as the eye is to see them: filtered and with their gain; reversed traces are turned over.
+/// A shot's traces as the eye is to see them: filtered and with their gain, resting at 0 before the first break;
+/// reversed traces are turned over.
 class ShownTraces {
  public:
   ShownTraces() = default;
@@ -27,6 +28,9 @@ class ShownTraces {
   std::vector<std::vector<float>> traces_;
   double start_ = 0.0, interval_ = 1.0;
 };
+
+/// True when both displays show the same amplitudes, but for gain and clip.
+bool sameConditioning(const RecordDisplay& a, const RecordDisplay& b);
 
 /// What the display does to the traces, in words: "low cut 10 Hz, gain over 50 ms"; empty when nothing.
 std::vector<std::string> conditioningWords(const RecordDisplay& display);

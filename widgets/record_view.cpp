@@ -188,7 +188,9 @@ void RecordView::setDisplay(const RecordDisplay& display) {
   if (gather() == nullptr) {
     return;
   }
-  conditionTraces();
+  if (!sameConditioning(before, display)) {
+    conditionTraces();
+  }
   if (before.truePosition != display.truePosition) {
     placeLimits(*gather(), display.truePosition, range_.left, range_.right);
   }
@@ -253,7 +255,9 @@ void RecordView::paintTraces() {
 
 void RecordView::drawTraces() {
   const double scale = devicePixelRatioF();
-  image_ = QImage(size() * scale, QImage::Format_RGB32);
+  if (image_.size() != size() * scale) {
+    image_ = QImage(size() * scale, QImage::Format_RGB32);
+  }
   image_.setDevicePixelRatio(scale);
   image_.fill(look_.paper);
   {
@@ -300,7 +304,10 @@ void RecordView::paintOverlay(QPainter& painter) {
     paintPredicted(painter, shown);
   }
   if (display_.reciprocal) {
+    // A shot at the end of the spread stands on the frame.
+    painter.setClipRect(axes_.plot().adjusted(-6, 0, 12, 0));
     paintReciprocal(painter, shown);
+    painter.setClipRect(axes_.plot().adjusted(0, -1, 0, 1));
   }
   paintPicks(painter, shown, scene_.selection.trace);
   if (gesture_ && gesture_->isStroke()) {

@@ -21,6 +21,7 @@ class RecordDesk : public QObject {
     scene.survey = committed;
     view.resize(720, 560);
     view.showScene(scene);
+    view.show();
     connect(&view, &View::proposed, this, [this](const Edit& edit, Phase phase) { take(edit, phase); });
     connect(&view, &View::selectionWanted, this, [this](const Selection& selection) {
       scene.selection = selection;
