@@ -56,14 +56,16 @@ void rowExtremes(std::span<const float> samples, double first, double samplesPer
   }
 }
 
-void widen(RowExtremes& extremes, std::size_t reach) {
+void widen(RowExtremes& extremes, std::size_t height) {
   const RowExtremes before = extremes;
   const std::size_t rows = before.low.size();
-  for (std::size_t by = 1; by <= reach && by < rows; ++by) {
+  for (std::size_t by = 1; by <= height / 2 && by < rows; ++by) {
     for (std::size_t row = 0; row + by < rows; ++row) {
       extremes.low[row] = std::min(extremes.low[row], before.low[row + by]);
       extremes.high[row] = std::max(extremes.high[row], before.high[row + by]);
     }
+  }
+  for (std::size_t by = 1; by <= (height - 1) / 2 && by < rows; ++by) {
     for (std::size_t row = by; row < rows; ++row) {
       extremes.low[row] = std::min(extremes.low[row], before.low[row - by]);
       extremes.high[row] = std::max(extremes.high[row], before.high[row - by]);

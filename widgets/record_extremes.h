@@ -19,7 +19,7 @@ struct RowExtremes {
 void rowExtremes(std::span<const float> samples, double first, double samplesPerRow, std::size_t rows,
                  RowExtremes& out);
 
-/// Each row widened to the extremes of the `reach` rows on either side: what a pen of 2 reach + 1 rows height covers.
-void widen(RowExtremes& extremes, std::size_t reach);
+/// Each row widened to the extremes of `height` rows (>= 1) about it: what a pen of that height covers.
+void widen(RowExtremes& extremes, std::size_t height);
 
 }  // namespace strikeplate

@@ -163,7 +163,8 @@ void paintReciprocal(QPainter& painter, const RecordPicture& picture) {
     const QString name = QString::number(other + 1);
     const double w = metrics.horizontalAdvance(name) + 4.0;
     const double left = x + 7.0 + w > axes.plot().right() ? x - 7.0 - w : x + 7.0;
-    const QRectF box(left, y - 0.5 * metrics.height(), w, metrics.height());
+    // Above the mark, for picks come in from the side.
+    const QRectF box(left, y - 1.1 * metrics.height(), w, metrics.height());
     QColor under = picture.look.paper;
     under.setAlpha(210);
     painter.fillRect(box, under);

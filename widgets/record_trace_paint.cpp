@@ -30,7 +30,7 @@ void TracePainter::paint(RowExtremes& extremes, const TraceColumn& column) {
     return;
   }
   if (ink_.style != TraceStyle::Area) {
-    widen(extremes, static_cast<std::size_t>(std::max(0.0, std::round((ink_.width * kRowsPerPixel - 1.0) / 2.0))));
+    widen(extremes, static_cast<std::size_t>(std::max(1.0, std::round(ink_.width * kRowsPerPixel))));
   }
   paintLines(extremes, column);
 }

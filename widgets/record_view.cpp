@@ -58,6 +58,9 @@ void RecordView::showSelection(const Selection& selection) {
     abandon();
   }
   takeShot(false);
+  if (hasFocus() && !gesture_) {
+    sayTrace();
+  }
 }
 
 void RecordView::takeShot(bool newRecords) {

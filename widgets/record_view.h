@@ -33,6 +33,9 @@ class RecordView : public View {
 
   [[nodiscard]] const RecordDisplay& display() const { return display_; }
   void setDisplay(const RecordDisplay& display);
+  /// The same from within, as by key or menu: says so with displayChanged().
+  void changeDisplay(const RecordDisplay& display);
+  [[nodiscard]] bool inFeet() const { return scene_.survey && scene_.survey->settings.feet; }
 
   /// Does what a key does; everything that the view can do is there.
   void perform(RecordCommand command);
@@ -96,7 +99,6 @@ class RecordView : public View {
   void showAll();
   void setRange(const RecordRange& range);
   void placeAxes();
-  void changeDisplay(const RecordDisplay& display);
   void paintTraces();
   void drawTraces();
   void paintOverlay(QPainter& painter);
@@ -104,6 +106,7 @@ class RecordView : public View {
 
   // The pointer.
   void hover(const QPointF& at);
+  void sayTrace();
   void abandon();
   void extendMarked(int trace);
   [[nodiscard]] QPointF inPlot(const QPointF& at) const;

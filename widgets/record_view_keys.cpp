@@ -249,6 +249,7 @@ void RecordView::nudge(int samples) {
   nudge_->samples += samples;
   const auto edit = nudgedPick(*nudge_->survey, *gather(), nudge_->shot, nudge_->trace, nudge_->samples);
   emit proposed(edit.value_or(Edit{}), Phase::Live);
+  sayTrace();
 }
 
 void RecordView::finishNudge() {

@@ -163,6 +163,15 @@ void RecordView::hover(const QPointF& at) {
   }
 }
 
+void RecordView::sayTrace() {
+  if (!hasTrace()) {
+    return;
+  }
+  const QString words = hoverWords(picture(), scene_.selection.trace, Estimate::kNaN);
+  setAccessibleDescription(words);
+  emit hint(words);
+}
+
 void RecordView::abandon() {
   if (!gesture_) {
     return;

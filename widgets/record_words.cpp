@@ -43,7 +43,9 @@ QString hoverWords(const RecordPicture& picture, int trace, double recorderTime)
                .arg(trace + 1)
                .arg(QString::fromStdString(units.length(picture.gather.geophones[t].x)))
                .arg(QString::fromStdString(units.length(picture.gather.offset(t))));
-  words << ms(recorderTime + correction);
+  if (std::isfinite(recorderTime)) {
+    words << ms(recorderTime + correction);
+  }
   if (of.state != TraceState::Live) {
     words << (of.stateReason.empty()
                   ? tr("trace is %1").arg(stateWord(of.state))

@@ -11,6 +11,7 @@
 #include "core/survey/survey_file.h"
 #include "tests/widgets/record_desk.h"
 #include "tests/widgets/record_scene.h"
+#include "widgets/record_display_menu.h"
 
 using namespace strikeplate;
 using namespace strikeplate::testing;
@@ -425,4 +426,28 @@ TEST(RecordView, WithoutAnythingItSaysWhatToDo) {
   QTest::mouseClick(&view, Qt::LeftButton);
   QTest::keyClick(&view, Qt::Key_Down);
   SUCCEED();
+}
+
+TEST(RecordView, TheDisplayMenuSetsAndShowsHowRecordsAreDrawn) {
+  RecordDesk desk(picked(12));
+  QMenu menu;
+  fillDisplayMenu(menu, desk.view);
+  QSignalSpy changed(&desk.view, &RecordView::displayChanged);
+  for (QAction* action : menu.actions()) {
+    if (action->text() == "Time upwards") {
+      action->trigger();
+      EXPECT_TRUE(desk.view.display().timeUp);
+    } else if (action->text() == "Low cut") {
+      QMenu* cuts = action->menu();
+      cuts->actions().at(2)->trigger();
+      EXPECT_EQ(desk.view.display().lowCut, 10.0);
+      emit cuts->aboutToShow();
+      EXPECT_TRUE(cuts->actions().at(2)->isChecked());
+      EXPECT_FALSE(cuts->actions().at(0)->isChecked());
+    } else if (action->text() == "Reduced time") {
+      emit action->menu()->aboutToShow();
+      EXPECT_EQ(action->menu()->actions().at(2)->text(), "At 1000 m/s");
+    }
+  }
+  EXPECT_EQ(changed.count(), 2);
 }
