@@ -19,6 +19,24 @@ inline float valueAt(std::span<const float> samples, double at) {
   return samples[i] + f * (samples[i + 1] - samples[i]);
 }
 
+/// Two chains side by side, for each comparison has to wait for the one before it in its chain.
+inline void takeIn(const float* at, std::size_t count, float& low, float& high) {
+  float low2 = low, high2 = high;
+  std::size_t i = 0;
+  for (; i + 1 < count; i += 2) {
+    low = std::min(low, at[i]);
+    high = std::max(high, at[i]);
+    low2 = std::min(low2, at[i + 1]);
+    high2 = std::max(high2, at[i + 1]);
+  }
+  if (i < count) {
+    low = std::min(low, at[i]);
+    high = std::max(high, at[i]);
+  }
+  low = std::min(low, low2);
+  high = std::max(high, high2);
+}
+
 }  // namespace
 
 void rowExtremes(std::span<const float> samples, double first, double samplesPerRow, std::size_t rows,
@@ -41,11 +59,8 @@ void rowExtremes(std::span<const float> samples, double first, double samplesPer
       continue;
     }
     float low = border, high = border;
-    const float* const stop = samples.data() + static_cast<std::size_t>(to) + 1;
-    for (const float* at = samples.data() + static_cast<std::size_t>(from) + 1; at < stop; ++at) {
-      low = *at < low ? *at : low;
-      high = *at > high ? *at : high;
-    }
+    const auto inside = static_cast<std::size_t>(from) + 1, stop = static_cast<std::size_t>(to) + 1;
+    takeIn(samples.data() + inside, stop > inside ? stop - inside : 0, low, high);
     border = valueAt(samples, to);
     out.low[row] = std::min(low, border);
     out.high[row] = std::max(high, border);

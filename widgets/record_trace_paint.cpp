@@ -22,7 +22,12 @@ inline QRgb mixed(QRgb under, QRgb over, int share) {
 }  // namespace
 
 TracePainter::TracePainter(QImage& image, const QRect& area, const TraceInk& ink, bool timeUp)
-    : image_(image), area_(area), ink_(ink), timeUp_(timeUp), coverage_(static_cast<std::size_t>(area.width()), 0) {}
+    : bits_(image.bits()),
+      stride_(image.bytesPerLine()),
+      area_(area),
+      ink_(ink),
+      timeUp_(timeUp),
+      coverage_(static_cast<std::size_t>(area.width()), 0) {}
 
 void TracePainter::paint(RowExtremes& extremes, const TraceColumn& column) {
   if (ink_.style == TraceStyle::Density) {
@@ -37,7 +42,7 @@ void TracePainter::paint(RowExtremes& extremes, const TraceColumn& column) {
 
 QRgb* TracePainter::line(int pixelRow) {
   const int y = timeUp_ ? area_.bottom() - pixelRow : area_.top() + pixelRow;
-  return reinterpret_cast<QRgb*>(image_.scanLine(y)) + area_.left();
+  return reinterpret_cast<QRgb*>(bits_ + y * stride_) + area_.left();
 }
 
 void TracePainter::paintLines(const RowExtremes& extremes, const TraceColumn& column) {

@@ -31,7 +31,8 @@ struct TraceInk {
 /// Draws traces into an image of 32 bits a pixel, row by row; much faster than a path for each trace.
 class TracePainter {
  public:
-  /// Draws into `area` of the image, which must lie inside it. The image must outlive the painter.
+  /// Draws into `area` of the image, which must lie inside it. The image must outlive the painter and
+  /// not be copied meanwhile.
   TracePainter(QImage& image, const QRect& area, const TraceInk& ink, bool timeUp);
 
   /// `extremes` has kRowsPerPixel rows for each pixel of the area's height, in rising time; it is used up.
@@ -46,7 +47,8 @@ class TracePainter {
   void blendRow(int y);
   [[nodiscard]] QRgb* line(int pixelRow);
 
-  QImage& image_;
+  uchar* bits_;  // of the image
+  qsizetype stride_;
   QRect area_;
   TraceInk ink_;
   bool timeUp_;

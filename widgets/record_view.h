@@ -17,10 +17,10 @@ class QMenu;
 
 namespace strikeplate {
 
-/// The traces of the selected shot with its picks. A click sets the pick of a trace at the onset nearby (Alt: exactly
-/// there), a drag moves a pick or an end of the selected trace's sigma bracket, a stroke across traces picks all that
-/// it crosses (RecordGesture); keys as in recordKeys(). The wheel zooms time, with Ctrl traces; the middle button
-/// moves both; a double click beside the traces shows the first breaks again.
+/// The traces of the selected shot with its picks. A click sets the pick of a trace at the onset nearby (Alt or Ctrl:
+/// exactly there), a drag moves a pick or an end of the selected trace's sigma bracket, a stroke across traces picks
+/// all that it crosses (RecordGesture); keys as in recordKeys(). The wheel zooms time, with Ctrl traces; the middle
+/// button moves both; a double click beside the traces shows the first breaks again.
 class RecordView : public View {
   Q_OBJECT
  public:

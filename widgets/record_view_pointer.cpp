@@ -15,7 +15,8 @@ namespace {
 constexpr double kWheelZoom = 1.2;  // for one notch
 
 bool isFree(const QMouseEvent& event) {
-  return event.modifiers().testFlag(Qt::AltModifier);
+  // Some desktops keep Alt for moving windows.
+  return (event.modifiers() & (Qt::AltModifier | Qt::ControlModifier)).toInt() != 0;
 }
 
 }  // namespace
