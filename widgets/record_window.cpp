@@ -9,7 +9,9 @@
 namespace strikeplate {
 namespace {
 
-constexpr double kSlowGround = 400.0;   // m/s, for a shot of which nothing is known
+constexpr double kSlowGround = 400.0;   // m/s; what comes slower is surface waves or sound
+constexpr double kCommonGround = 1300;  // m/s, an everyday mean to the farthest trace
+constexpr double kLate = 0.015;         // s, for delays near the shot
 constexpr double kLeastWindow = 0.020;  // s
 constexpr double kRoomAfter = 0.6;      // of the latest time
 
@@ -27,46 +29,54 @@ bool halfPicked(const Shot& shot) {
   return picked > 0 && 2 * picked >= live;
 }
 
-Known knownTimes(const Gather& gather, const Shot& shot, int shotIndex, const Interpretation* interpretation) {
-  Known known;
-  const auto add = [&](std::size_t trace, double time) {
-    if (std::isfinite(time) && time > 0.0) {
-      known.time.push_back(time);
-      known.offset.push_back(gather.offset(trace));
-    }
-  };
-  const bool picked = halfPicked(shot);
-  const auto guesses = picked ? std::vector<std::optional<Onset>>{} : pickGather(gather);
-  std::vector<double> guessed;
-  for (std::size_t t = 0; t < shot.traces.size(); ++t) {
-    if (shot.traces[t].pick && shot.traces[t].state != TraceState::Dead) {
-      add(t, shot.traces[t].pick->time + shot.triggerCorrection);
-    }
-    if (!picked && guesses[t]) {
-      guessed.push_back(guesses[t]->time + shot.triggerCorrection);
-    }
-    const int a = interpretation ? interpretation->arrivalOf(shotIndex, static_cast<int>(t)) : -1;
-    if (a >= 0 && static_cast<std::size_t>(a) < interpretation->section.predicted.size()) {
-      add(t, interpretation->section.predicted[static_cast<std::size_t>(a)]);
-    }
-  }
-  // The latest tenth of what the program saw by itself may be surface waves or noise.
-  std::sort(guessed.begin(), guessed.end());
-  const double most = guessed.empty() ? 0.0 : guessed[(guessed.size() - 1) * 9 / 10];
-  for (std::size_t t = 0; t < guesses.size(); ++t) {
-    if (guesses[t] && guesses[t]->time + shot.triggerCorrection <= most) {
-      add(t, guesses[t]->time + shot.triggerCorrection);
-    }
-  }
-  return known;
-}
-
 double farthest(const Gather& gather) {
   double offset = 0.0;
   for (std::size_t t = 0; t < gather.geophones.size(); ++t) {
     offset = std::max(offset, gather.offset(t));
   }
   return offset;
+}
+
+/// What each trace shows by itself, without what comes too late for a first break and without the latest tenth, which
+/// may be surface waves or noise.
+Known guessedTimes(const Gather& gather, double triggerCorrection) {
+  const auto onsets = pickGather(gather);
+  std::vector<std::pair<double, double>> guesses;  // time, offset
+  for (std::size_t t = 0; t < onsets.size(); ++t) {
+    const double time = onsets[t] ? onsets[t]->time + triggerCorrection : -1.0;
+    if (time > 0.0 && time <= kLate + gather.offset(t) / kSlowGround) {
+      guesses.emplace_back(time, gather.offset(t));
+    }
+  }
+  std::sort(guesses.begin(), guesses.end());
+  guesses.resize(guesses.size() - guesses.size() / 10);
+  // Weak far traces show nothing by themselves; room is left for them all the same.
+  Known known{{farthest(gather) / kCommonGround}, {farthest(gather)}};
+  for (const auto& [time, offset] : guesses) {
+    known.time.push_back(time);
+    known.offset.push_back(offset);
+  }
+  return known;
+}
+
+Known knownTimes(const Gather& gather, const Shot& shot, int shotIndex, const Interpretation* interpretation) {
+  Known known = halfPicked(shot) ? Known{} : guessedTimes(gather, shot.triggerCorrection);
+  const auto add = [&](std::size_t trace, double time) {
+    if (std::isfinite(time) && time > 0.0) {
+      known.time.push_back(time);
+      known.offset.push_back(gather.offset(trace));
+    }
+  };
+  for (std::size_t t = 0; t < shot.traces.size(); ++t) {
+    if (shot.traces[t].pick && shot.traces[t].state != TraceState::Dead) {
+      add(t, shot.traces[t].pick->time + shot.triggerCorrection);
+    }
+    const int a = interpretation ? interpretation->arrivalOf(shotIndex, static_cast<int>(t)) : -1;
+    if (a >= 0 && static_cast<std::size_t>(a) < interpretation->section.predicted.size()) {
+      add(t, interpretation->section.predicted[static_cast<std::size_t>(a)]);
+    }
+  }
+  return known;
 }
 
 }  // namespace
@@ -89,7 +99,7 @@ RecordRange homeRange(const Gather& gather, const Shot& shot, int shotIndex, con
   const Known known = knownTimes(gather, shot, shotIndex, interpretation);
   RecordRange range;
   placeLimits(gather, display.truePosition, range.left, range.right);
-  double low = 0.0, high = known.time.empty() ? farthest(gather) / kSlowGround : 0.0;
+  double low = 0.0, high = 0.0;
   for (std::size_t i = 0; i < known.time.size(); ++i) {
     const double reduced =
         known.time[i] - (display.reducingVelocity > 0.0 ? known.offset[i] / display.reducingVelocity : 0.0);

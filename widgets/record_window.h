@@ -8,8 +8,7 @@ namespace strikeplate {
 
 /// The part of a shot that matters first: times from a little before the blow to about 1.6 times its latest pick or
 /// predicted time, all traces. With fewer than half of the live traces picked the program's own look at each trace
-/// fills in, and failing that half a second per 200 m of offset. Reduced times get their own span. `interpretation`
-/// may be null.
+/// fills in. Reduced times get their own span. `interpretation` may be null.
 RecordRange homeRange(const Gather& gather, const Shot& shot, int shotIndex, const Interpretation* interpretation,
                       const RecordDisplay& display);
 
