@@ -223,7 +223,7 @@ void paintTraceStates(QPainter& painter, const RecordPicture& picture) {
       painter.fillRect(strip, QBrush(picture.look.faint, Qt::BDiagPattern));
     }
     const QString word = state == TraceState::Dead       ? tr("dead")
-                         : state == TraceState::Reversed ? tr("reversed, turned over")
+                         : state == TraceState::Reversed ? tr("reversed")
                                                          : tr("noisy");
     painter.save();
     painter.translate(x, plot.bottom() - 6.0);

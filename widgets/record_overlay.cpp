@@ -125,7 +125,7 @@ void paintPredicted(QPainter& painter, const RecordPicture& picture) {
     under.setAlpha(200);
     painter.setPen(QPen(under, 3.5));
     painter.drawLine(QPointF(x - half, y), QPointF(x + half, y));
-    QPen pen(colour, 1.4);
+    QPen pen(colour, 1.8, Qt::SolidLine, Qt::FlatCap);
     pen.setDashPattern({2.0, 2.0});
     painter.setPen(pen);
     painter.drawLine(QPointF(x - half, y), QPointF(x + half, y));

@@ -98,6 +98,8 @@ class RecordView : public View {
   void goHome();
   void showAll();
   void setRange(const RecordRange& range);
+  void showRange(const RecordRange& range);
+  void reveal();
   void placeAxes();
   void paintTraces();
   void drawTraces();

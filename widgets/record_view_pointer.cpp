@@ -67,15 +67,7 @@ void RecordView::mouseMoveEvent(QMouseEvent* event) {
     const double seconds = axes_.shownAt(panFrom_->y()) - axes_.shownAt(at.y());
     const double places = axes_.placeAt(panFrom_->x()) - axes_.placeAt(at.x());
     panFrom_ = at;
-    const RecordRange wanted = panned(range_, seconds, places);
-    if (display_.truePosition) {
-      positionLeft_ = wanted.left;
-      positionRight_ = wanted.right;
-    }
-    setRange(wanted);
-    if (display_.truePosition) {
-      emit positionRangeWanted(range_.left, range_.right);
-    }
+    showRange(panned(range_, seconds, places));
   } else if (marking_) {
     extendMarked(axes_.traceAt(at.x()));
   } else if (gesture_) {

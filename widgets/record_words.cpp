@@ -27,7 +27,9 @@ QString originWord(PickOrigin origin) {
 }
 
 QString stateWord(TraceState state) {
-  return state == TraceState::Dead ? tr("dead") : state == TraceState::Reversed ? tr("reversed") : tr("noisy");
+  return state == TraceState::Dead       ? tr("dead")
+         : state == TraceState::Reversed ? tr("reversed and shown turned over")
+                                         : tr("noisy");
 }
 
 }  // namespace

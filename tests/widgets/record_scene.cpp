@@ -44,6 +44,17 @@ Survey sharpLine(int geophones) {
   return survey;
 }
 
+Survey pickedLine(int geophones) {
+  Survey survey = sharpLine(geophones);
+  for (Shot& shot : survey.shots) {
+    for (ShotTrace& trace : shot.traces) {
+      const double x = survey.geophones[static_cast<std::size_t>(trace.geophone)].x;
+      trace.pick = Pick{onsetAt(std::abs(x - shot.point.x)), 5e-4, 0, PickOrigin::Automatic};
+    }
+  }
+  return survey;
+}
+
 Scene sceneOf(const Survey& survey) {
   Scene scene;
   scene.survey = std::make_shared<Survey>(survey);

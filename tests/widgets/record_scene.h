@@ -15,7 +15,10 @@ double onsetAt(double offset);
 /// every trace over weak noise of a fixed seed, 120 ms long; nothing picked.
 Survey sharpLine(int geophones);
 
-/// The same as a scene in which the first shot is selected.
+/// The same with every trace picked automatically where its wave arrives, sigma 0.5 ms.
+Survey pickedLine(int geophones);
+
+/// A survey as a scene in which the first shot is selected.
 Scene sceneOf(const Survey& survey);
 
 }  // namespace strikeplate::testing
