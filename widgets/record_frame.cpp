@@ -81,7 +81,9 @@ void paintTimeAxis(QPainter& painter, const RecordPicture& picture, const QFontM
   painter.setPen(picture.look.faint);
   if (ticks.at.size() > 1) {
     const double step = (ticks.at[1] - ticks.at[0]) / kMinorTicks;
-    for (double ms = ticks.at.front() - kMinorTicks * step; ms <= 1e3 * axes.range().last; ms += step) {
+    const int count = static_cast<int>(ticks.at.size() + 1) * kMinorTicks;
+    for (int k = -kMinorTicks; k < count; ++k) {
+      const double ms = ticks.at.front() + k * step;
       const double y = std::round(axes.yOfShown(1e-3 * ms)) + 0.5;
       if (y > plot.top() && y < plot.bottom()) {
         painter.drawLine(QPointF(plot.left() - 4.0, y), QPointF(plot.left(), y));

@@ -52,7 +52,7 @@ void TracePainter::paintLines(const RowExtremes& extremes, const TraceColumn& co
   const float clip = column.clip > 0.0 ? static_cast<float>(kFull * column.clip) : kFarOut;
   for (int y = 0; y < area_.height(); ++y) {
     for (int sub = 0; sub < kRowsPerPixel; ++sub) {
-      const auto row = static_cast<std::size_t>(y * kRowsPerPixel + sub);
+      const auto row = static_cast<std::size_t>(y) * kRowsPerPixel + static_cast<std::size_t>(sub);
       if (!extremes.has(row)) {
         continue;
       }
@@ -113,7 +113,7 @@ void TracePainter::paintDensity(const RowExtremes& extremes, const TraceColumn& 
     float strongest = 0.0F;
     bool any = false;
     for (int sub = 0; sub < kRowsPerPixel; ++sub) {
-      const auto row = static_cast<std::size_t>(y * kRowsPerPixel + sub);
+      const auto row = static_cast<std::size_t>(y) * kRowsPerPixel + static_cast<std::size_t>(sub);
       if (extremes.has(row)) {
         any = true;
         for (const float value : {extremes.low[row], extremes.high[row]}) {

@@ -63,7 +63,12 @@ void RecordView::mouseMoveEvent(QMouseEvent* event) {
   if (gather() == nullptr) {
     return;
   }
-  if (panFrom_) {
+  if (!event->buttons().testFlag(Qt::LeftButton)) {
+    // The release went to somebody else, such as a dialog that came up meanwhile.
+    abandon();
+    marking_ = false;
+  }
+  if (panFrom_ && event->buttons().testFlag(Qt::MiddleButton)) {
     const double seconds = axes_.shownAt(panFrom_->y()) - axes_.shownAt(at.y());
     const double places = axes_.placeAt(panFrom_->x()) - axes_.placeAt(at.x());
     panFrom_ = at;

@@ -141,3 +141,13 @@ TEST(RecordView, TimesWithoutARecordAreShownAndMoved) {
   EXPECT_NEAR(desk.trace(5).pick->time, before + 20 * desk.view.axes().secondsPerPixel(), 1e-9);
   EXPECT_FALSE(desk.view.grab().isNull());
 }
+
+TEST(RecordView, AGestureWhoseReleaseWasLostIsAbandoned) {
+  RecordDesk desk(pickedLine(24));
+  Hand hand{desk};
+  const QPoint from = desk.at(5, desk.trace(5).pick->time);
+  hand.drag({from, from + QPoint(0, 30)}, Qt::NoModifier, false);
+  hand.move(from + QPoint(0, 50), Qt::NoModifier, Qt::NoButton);
+  EXPECT_EQ(desk.abandoned, 1);
+  EXPECT_NEAR(desk.trace(5).pick->time, onsetOf(desk, 5), 1e-12);
+}
