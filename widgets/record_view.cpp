@@ -3,29 +3,206 @@
 #include <algorithm>
 #include <cmath>
 
-#include <QKeyEvent>
-#include <QMouseEvent>
-#include <QPainter>
+#include <QEvent>
 
-#include "core/base/units.h"
-#include "core/picking/trace_picker.h"
+#include "widgets/record_frame.h"
+#include "widgets/record_window.h"
 
 namespace strikeplate {
 
 RecordView::RecordView(QWidget* parent) : View(parent) {
   setFocusPolicy(Qt::StrongFocus);
+  setMouseTracking(true);
   setMinimumSize(320, 240);
+  setAttribute(Qt::WA_OpaquePaintEvent);
   setAccessibleName(tr("Record"));
 }
 
+const Gather* RecordView::gather() const {
+  const auto s = static_cast<std::size_t>(scene_.selection.shot);
+  const bool there = scene_.survey && scene_.gathers && scene_.selection.shot >= 0 && s < scene_.gathers->size() &&
+                     s < scene_.survey->shots.size() && !(*scene_.gathers)[s].traces.empty();
+  return there ? &(*scene_.gathers)[s] : nullptr;
+}
+
+const Shot& RecordView::shot() const {
+  return scene_.survey->shots[static_cast<std::size_t>(scene_.selection.shot)];
+}
+
+RecordPicture RecordView::picture() const {
+  return {scene_, *gather(), shot(), axes_, display_, look_, font()};
+}
+
+bool RecordView::hasTrace() const {
+  return gather() != nullptr && scene_.selection.trace >= 0 && scene_.selection.trace < axes_.count();
+}
+
 void RecordView::showScene(const Scene& scene) {
+  const bool newRecords = !scene_.survey || scene_.survey->records != scene.survey->records;
   scene_ = scene;
-  update();
+  if (gesture_ && !gesture_->fits(scene_)) {
+    gesture_.reset();
+  }
+  if (nudge_ && (newRecords || nudge_->shot != scene_.selection.shot)) {
+    nudge_.reset();
+  }
+  takeShot(newRecords);
 }
 
 void RecordView::showSelection(const Selection& selection) {
+  if (selection.trace != scene_.selection.trace) {
+    marked_ = {-1, -1};
+  }
   scene_.selection = selection;
+  if (gesture_ && !gesture_->fits(scene_)) {
+    abandon();
+  }
+  takeShot(false);
+  if (!gesture_) {
+    reveal();
+  }
+  if (hasFocus() && !gesture_) {
+    sayTrace();
+  }
+}
+
+void RecordView::reveal() {
+  if (!hasTrace()) {
+    return;
+  }
+  const int trace = scene_.selection.trace;
+  const auto& pick = shot().traces[static_cast<std::size_t>(trace)].pick;
+  const QPointF at(axes_.xOf(trace), pick ? axes_.yOf(trace, pick->time) : axes_.plot().center().y());
+  const QPointF nearest = inPlot(at);
+  if (at != nearest) {
+    // A little further in than the edge, so that the neighbours are seen too.
+    const QPointF way = at - nearest;
+    const double room = way.x() == 0.0 ? 0.0 : std::copysign(2.0 * axes_.spacing(), way.x());
+    const double places = axes_.placeAt(at.x() + room) - axes_.placeAt(nearest.x());
+    const double seconds =
+        way.y() == 0.0 ? 0.0 : axes_.shownTime(trace, pick->time) - axes_.shownAt(axes_.plot().center().y());
+    // What is selected elsewhere does not move the axis that all panes share.
+    showRange(panned(range_, seconds, display_.truePosition && !hasFocus() ? 0.0 : places));
+  }
+}
+
+void RecordView::showRange(const RecordRange& range) {
+  const bool shared = display_.truePosition && (range.left != range_.left || range.right != range_.right);
+  if (shared) {
+    positionLeft_ = range.left;
+    positionRight_ = range.right;
+  }
+  setRange(range);
+  if (shared) {
+    emit positionRangeWanted(range_.left, range_.right);
+  }
+}
+
+void RecordView::takeShot(bool newRecords) {
+  const bool otherShot = shownShot_ != scene_.selection.shot;
+  if (newRecords || otherShot) {
+    marked_ = {-1, -1};
+    markAnchor_ = -1;
+  }
+  if (gather() == nullptr) {
+    shownGathers_.reset();
+    shownShot_ = -1;
+    axes_ = {};
+    update();
+    return;
+  }
+  const bool fresh = newRecords || otherShot || shownGathers_ != scene_.gathers;
+  shownShot_ = scene_.selection.shot;
+  shownGathers_ = scene_.gathers;
+  atHome_ = atHome_ || newRecords;
+  // Once most picks are there they say better what part matters; later ones do not move the picture under the hand.
+  const bool knowsPicks = 2 * std::count_if(shot().traces.begin(), shot().traces.end(),
+                                            [](const ShotTrace& trace) { return trace.pick.has_value(); }) >=
+                          static_cast<std::ptrdiff_t>(shot().traces.size());
+  const bool learnt = knowsPicks && !homeKnewPicks_ && !gesture_;
+  homeKnewPicks_ = fresh ? knowsPicks : homeKnewPicks_ || learnt;
+  if (fresh || learnt) {
+    conditionTraces();
+    if (atHome_) {
+      goHome();
+    } else {
+      setRange(range_);
+    }
+  }
+  placeAxes();
+}
+
+void RecordView::conditionTraces() {
+  RecordDisplay plain = display_;
+  plain.reducingVelocity = 0.0;
+  const RecordRange home = homeRange(*gather(), shot(), shownShot_, scene_.interpretation.get(), plain);
+  const double correction = shot().triggerCorrection;
+  traces_ = ShownTraces(*gather(), shot(), display_);
+  units_ = traces_.units(home.first - correction, home.last - correction, display_.scale);
+}
+
+void RecordView::goHome() {
+  if (gather() == nullptr) {
+    return;
+  }
+  setRange(homeRange(*gather(), shot(), shownShot_, scene_.interpretation.get(), display_));
+  atHome_ = true;
+}
+
+void RecordView::showAll() {
+  setRange(fullRange(*gather(), shot(), display_));
+}
+
+void RecordView::setRange(const RecordRange& wanted) {
+  RecordRange limits = fullRange(*gather(), shot(), display_);
+  limits.first = std::min(limits.first, -0.02);
+  const double leastPlaces = 2.0 * (limits.right - limits.left) / std::max(1, static_cast<int>(traces_.count()));
+  RecordRange range = wanted;
+  if (display_.truePosition) {
+    // The other panes may well be looking beyond the geophones.
+    limits.left = std::min(limits.left, std::isfinite(positionLeft_) ? positionLeft_ : range.left) - 1e3;
+    limits.right = std::max(limits.right, std::isfinite(positionRight_) ? positionRight_ : range.right) + 1e3;
+  }
+  range_ = within(range, limits, 20.0 * gather()->sampleInterval, leastPlaces);
+  atHome_ = false;
+  placeAxes();
+}
+
+void RecordView::placeAxes() {
+  if (gather() == nullptr) {
+    return;
+  }
+  RecordRange range = range_;
+  if (display_.truePosition && std::isfinite(positionLeft_)) {
+    range.left = positionLeft_;
+    range.right = positionRight_;
+  }
+  range_ = range;
+  const QMarginsF margins = recordMargins(QFontMetricsF(font()));
+  QRectF plot = QRectF(rect()).marginsRemoved(margins);
+  plot = QRectF(std::round(plot.left()), std::round(plot.top()), std::max(20.0, std::round(plot.width())),
+                std::max(20.0, std::round(plot.height())));
+  axes_ = RecordAxes(*gather(), shot().triggerCorrection, display_, plot, range_);
   update();
+}
+
+void RecordView::zoom(double timeFactor, double traceFactor, const QPointF& about) {
+  RecordRange range = zoomedTime(range_, timeFactor, axes_.shownAt(about.y()));
+  range = zoomedTraces(range, traceFactor, axes_.placeAt(about.x()));
+  showRange(range);
+}
+
+void RecordView::showPlumbLine(double x) {
+  plumbLine_ = x;
+  update();
+}
+
+void RecordView::showPositionRange(double left, double right) {
+  positionLeft_ = left;
+  positionRight_ = right;
+  if (display_.truePosition) {
+    placeAxes();
+  }
 }
 
 void RecordView::setLook(const Look& look) {
@@ -33,175 +210,44 @@ void RecordView::setLook(const Look& look) {
   update();
 }
 
-const Gather* RecordView::gather() const {
-  const auto s = static_cast<std::size_t>(scene_.selection.shot);
-  return scene_.gathers && scene_.selection.shot >= 0 && s < scene_.gathers->size() ? &(*scene_.gathers)[s] : nullptr;
-}
-
-QRectF RecordView::plot() const {
-  return QRectF(64, 44, width() - 76, height() - 88);
-}
-
-double RecordView::xOf(std::size_t trace) const {
-  return plot().left() +
-         plot().width() * (static_cast<double>(trace) + 0.5) / static_cast<double>(gather()->traces.size());
-}
-
-int RecordView::traceAt(double x) const {
-  const double f = (x - plot().left()) / plot().width() * static_cast<double>(gather()->traces.size());
-  return std::clamp(static_cast<int>(std::floor(f)), 0, static_cast<int>(gather()->traces.size()) - 1);
-}
-
-double RecordView::lastTime() const {
-  double last = 0.03;
-  for (const ShotTrace& trace : scene_.survey->shots[static_cast<std::size_t>(scene_.selection.shot)].traces) {
-    last = trace.pick ? std::max(last, 1.4 * trace.pick->time) : last;
-  }
-  return last;
-}
-
-double RecordView::timeAt(double y) const {
-  return -0.005 + (y - plot().top()) / plot().height() * (lastTime() + 0.005);
-}
-double RecordView::yOf(double time) const {
-  return plot().top() + (time + 0.005) / (lastTime() + 0.005) * plot().height();
-}
-
-void RecordView::paintTrace(QPainter& painter, const Gather& g, std::size_t trace) const {
-  const auto& samples = g.traces[trace];
-  const double first = std::max(0.0, std::floor((-0.005 - g.start) / g.sampleInterval));
-  const auto end = std::min(samples.size(),
-                            static_cast<std::size_t>(std::max(0.0, (lastTime() - g.start) / g.sampleInterval + 1.0)));
-  float peak = 0.0F;
-  for (auto i = static_cast<std::size_t>(first); i < end; ++i) {
-    peak = std::max(peak, std::abs(samples[i]));
-  }
-  const double reach = 1.2 * plot().width() / static_cast<double>(g.traces.size());
-  QPolygonF line;
-  for (auto i = static_cast<std::size_t>(first); i < end && peak > 0.0F; ++i) {
-    line << QPointF(xOf(trace) + reach * static_cast<double>(samples[i] / peak),
-                    yOf(g.timeOf(static_cast<double>(i))));
-  }
-  painter.setPen(QPen(g.states[trace] == TraceState::Dead ? look_.grid : look_.ink, 0.8));
-  painter.drawPolyline(line);
-}
-
-void RecordView::paintPicks(QPainter& painter) const {
-  const auto& traces = scene_.survey->shots[static_cast<std::size_t>(scene_.selection.shot)].traces;
-  const double half = 0.4 * plot().width() / static_cast<double>(traces.size());
-  for (std::size_t t = 0; t < traces.size(); ++t) {
-    if (!traces[t].pick) {
-      continue;
-    }
-    const Pick& pick = *traces[t].pick;
-    int layer = pick.layer;
-    if (scene_.interpretation) {
-      const int a = scene_.interpretation->arrivalOf(scene_.selection.shot, static_cast<int>(t));
-      layer = a >= 0 ? scene_.interpretation->times.arrivals[static_cast<std::size_t>(a)].layer : layer;
-    }
-    painter.setPen(QPen(look_.layerColour(layer), pick.origin == PickOrigin::Hand ? 3.0 : 2.0));
-    const double x = xOf(t), y = yOf(pick.time);
-    painter.drawLine(QPointF(x - half, y), QPointF(x + half, y));
-    painter.drawLine(QPointF(x, yOf(pick.time - pick.sigma)), QPointF(x, yOf(pick.time + pick.sigma)));
-  }
-}
-
-void RecordView::paintEvent(QPaintEvent*) {
-  QPainter painter(this);
-  painter.fillRect(rect(), look_.paper);
-  painter.setPen(look_.ink);
-  const Gather* g = gather();
-  if (g == nullptr || g->traces.empty()) {
-    painter.drawText(rect(), Qt::AlignCenter, tr("No record. Open shot records from the File menu."));
+void RecordView::setDisplay(const RecordDisplay& display) {
+  if (display == display_) {
     return;
   }
-  painter.setRenderHint(QPainter::Antialiasing);
-  const Units units{scene_.survey->settings.feet};
-  painter.drawText(
-      QRectF(0, 4, width(), 24), Qt::AlignCenter,
-      tr("Shot %1 at %2").arg(scene_.selection.shot + 1).arg(QString::fromStdString(units.length(g->shot.x))));
-  const double step = lastTime() > 0.2 ? 0.05 : lastTime() > 0.08 ? 0.02 : 0.01;
-  for (double t = 0.0; t < lastTime(); t += step) {
-    painter.setPen(look_.grid);
-    painter.drawLine(QPointF(plot().left(), yOf(t)), QPointF(plot().right(), yOf(t)));
-    painter.setPen(look_.ink);
-    painter.drawText(QRectF(0, yOf(t) - 10, plot().left() - 6, 20), Qt::AlignRight | Qt::AlignVCenter,
-                     QString::number(1e3 * t, 'f', 0));
-  }
-  painter.drawText(QRectF(0, 24, plot().left(), 18), Qt::AlignCenter, tr("ms"));
-  const std::size_t every = g->traces.size() > 24 ? 6 : 3;
-  for (std::size_t t = 0; t < g->traces.size(); ++t) {
-    paintTrace(painter, *g, t);
-    if (t % every == 0) {
-      painter.setPen(look_.ink);
-      painter.drawText(QRectF(xOf(t) - 30, plot().bottom() + 4, 60, 18), Qt::AlignCenter, QString::number(t + 1));
-    }
-  }
-  painter.drawText(QRectF(0, plot().bottom() + 22, width(), 20), Qt::AlignCenter, tr("Trace"));
-  paintPicks(painter);
-}
-
-void RecordView::propose(double y, bool free, Phase phase) {
-  const int shot = scene_.selection.shot;
-  const auto t = static_cast<std::size_t>(*dragged_);
-  double time = timeAt(y);
-  const Gather& g = *gather();
-  if (!free) {
-    if (const auto onset = snapOnset(g, t, time, 0.004)) {
-      time = onset->time;
-    }
-  }
-  const auto& before = atPress_->shots[static_cast<std::size_t>(shot)].traces[t].pick;
-  Pick pick = before.value_or(Pick{});
-  pick.time = time;
-  pick.sigma = before ? before->sigma : sigmaAt(g, t, time);
-  pick.origin = PickOrigin::Hand;
-  const std::string text = (before ? "Move pick, shot " : "Set pick, shot ") + std::to_string(shot + 1) + ", trace " +
-                           std::to_string(*dragged_ + 1);
-  emit proposed(edits::setPick(*atPress_, shot, *dragged_, pick, text), phase);
-}
-
-void RecordView::mousePressEvent(QMouseEvent* event) {
-  const Gather* g = gather();
-  if (g == nullptr || event->button() != Qt::LeftButton || !plot().contains(event->position()) ||
-      g->traces[static_cast<std::size_t>(traceAt(event->position().x()))].empty()) {
+  const RecordDisplay before = std::exchange(display_, display);
+  if (gather() == nullptr) {
     return;
   }
-  dragged_ = traceAt(event->position().x());
-  atPress_ = scene_.survey;
-  emit selectionWanted({scene_.selection.shot, *dragged_, 0});
+  if (!sameConditioning(before, display)) {
+    conditionTraces();
+  }
+  if (before.truePosition != display.truePosition) {
+    placeLimits(*gather(), display.truePosition, range_.left, range_.right);
+  }
+  if (atHome_ || before.reducingVelocity != display.reducingVelocity) {
+    const RecordRange places = range_;
+    goHome();
+    range_.left = places.left;
+    range_.right = places.right;
+  }
+  placeAxes();
 }
 
-void RecordView::mouseMoveEvent(QMouseEvent* event) {
-  if (dragged_) {
-    propose(event->position().y(), event->modifiers().testFlag(Qt::AltModifier), Phase::Live);
-  }
+void RecordView::changeDisplay(const RecordDisplay& display) {
+  setDisplay(display);
+  emit displayChanged(display);
 }
 
-void RecordView::mouseReleaseEvent(QMouseEvent* event) {
-  if (dragged_) {
-    propose(event->position().y(), event->modifiers().testFlag(Qt::AltModifier), Phase::Commit);
-    dragged_.reset();
-  }
+void RecordView::resizeEvent(QResizeEvent*) {
+  placeAxes();
 }
 
-void RecordView::keyPressEvent(QKeyEvent* event) {
-  Selection s = scene_.selection;
-  if (event->key() == Qt::Key_Escape && dragged_) {
-    dragged_.reset();
-    emit proposed({}, Phase::Abandon);
-  } else if (event->key() == Qt::Key_PageUp && s.shot > 0) {
-    emit selectionWanted({s.shot - 1, -1, 0});
-  } else if (event->key() == Qt::Key_PageDown && s.shot + 1 < static_cast<int>(scene_.survey->shots.size())) {
-    emit selectionWanted({s.shot + 1, -1, 0});
-  } else if ((event->key() == Qt::Key_Delete || event->key() == Qt::Key_Backspace) && s.shot >= 0 && s.trace >= 0) {
-    emit proposed(
-        edits::setPick(*scene_.survey, s.shot, s.trace, std::nullopt,
-                       "Delete pick, shot " + std::to_string(s.shot + 1) + ", trace " + std::to_string(s.trace + 1)),
-        Phase::Commit);
-  } else {
-    View::keyPressEvent(event);
+void RecordView::changeEvent(QEvent* event) {
+  if (event->type() == QEvent::FontChange) {
+    placeAxes();
+    image_ = {};
   }
+  View::changeEvent(event);
 }
 
 }  // namespace strikeplate
