@@ -4,6 +4,7 @@
 #include <cmath>
 
 #include <QHeaderView>
+#include <QLabel>
 #include <QPainter>
 #include <QTableWidget>
 #include <QVBoxLayout>
@@ -63,7 +64,8 @@ DepthsAlong depthsAlong(const Survey& survey, const Section& section, int layer)
   return along;
 }
 
-LayerTable::LayerTable(QWidget* parent) : QWidget(parent), table_(new QTableWidget(0, kColumns, this)) {
+LayerTable::LayerTable(QWidget* parent)
+    : QWidget(parent), table_(new QTableWidget(0, kColumns, this)), reason_(new QLabel(this)) {
   table_->setEditTriggers(QAbstractItemView::NoEditTriggers);
   table_->setSelectionBehavior(QAbstractItemView::SelectRows);
   table_->setSelectionMode(QAbstractItemView::SingleSelection);
@@ -76,12 +78,17 @@ LayerTable::LayerTable(QWidget* parent) : QWidget(parent), table_(new QTableWidg
   table_->horizontalHeader()->setStretchLastSection(true);
   table_->horizontalHeader()->setDefaultAlignment(Qt::AlignLeft | Qt::AlignVCenter);
   table_->setAccessibleName(tr("Layers"));
+  reason_->setWordWrap(true);
+  reason_->setAlignment(Qt::AlignTop | Qt::AlignLeft);
+  reason_->setContentsMargins(8, 4, 8, 4);
+  reason_->hide();
   setFocusProxy(table_);
   auto* layout = new QVBoxLayout(this);
   layout->setContentsMargins(0, 0, 0, 0);
   layout->addWidget(table_);
+  layout->addWidget(reason_);
   connect(table_, &QTableWidget::currentCellChanged, this, [this](int row) {
-    if (row >= 0 && emptyWords(scene_).isEmpty()) {
+    if (row >= 0) {
       emit layerWanted(row + 1);
     }
   });
@@ -134,14 +141,11 @@ void LayerTable::put(int row, int column, const QString& text, const QString& ti
 void LayerTable::fill() {
   const QSignalBlocker quiet(table_);
   const QString reason = emptyWords(scene_);
-  table_->clearSpans();
-  table_->setRowCount(reason.isEmpty() ? scene_.interpretation->section.layers : 1);
-  if (!reason.isEmpty()) {
-    table_->setSpan(0, 0, 1, kColumns);
-    table_->setItem(0, 0, new QTableWidgetItem(reason));
-    table_->item(0, 0)->setToolTip(reason);
-  }
-  for (int row = 0; reason.isEmpty() && row < table_->rowCount(); ++row) {
+  table_->setRowCount(reason.isEmpty() ? scene_.interpretation->section.layers : 0);
+  table_->setVisible(reason.isEmpty());
+  reason_->setVisible(!reason.isEmpty());
+  reason_->setText(reason);
+  for (int row = 0; row < table_->rowCount(); ++row) {
     fillRow(row);
   }
   fillPlumbColumn();
@@ -187,7 +191,7 @@ void LayerTable::fillPlumbColumn() {
                                          ? tr("Under %1 (95 %)").arg(QString::fromStdString(units.length(plumbLine_)))
                                          : tr("Under the pointer"),
                                      tr("Dip (95 %)")});
-  for (int row = 0; emptyWords(scene_).isEmpty() && row < table_->rowCount(); ++row) {
+  for (int row = 0; row < table_->rowCount(); ++row) {
     put(row, kUnder,
         row == 0 || !pointed ? QString()
                              : depthWords(units, scene_.interpretation->section.depthAt(row + 1, plumbLine_)));

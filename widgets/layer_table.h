@@ -5,6 +5,7 @@
 #include "widgets/look.h"
 #include "widgets/scene.h"
 
+class QLabel;
 class QTableWidget;
 
 namespace strikeplate {
@@ -33,6 +34,7 @@ class LayerTable : public QWidget {
   Look look_ = Look::of(LookKind::Light);
   double plumbLine_ = Estimate::kNaN;
   QTableWidget* table_;
+  QLabel* reason_;  ///< stands in for the table when there is no section
 };
 
 /// Depth to the top of a layer along the line, between the outermost geophones.

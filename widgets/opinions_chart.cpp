@@ -21,7 +21,7 @@ OpinionsChart::OpinionsChart(QWidget* parent) : QAbstractScrollArea(parent) {
   viewport()->setMouseTracking(true);
 }
 
-void OpinionsChart::show(const OpinionSummary& summary, const Units& units) {
+void OpinionsChart::showSummary(const OpinionSummary& summary, const Units& units) {
   summary_ = summary;
   units_ = units;
   QStringList all;

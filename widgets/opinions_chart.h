@@ -14,7 +14,7 @@ class OpinionsChart : public QAbstractScrollArea {
  public:
   explicit OpinionsChart(QWidget* parent = nullptr);
   /// `summary` points into an interpretation that has to live until the next call.
-  void show(const OpinionSummary& summary, const Units& units);
+  void showSummary(const OpinionSummary& summary, const Units& units);
   void setLook(const Look& look);
   /// What a row says in full: route, depth, what it assumes, whether it disagrees.
   [[nodiscard]] QString rowWords(int row) const;

@@ -70,7 +70,7 @@ void OpinionsView::refresh() {
   }
   const Units units{scene_.survey->settings.feet};
   shown_ = scene_.interpretation;
-  chart_->show(shown_ ? opinionsAt(*shown_, layer(), position()) : OpinionSummary{}, units);
+  chart_->showSummary(shown_ ? opinionsAt(*shown_, layer(), position()) : OpinionSummary{}, units);
   head_->setText(headWords());
 }
 
