@@ -53,7 +53,10 @@ void SectionDrawing::drawAllowance(QPainter& painter, const Section& section, st
   });
   QColor colour = look_.layerColour(interface.layer);
   colour.setAlpha(look_.kind == LookKind::Sun ? 150 : 90);
+  // The pattern is much dearer to fill with smooth edges, and they cannot be seen on it.
+  painter.setRenderHint(QPainter::Antialiasing, false);
   fill(painter, runs, QBrush(colour, Qt::BDiagPattern));
+  painter.setRenderHint(QPainter::Antialiasing, true);
   painter.setPen(QPen(colour, look_.lineWidth, Qt::DotLine));
   for (const Run& run : runs) {
     painter.drawPolyline(run.lower);
