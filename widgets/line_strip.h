@@ -57,6 +57,8 @@ class LineStrip : public View {
   [[nodiscard]] bool empty() const { return !scene_.survey || scene_.survey->shots.empty(); }
   [[nodiscard]] PositionGesture::Axis axis() const;
   [[nodiscard]] double pixel(double x) const;
+  [[nodiscard]] double shotRow() const;
+  [[nodiscard]] double ruler() const;
   [[nodiscard]] double shotRadius() const;
   [[nodiscard]] Target targetAt(const QPointF& position) const;
   [[nodiscard]] QString wordsAt(const QPointF& position) const;

@@ -10,11 +10,7 @@
 namespace strikeplate {
 namespace {
 
-// Rows from the top, px at the usual font size: numbers, rings, ruler, its figures.
-constexpr double kShotRow = 24.0;
-constexpr double kRuler = 43.0;
-constexpr int kHeight = 64;
-constexpr double kLargestRing = 7.0;
+constexpr double kLargestRing = 7.0;  // px
 
 QFont sized(const QFont& font, double factor) {
   QFont small = font;
@@ -24,8 +20,17 @@ QFont sized(const QFont& font, double factor) {
 
 }  // namespace
 
+// Rows from the top: numbers, rings, ruler, its figures.
+double LineStrip::shotRow() const {
+  return fontMetrics().height() + kLargestRing + 3.0;
+}
+
+double LineStrip::ruler() const {
+  return shotRow() + kLargestRing + 12.0;
+}
+
 QSize LineStrip::sizeHint() const {
-  return {600, std::max(kHeight, static_cast<int>(kRuler) + 5 + fontMetrics().height())};
+  return {600, static_cast<int>(ruler()) + 5 + fontMetrics().height()};
 }
 
 double LineStrip::pixel(double x) const {
@@ -45,11 +50,11 @@ double LineStrip::shotRadius() const {
 QPointF LineStrip::shotPlace(int shot) const {
   const double x = shots_[static_cast<std::size_t>(shot)].point.x;
   const double edge = kLargestRing + 2.0;
-  return {std::clamp(pixel(x), marginLeft_ - edge, width() - marginRight_ + edge), kShotRow};
+  return {std::clamp(pixel(x), marginLeft_ - edge, width() - marginRight_ + edge), shotRow()};
 }
 
 QPointF LineStrip::geophonePlace(int geophone) const {
-  return {pixel(scene_.survey->geophones[static_cast<std::size_t>(geophone)].x), kRuler - 4.0};
+  return {pixel(scene_.survey->geophones[static_cast<std::size_t>(geophone)].x), ruler() - 4.0};
 }
 
 void LineStrip::paintEvent(QPaintEvent*) {
@@ -63,7 +68,7 @@ void LineStrip::paintEvent(QPaintEvent*) {
   }
   painter.setPen(look_.faint);
   painter.setFont(sized(font(), 0.85));
-  painter.drawText(QRectF(0, kRuler + 4, marginLeft_ - 14.0, height() - kRuler - 4), Qt::AlignRight | Qt::AlignTop,
+  painter.drawText(QRectF(0, ruler() + 4, marginLeft_ - 14.0, height() - ruler() - 4), Qt::AlignRight | Qt::AlignTop,
                    QString::fromStdString(Units{scene_.survey->settings.feet}.lengthUnit()));
   painter.save();
   painter.setClipRect(QRectF(marginLeft_ - 8.0, 0, width() - marginLeft_ - marginRight_ + 16.0, height()));
@@ -79,16 +84,16 @@ void LineStrip::paintRuler(QPainter& painter) const {
   painter.setFont(sized(font(), 0.85));
   const double right = width() - marginRight_;
   painter.setPen(QPen(look_.ink, look_.lineWidth));
-  painter.drawLine(QPointF(marginLeft_, kRuler), QPointF(right, kRuler));
+  painter.drawLine(QPointF(marginLeft_, ruler()), QPointF(right, ruler()));
   const double perPixel = units.fromMetres(axis().metresPerPixel());
-  const double step = niceStep(perPixel * (painter.fontMetrics().horizontalAdvance("-0000") + 28));
+  const double step = positionTickStep(perPixel, fontMetrics().height());
   const int decimals = step < 1.0 ? 1 : 0;
   const double first = std::ceil(units.fromMetres(range_.left) / step - 1e-9);
   for (double n = first; n * step <= units.fromMetres(range_.right) * (1.0 + 1e-12) + 1e-9; n += 1.0) {
     const double x = pixel(units.toMetres(n * step));
     painter.setPen(QPen(look_.ink, 1.0));
-    painter.drawLine(QPointF(x, kRuler), QPointF(x, kRuler + 4));
-    painter.drawText(QRectF(x - 40, kRuler + 4, 80, height() - kRuler - 4), Qt::AlignHCenter | Qt::AlignTop,
+    painter.drawLine(QPointF(x, ruler()), QPointF(x, ruler() + 4));
+    painter.drawText(QRectF(x - 40, ruler() + 4, 80, height() - ruler() - 4), Qt::AlignHCenter | Qt::AlignTop,
                      QString::number(n * step, 'f', decimals));
   }
 }
@@ -114,7 +119,7 @@ void LineStrip::paintGeophones(QPainter& painter) const {
     painter.setPen(QPen(colour, 1.0));
     painter.setBrush(live ? QBrush(colour) : QBrush(Qt::NoBrush));
     const double s = chosen ? size + 3.0 : size;
-    const QPointF foot(pixel(geophones[g].x), kRuler);
+    const QPointF foot(pixel(geophones[g].x), ruler());
     painter.drawPolygon(QPolygonF({foot, foot + QPointF(-0.45 * s, -0.9 * s), foot + QPointF(0.45 * s, -0.9 * s)}));
   }
 }
@@ -152,10 +157,10 @@ void LineStrip::paintShot(QPainter& painter, int shot) const {
   const double r = shotRadius() + (chosen ? 1.0 : 0.0);
   // A stem to the place on the ruler; a buried shot's goes below the ground.
   painter.setPen(QPen(colour, 1.0));
-  painter.drawLine(centre + QPointF(0, r), QPointF(centre.x(), kRuler));
+  painter.drawLine(centre + QPointF(0, r), QPointF(centre.x(), ruler()));
   if (strip.point.depth > 0.0) {
-    painter.drawLine(QPointF(centre.x(), kRuler), QPointF(centre.x(), kRuler + 6));
-    painter.drawLine(QPointF(centre.x() - 3, kRuler + 6), QPointF(centre.x() + 3, kRuler + 6));
+    painter.drawLine(QPointF(centre.x(), ruler()), QPointF(centre.x(), ruler() + 6));
+    painter.drawLine(QPointF(centre.x() - 3, ruler() + 6), QPointF(centre.x() + 3, ruler() + 6));
   }
   // The ring fills clockwise with the share of traces that are picked.
   const QRectF ring(centre - QPointF(r, r), QSizeF(2 * r, 2 * r));
@@ -183,7 +188,7 @@ void LineStrip::paintShot(QPainter& painter, int shot) const {
   const bool crowded = !chosen && 2.0 * shotRadius() + 2.0 < room && shot % 5 != 4;
   if (!crowded) {
     painter.setPen(colour);
-    painter.drawText(QRectF(centre.x() - 20, 0, 40, kShotRow - r - 1.0), Qt::AlignHCenter | Qt::AlignBottom,
+    painter.drawText(QRectF(centre.x() - 20, 0, 40, shotRow() - r - 1.0), Qt::AlignHCenter | Qt::AlignBottom,
                      QString::number(shot + 1));
   }
 }
@@ -207,13 +212,13 @@ void LineStrip::paintOutside(QPainter& painter, bool leftSide) const {
   painter.setPen(Qt::NoPen);
   painter.setBrush(chosen ? look_.accent : look_.ink);
   painter.drawPolygon(
-      QPolygonF({QPointF(edge + sign * 8, kShotRow), QPointF(edge, kShotRow - 5), QPointF(edge, kShotRow + 5)}));
+      QPolygonF({QPointF(edge + sign * 8, shotRow()), QPointF(edge, shotRow() - 5), QPointF(edge, shotRow() + 5)}));
   painter.setPen(chosen ? look_.accent : look_.ink);
   painter.setFont(sized(font(), 0.85));
   const QString numbers =
       beyond.size() == 1 ? QString::number(beyond.front()) : tr("%1 to %2").arg(beyond.front()).arg(beyond.back());
   const QRectF place =
-      leftSide ? QRectF(0, 0, marginLeft_ - 4.0, kShotRow - 7) : QRectF(width() - 80.0, 0, 78, kShotRow - 7);
+      leftSide ? QRectF(0, 0, marginLeft_ - 4.0, shotRow() - 7) : QRectF(width() - 80.0, 0, 78, shotRow() - 7);
   painter.drawText(place, Qt::AlignRight | Qt::AlignBottom, numbers);
 }
 

@@ -55,4 +55,9 @@ double niceStep(double least) {
   return 10.0 * decade;
 }
 
+double positionTickStep(double perPixel, double textHeight) {
+  constexpr double kTextHeights = 5.0;  // room for "-1000" and as much beside it
+  return niceStep(std::max(perPixel, 1e-6) * kTextHeights * textHeight);
+}
+
 }  // namespace strikeplate

@@ -24,4 +24,8 @@ PositionRange panned(const PositionRange& range, double step, const PositionRang
 /// The least 1, 2 or 5 times a power of ten that is no less than `least` (> 0).
 double niceStep(double least);
 
+/// Distance of the figures on the position axis, the same in every pane: units per pixel and height of the text in
+/// px.
+double positionTickStep(double perPixel, double textHeight);
+
 }  // namespace strikeplate

@@ -13,13 +13,23 @@
 
 namespace strikeplate {
 
-PositionView::PositionView(QWidget* parent) : View(parent), plot_(new QCustomPlot(this)) {
+PositionView::PositionView(QWidget* parent)
+    : View(parent), plot_(new QCustomPlot(this)), ticker_(new QCPAxisTickerFixed) {
   plot_->addLayer("plumb line");
   plot_->layer("plumb line")->setMode(QCPLayer::lmBuffered);
   line_ = new QCPItemStraightLine(plot_);
   line_->setLayer("plumb line");
   line_->setVisible(false);
   plot_->installEventFilter(this);
+  plot_->xAxis->setTicker(ticker_);
+  // Ticks are laid before the width is known, so a new step takes another round.
+  connect(plot_, &QCustomPlot::afterLayout, this, [this] {
+    const double before = ticker_->tickStep();
+    placeTicks();
+    if (ticker_->tickStep() != before) {
+      plot_->replot(QCustomPlot::rpQueuedReplot);
+    }
+  });
 }
 
 PositionGesture::Axis PositionView::axis() const {
@@ -123,6 +133,11 @@ void PositionView::placePlumbLine() {
   }
 }
 
+void PositionView::placeTicks() {
+  const double width = std::max(plot_->axisRect()->width(), 100);
+  ticker_->setTickStep(positionTickStep(plot_->xAxis->range().size() / width, fontMetrics().height()));
+}
+
 void PositionView::draw() {
   plot_->clearPlottables();
   if (!scene_.survey) {
@@ -130,6 +145,7 @@ void PositionView::draw() {
   }
   const Units units{scene_.survey->settings.feet};
   plot_->xAxis->setRange(units.fromMetres(left_), units.fromMetres(right_));
+  placeTicks();
   drawData();
   placePlumbLine();
   plot_->replot(QCustomPlot::rpQueuedReplot);

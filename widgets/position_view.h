@@ -1,8 +1,11 @@
 #pragma once
 
+#include <QSharedPointer>
+
 #include "widgets/position_gesture.h"
 #include "widgets/view.h"
 
+class QCPAxisTickerFixed;
 class QCPItemStraightLine;
 class QCustomPlot;
 
@@ -39,6 +42,7 @@ class PositionView : public View {
 
  private:
   void placePlumbLine();
+  void placeTicks();
   void wantRange(const PositionRange& range);
   bool gesture(QEvent* event);
   [[nodiscard]] PositionGesture::Axis axis() const;
@@ -46,6 +50,7 @@ class PositionView : public View {
   Look look_ = Look::of(LookKind::Light);
   QCustomPlot* plot_;
   QCPItemStraightLine* line_;
+  QSharedPointer<QCPAxisTickerFixed> ticker_;
   PositionGesture gesture_;
   double left_ = 0.0, right_ = 100.0, plumbLine_ = Estimate::kNaN;
 };

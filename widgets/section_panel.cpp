@@ -14,8 +14,8 @@
 namespace strikeplate {
 namespace {
 
-/// Height that the tabs take at first, in lines of text.
-constexpr int kTabLines = 8;
+/// Least height of the tabs in lines of text: room for the table of three layers.
+constexpr int kTabLines = 7;
 
 }  // namespace
 
@@ -27,20 +27,18 @@ SectionPanel::SectionPanel(QWidget* parent)
       doubts_(new DoubtsList(this)),
       tabs_(new QTabWidget(this)),
       splitter_(new QSplitter(Qt::Vertical, this)) {
-  setMinimumHeight(220);
   setAccessibleName(tr("Section"));
   tabs_->setDocumentMode(true);
   tabs_->addTab(layers_, tr("&Layers"));
   tabs_->addTab(opinions_, tr("Second &opinions"));
   tabs_->addTab(doubts_, tr("&Doubts"));
-  const int tabHeight = kTabLines * fontMetrics().height();
-  tabs_->setMinimumHeight(4 * fontMetrics().height());
+  tabs_->setMinimumHeight(kTabLines * fontMetrics().height());
   splitter_->addWidget(plot_);
   splitter_->addWidget(tabs_);
-  splitter_->setStretchFactor(0, 1);
-  splitter_->setStretchFactor(1, 0);
+  splitter_->setStretchFactor(0, 5);
+  splitter_->setStretchFactor(1, 2);
   splitter_->setCollapsible(0, false);
-  splitter_->setSizes({3 * tabHeight, tabHeight});
+  splitter_->setSizes({500, 200});
   auto* layout = new QVBoxLayout(this);
   layout->setContentsMargins(0, 0, 0, 0);
   layout->addWidget(splitter_);

@@ -17,7 +17,10 @@ constexpr double kNear = 8.0;  // px
 }  // namespace
 
 SectionPlot::SectionPlot(QWidget* parent)
-    : PositionView(parent), drawing_(new SectionDrawing(&plot())), readout_(new PlumbReadout(&plot())) {
+    : PositionView(parent),
+      elevationTicker_(new QCPAxisTickerFixed),
+      drawing_(new SectionDrawing(&plot())),
+      readout_(new PlumbReadout(&plot())) {
   setFocusPolicy(Qt::StrongFocus);
   setMinimumHeight(120);
   setAccessibleName(tr("Section"));
@@ -25,8 +28,14 @@ SectionPlot::SectionPlot(QWidget* parent)
   auto* layout = new QVBoxLayout(this);
   layout->setContentsMargins(0, 0, 0, 0);
   layout->addWidget(&plot());
-  plot().yAxis->ticker()->setTickCount(4);
-  connect(&plot(), &QCustomPlot::afterLayout, this, &SectionPlot::setElevationAxis);
+  plot().yAxis->setTicker(elevationTicker_);
+  connect(&plot(), &QCustomPlot::afterLayout, this, [this] {
+    // Ticks are laid before the height is known, so a new height takes another round.
+    if (plot().axisRect()->height() != height_) {
+      setElevationAxis();
+      plot().replot(QCustomPlot::rpQueuedReplot);
+    }
+  });
   connect(&plot(), &QCustomPlot::mouseMove, this, [this](QMouseEvent* event) { follow(event->position()); });
   connect(&plot(), &QCustomPlot::mousePress, this, [this] { setFocus(Qt::MouseFocusReason); });
   connect(&plot(), &QCustomPlot::mouseRelease, this, [this](QMouseEvent* event) {
@@ -70,8 +79,10 @@ void SectionPlot::setElevationAxis() {
   const Units units{scene_.survey->settings.feet};
   const double marks = scene_.survey->boreholes.empty() ? 18.0 : 18.0 + fontMetrics().height();
   const double legend = fontMetrics().height() + 6.0;
-  const double height = std::max<double>(plot().axisRect()->height(), 2.0 * (marks + legend));
+  height_ = plot().axisRect()->height();
+  const double height = std::max<double>(height_, 2.0 * (marks + legend));
   const double perPixel = (elevations_.top - elevations_.bottom) / (height - marks - legend);
+  elevationTicker_->setTickStep(niceStep(units.fromMetres(perPixel) * 2.2 * fontMetrics().height()));
   plot().yAxis->setRange(units.fromMetres(elevations_.bottom - legend * perPixel),
                          units.fromMetres(elevations_.top + marks * perPixel));
 }

@@ -3,6 +3,8 @@
 #include "widgets/position_view.h"
 #include "widgets/section_content.h"
 
+class QCPAxisTickerFixed;
+
 namespace strikeplate {
 
 class PlumbReadout;
@@ -30,6 +32,8 @@ class SectionPlot : public PositionView {
   [[nodiscard]] bool atBorehole(const QPointF& position, const Borehole& hole) const;
 
   ElevationRange elevations_;
+  QSharedPointer<QCPAxisTickerFixed> elevationTicker_;
+  int height_ = 0;  ///< px, of the axis that the elevations were laid out for
   SectionDrawing* drawing_;
   PlumbReadout* readout_;
 };
