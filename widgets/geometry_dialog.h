@@ -32,6 +32,9 @@ class GeometryDialog : public QDialog {
   void keyPressEvent(QKeyEvent* event) override;
 
  private:
+  /// What a rule can fill, in the order of its box.
+  enum Target { kGeophoneX, kGeophoneElevation, kShotX, kShotElevation, kShotDepth };
+
   QWidget* buildTables();
   QWidget* buildRule();
   QWidget* buildFoot();

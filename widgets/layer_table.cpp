@@ -72,7 +72,7 @@ LayerTable::LayerTable(QWidget* parent)
   table_->setShowGrid(false);
   table_->setFrameShape(QFrame::NoFrame);
   table_->verticalHeader()->hide();
-  table_->verticalHeader()->setDefaultSectionSize(fontMetrics().height() + 6);
+  table_->verticalHeader()->setDefaultSectionSize(fontMetrics().height() + 3);
   table_->horizontalHeader()->setHighlightSections(false);
   table_->horizontalHeader()->setSectionResizeMode(QHeaderView::ResizeToContents);
   table_->horizontalHeader()->setStretchLastSection(true);
