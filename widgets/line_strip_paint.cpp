@@ -184,7 +184,7 @@ void LineStrip::paintShot(QPainter& painter, int shot) const {
   QFont bold = painter.font();
   bold.setBold(chosen);
   painter.setFont(bold);
-  const double room = painter.fontMetrics().horizontalAdvance(QString::number(shot + 1)) + 4.0;
+  const double room = painter.fontMetrics().horizontalAdvance(QString::number(shots_.size())) + 4.0;
   const bool crowded = !chosen && 2.0 * shotRadius() + 2.0 < room && shot % 5 != 4;
   if (!crowded) {
     painter.setPen(colour);

@@ -89,7 +89,7 @@ void SectionDrawing::drawInterface(QPainter& painter, const Section& section, st
   constexpr double kApart = 110.0;
   double next = frame().area().left() + 40.0 + 25.0 * static_cast<double>(index);
   for (const Run& run : runs) {
-    painter.setPen(QPen(colour, (chosen ? 2.6 : 1.6) * look_.lineWidth));
+    painter.setPen(QPen(colour, (chosen ? 2.3 : 1.6) * look_.lineWidth));
     painter.drawPolyline(run.upper);
     painter.setPen(QPen(colour, look_.lineWidth));
     painter.setBrush(look_.paper);
