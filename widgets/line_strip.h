@@ -51,7 +51,7 @@ class LineStrip : public View {
     int shot = 0;
     QPointF press;
     bool moved = false;
-    double x = 0.0;
+    ShotPoint point;  ///< where it is now
   };
 
   [[nodiscard]] bool empty() const { return !scene_.survey || scene_.survey->shots.empty(); }

@@ -28,9 +28,11 @@ void LineStrip::mousePressEvent(QMouseEvent* event) {
     return;
   }
   const Target target = targetAt(event->position());
-  if (event->button() == Qt::LeftButton && target.shot >= 0 && range_.left <= shots_[target.shot].point.x &&
-      shots_[target.shot].point.x <= range_.right) {
-    drag_ = Drag{scene_.survey, target.shot, event->position(), false, shots_[target.shot].point.x};
+  if (event->button() == Qt::LeftButton && target.shot >= 0 &&
+      range_.left <= shots_[static_cast<std::size_t>(target.shot)].point.x &&
+      shots_[static_cast<std::size_t>(target.shot)].point.x <= range_.right) {
+    drag_ = Drag{scene_.survey, target.shot, event->position(), false,
+                 shots_[static_cast<std::size_t>(target.shot)].point};
   } else if (event->button() == Qt::LeftButton || event->button() == Qt::MiddleButton) {
     gesture_.press(event->position(), axis());
   }
@@ -65,8 +67,8 @@ void LineStrip::dragShot(const QMouseEvent& event) {
   const double before = drag_->survey->shots[static_cast<std::size_t>(drag_->shot)].point.x;
   const ShotPoint point =
       draggedPoint(*drag_->survey, drag_->shot, before + away.x() * perPixel, free ? 0.0 : 3.0 * perPixel, step);
-  if (point.x != drag_->x) {
-    drag_->x = point.x;
+  if (point != drag_->point) {
+    drag_->point = point;
     proposeDrag(Phase::Live);
   }
   emit plumbLineWanted(point.x);
@@ -76,15 +78,14 @@ void LineStrip::dragShot(const QMouseEvent& event) {
 }
 
 void LineStrip::proposeDrag(Phase phase) {
-  const ShotPoint point = draggedPoint(*drag_->survey, drag_->shot, drag_->x, 0.0, 1e-9);
-  emit proposed(edits::setShotPoint(*drag_->survey, drag_->shot, point), phase);
-  selectShot(indexAfterMove(*drag_->survey, drag_->shot, drag_->x));
+  emit proposed(edits::setShotPoint(*drag_->survey, drag_->shot, drag_->point), phase);
+  selectShot(indexAfterMove(*drag_->survey, drag_->shot, drag_->point.x));
 }
 
 void LineStrip::mouseReleaseEvent(QMouseEvent* event) {
   if (drag_ && event->button() == Qt::LeftButton) {
     const int shot = drag_->shot;
-    const bool moves = drag_->moved && drag_->x != drag_->survey->shots[static_cast<std::size_t>(shot)].point.x;
+    const bool moves = drag_->moved && drag_->point != drag_->survey->shots[static_cast<std::size_t>(shot)].point;
     if (moves) {
       proposeDrag(Phase::Commit);
     } else if (drag_->moved) {

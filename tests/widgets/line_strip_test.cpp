@@ -76,6 +76,16 @@ TEST_F(LineStripTest, ADraggedShotMovesLiveAndIsCommittedOnce) {
   EXPECT_EQ(after.shots[2].traces, scene_.survey->shots[2].traces);
 }
 
+TEST_F(LineStripTest, ADraggedShotHoldsToAGeophoneExactly) {
+  const QPoint from = whole(strip_.shotPlace(2));
+  const int pixels = whole(strip_.geophonePlace(20)).x() - from.x();
+  QTest::mousePress(&strip_, Qt::LeftButton, {}, from);
+  QTest::mouseMove(&strip_, from + QPoint(pixels, 0));
+  QTest::mouseRelease(&strip_, Qt::LeftButton, {}, from + QPoint(pixels, 0));
+  ASSERT_FALSE(log_.proposals.empty());
+  EXPECT_EQ(applied(*scene_.survey, log_.proposals.back().edit).shots[2].point.x, scene_.survey->geophones[20].x);
+}
+
 TEST_F(LineStripTest, AShotDraggedPastItsNeighbourStaysSelected) {
   const QPoint from = whole(strip_.shotPlace(2));
   const QPoint to = whole(strip_.shotPlace(3)) + QPoint(30, 0);
