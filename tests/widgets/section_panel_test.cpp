@@ -192,12 +192,14 @@ TEST_F(SectionPanelTest, WithoutASectionTheReasonStandsInWords) {
   sample_.interpretation.section.determined = false;
   sample_.interpretation.section.reason = "all picks are direct arrivals";
   showSample();
-  EXPECT_EQ(panel_.findChild<LayerTable*>()->findChild<QLabel*>()->text(), "No depth is determined: all picks are direct arrivals");
+  EXPECT_EQ(panel_.findChild<LayerTable*>()->findChild<QLabel*>()->text(),
+            "No depth is determined: all picks are direct arrivals");
   QTest::mouseMove(canvas(), at(46.0, 3.0));
   QTest::mouseClick(canvas(), Qt::LeftButton, {}, at(46.0, 3.0));
   EXPECT_TRUE(log_.selections.empty());
   panel_.showScene({std::make_shared<Survey>(), nullptr, std::make_shared<std::vector<Gather>>(), {}});
-  EXPECT_EQ(panel_.findChild<LayerTable*>()->findChild<QLabel*>()->text(), "Drop shot records on this window, or open them from the File menu.");
+  EXPECT_EQ(panel_.findChild<LayerTable*>()->findChild<QLabel*>()->text(),
+            "Drop shot records on this window, or open them from the File menu.");
 }
 
 }  // namespace
