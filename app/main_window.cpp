@@ -1,6 +1,5 @@
 #include "app/main_window.h"
 
-#include <algorithm>
 #include <cmath>
 
 #include <QApplication>
@@ -25,6 +24,7 @@
 #include "core/survey/autopick.h"
 #include "core/survey/gathers.h"
 #include "core/survey/merge.h"
+#include "widgets/line_strip.h"
 #include "widgets/record_view.h"
 #include "widgets/section_panel.h"
 #include "widgets/travel_time_plot.h"
@@ -62,6 +62,7 @@ MainWindow::MainWindow(QWidget* parent) : QMainWindow(parent) {
   resize(1440, 900);
   restoreGeometry(settings.value("window").toByteArray());
   columns_->restoreState(settings.value("columns").toByteArray());
+  sectionPanel_->splitter().restoreState(settings.value("section").toByteArray());
   rows_->restoreState(settings.value("rows").toByteArray());
   showScene();
   showHistory();
@@ -70,10 +71,12 @@ MainWindow::MainWindow(QWidget* parent) : QMainWindow(parent) {
 MainWindow::~MainWindow() = default;
 
 void MainWindow::buildPanes() {
+  lineStrip_ = new LineStrip(this);
   recordView_ = new RecordView(this);
   travelTimePlot_ = new TravelTimePlot(this);
   sectionPanel_ = new SectionPanel(this);
   answerLine_ = new AnswerLine(this);
+  lineStrip_->setAxisMargins(kAxisLeft, kAxisRight);
   travelTimePlot_->setAxisMargins(kAxisLeft, kAxisRight);
   sectionPanel_->setAxisMargins(kAxisLeft, kAxisRight);
 
@@ -88,6 +91,7 @@ void MainWindow::buildPanes() {
   auto* rightLayout = new QVBoxLayout(right);
   rightLayout->setContentsMargins(0, 0, 0, 0);
   rightLayout->setSpacing(0);
+  rightLayout->addWidget(lineStrip_);
   rightLayout->addWidget(rows_, 1);
   columns_ = new QSplitter(Qt::Horizontal, this);
   columns_->addWidget(recordView_);
@@ -114,7 +118,7 @@ void MainWindow::buildPanes() {
   layout->addWidget(bottom);
   setCentralWidget(all);
 
-  views_ = {recordView_, travelTimePlot_, sectionPanel_};
+  views_ = {lineStrip_, recordView_, travelTimePlot_, sectionPanel_};
   for (View* view : views_) {
     connectView(view);
   }
@@ -138,14 +142,9 @@ void MainWindow::showScene() {
   const Survey& survey = *desk_.scene().survey;
   if (!rangeSet_ && !survey.geophones.empty()) {
     rangeSet_ = true;
-    double left = survey.geophones.front().x, right = survey.geophones.back().x;
-    for (const Shot& shot : survey.shots) {
-      left = std::min(left, shot.point.x);
-      right = std::max(right, shot.point.x);
-    }
-    const double edge = std::max(0.03 * (right - left), 0.5);
-    rangeLeft_ = left - edge;
-    rangeRight_ = right + edge;
+    const PositionRange whole = wholeLine(survey);
+    rangeLeft_ = whole.left;
+    rangeRight_ = whole.right;
     plumbLine_ = survey.geophones[survey.geophones.size() / 2].x;
     for (View* view : views_) {
       view->showPositionRange(rangeLeft_, rangeRight_);
@@ -321,6 +320,7 @@ void MainWindow::closeEvent(QCloseEvent* event) {
   QSettings settings;
   settings.setValue("window", saveGeometry());
   settings.setValue("columns", columns_->saveState());
+  settings.setValue("section", sectionPanel_->splitter().saveState());
   settings.setValue("rows", rows_->saveState());
   QMainWindow::closeEvent(event);
 }

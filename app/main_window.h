@@ -19,6 +19,7 @@ class QSplitter;
 namespace strikeplate {
 
 class AnswerLine;
+class LineStrip;
 class RecordView;
 class SectionPanel;
 class TravelTimePlot;
@@ -70,6 +71,7 @@ class MainWindow : public QMainWindow {
   void saveSheet();
   void editInfo();
   void editBoreholes();
+  void editGeometry();
   void showKeys();
   void showAbout();
   void askTriggerCorrections();
@@ -88,6 +90,7 @@ class MainWindow : public QMainWindow {
   Desk desk_;
   Job job_;
   std::vector<View*> views_;
+  LineStrip* lineStrip_ = nullptr;
   RecordView* recordView_ = nullptr;
   TravelTimePlot* travelTimePlot_ = nullptr;
   SectionPanel* sectionPanel_ = nullptr;

@@ -52,6 +52,7 @@ void MainWindow::buildEditMenu() {
   redo_ = add(menu, tr("Redo"), QKeySequence::Redo, &desk_, &Desk::redo);
   menu->addSeparator();
   add(menu, tr("&Job, client and crew..."), {}, this, &MainWindow::editInfo);
+  add(menu, tr("&Geometry..."), QKeySequence(tr("Ctrl+G")), this, &MainWindow::editGeometry);
   add(menu, tr("&Boreholes..."), {}, this, &MainWindow::editBoreholes);
 }
 

@@ -11,6 +11,7 @@
 #include "app/trigger_dialog.h"
 #include "app/versions.h"
 #include "core/base/units.h"
+#include "widgets/geometry_dialog.h"
 #include "widgets/travel_time_plot.h"
 
 namespace strikeplate {
@@ -26,6 +27,17 @@ void MainWindow::editBoreholes() {
   BoreholeDialog dialog(desk_.survey(), this);
   if (dialog.exec() == QDialog::Accepted && dialog.boreholes() != desk_.survey().boreholes) {
     desk_.commit(edits::setBoreholes(desk_.survey(), dialog.boreholes(), "Change boreholes"));
+  }
+}
+
+void MainWindow::editGeometry() {
+  if (desk_.survey().shots.empty()) {
+    say(tr("No line yet"), tr("Open shot records first; their geometry can then be put right here."));
+    return;
+  }
+  GeometryDialog dialog(desk_.survey(), this);
+  if (dialog.exec() == QDialog::Accepted && !dialog.edit().changes.empty()) {
+    desk_.commit(dialog.edit());
   }
 }
 
@@ -108,10 +120,17 @@ void MainWindow::showKeys() {
          "<tr><td>Drag over empty ground, Ctrl+click, Shift+Left, Right</td><td>marks many picks</td></tr>"
          "<tr><td>1 to 6, 0</td><td>gives the marked picks to a layer; 0 leaves them to the program</td></tr>"
          "<tr><td>Wheel, middle drag, +, -, Home</td><td>zooms and moves along the line; the whole line</td></tr>"
+         "<tr><td><b>Line strip</b></td><td></td></tr>"
+         "<tr><td>Click, Left, Right</td><td>chooses a shot, or the trace at a geophone</td></tr>"
+         "<tr><td>Drag a shot</td><td>moves it (Alt: without steps)</td></tr>"
+         "<tr><td><b>Section</b></td><td></td></tr>"
+         "<tr><td>Click</td><td>chooses a layer or a shot</td></tr>"
+         "<tr><td>Drag</td><td>moves along the line</td></tr>"
          "<tr><td><b>Everywhere</b></td><td></td></tr>"
          "<tr><td>Escape</td><td>abandons the gesture</td></tr>"
          "<tr><td>Ctrl+Z, Ctrl+Shift+Z</td><td>undo, redo</td></tr>"
          "<tr><td>F5</td><td>picks the line automatically</td></tr>"
+         "<tr><td>Ctrl+G</td><td>puts the geometry right in a table</td></tr>"
          "<tr><td>Ctrl+P</td><td>prints the sheet</td></tr>"
          "</table>"));
 }

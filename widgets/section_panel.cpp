@@ -1,106 +1,112 @@
 #include "widgets/section_panel.h"
 
-#include <algorithm>
+#include <cmath>
 
-#include <QListWidget>
+#include <QSplitter>
+#include <QTabWidget>
 #include <QVBoxLayout>
-#include <qcustomplot.h>
 
-#include "core/base/units.h"
-#include "widgets/plot_look.h"
+#include "widgets/doubts_list.h"
+#include "widgets/layer_table.h"
+#include "widgets/opinions_view.h"
+#include "widgets/section_plot.h"
 
 namespace strikeplate {
+namespace {
 
-SectionPanel::SectionPanel(QWidget* parent) : PositionView(parent), doubts_(new QListWidget(this)) {
-  setMinimumHeight(220);
+/// Least height of the tabs in lines of text: room for the table of three layers.
+constexpr int kTabLines = 7;
+
+}  // namespace
+
+SectionPanel::SectionPanel(QWidget* parent)
+    : View(parent),
+      plot_(new SectionPlot(this)),
+      layers_(new LayerTable(this)),
+      opinions_(new OpinionsView(this)),
+      doubts_(new DoubtsList(this)),
+      tabs_(new QTabWidget(this)),
+      splitter_(new QSplitter(Qt::Vertical, this)) {
   setAccessibleName(tr("Section"));
-  doubts_->setMaximumHeight(96);
-  doubts_->setWordWrap(true);
-  doubts_->setAccessibleName(tr("Doubts"));
+  tabs_->setDocumentMode(true);
+  tabs_->addTab(layers_, tr("&Layers"));
+  tabs_->addTab(opinions_, tr("Second &opinions"));
+  tabs_->addTab(doubts_, tr("&Doubts"));
+  tabs_->setMinimumHeight(kTabLines * fontMetrics().height());
+  splitter_->addWidget(plot_);
+  splitter_->addWidget(tabs_);
+  splitter_->setStretchFactor(0, 5);
+  splitter_->setStretchFactor(1, 2);
+  splitter_->setCollapsible(0, false);
+  splitter_->setSizes({500, 200});
   auto* layout = new QVBoxLayout(this);
   layout->setContentsMargins(0, 0, 0, 0);
-  layout->setSpacing(0);
-  layout->addWidget(&plot(), 1);
-  layout->addWidget(doubts_);
-  connect(doubts_, &QListWidget::currentRowChanged, this, [this](int row) {
-    if (row >= 0 && scene_.interpretation && row < static_cast<int>(scene_.interpretation->doubts.size())) {
-      const Doubt& doubt = scene_.interpretation->doubts[static_cast<std::size_t>(row)];
-      emit plumbLineWanted(doubt.x);
-      if (doubt.shot >= 0) {
-        emit selectionWanted({doubt.shot, doubt.trace, doubt.layer});
-      }
-    }
+  layout->addWidget(splitter_);
+  connect(plot_, &View::selectionWanted, this, &View::selectionWanted);
+  connect(plot_, &View::plumbLineWanted, this, &View::plumbLineWanted);
+  connect(plot_, &View::positionRangeWanted, this, &View::positionRangeWanted);
+  connect(plot_, &View::hint, this, &View::hint);
+  connect(opinions_, &OpinionsView::hint, this, &View::hint);
+  connect(doubts_, &DoubtsList::doubtChosen, this, &SectionPanel::goTo);
+  connect(layers_, &LayerTable::layerWanted, this, [this](int layer) {
+    emit selectionWanted({scene_.selection.shot, scene_.selection.trace, layer});
   });
 }
 
+void SectionPanel::goTo(const Doubt& doubt) {
+  Selection selection = scene_.selection;
+  if (doubt.shot >= 0) {
+    selection.shot = doubt.shot;
+    selection.trace = doubt.trace;
+  }
+  selection.layer = doubt.layer > 0 ? doubt.layer : selection.layer;
+  if (!(selection == scene_.selection)) {
+    emit selectionWanted(selection);
+  }
+  if (std::isfinite(doubt.x)) {
+    if (doubt.x < range_.left || doubt.x > range_.right) {
+      emit positionRangeWanted(doubt.x - 0.5 * range_.width(), doubt.x + 0.5 * range_.width());
+    }
+    emit plumbLineWanted(doubt.x);
+  }
+}
+
+void SectionPanel::setAxisMargins(int left, int right) {
+  plot_->setAxisMargins(left, right);
+}
+
 void SectionPanel::showScene(const Scene& scene) {
-  const bool other = scene.interpretation != scene_.interpretation;
   scene_ = scene;
-  if (other) {
-    const QSignalBlocker quiet(doubts_);
-    doubts_->clear();
-    for (std::size_t i = 0; scene_.interpretation && i < scene_.interpretation->doubts.size(); ++i) {
-      const Doubt& doubt = scene_.interpretation->doubts[i];
-      auto* item = new QListWidgetItem(QString::fromStdString(doubt.says), doubts_);
-      item->setToolTip(QString::fromStdString(doubt.restsOn + "\n" + doubt.wouldSettle));
-    }
-  }
-  draw();
+  plot_->showScene(scene);
+  layers_->showScene(scene);
+  opinions_->showScene(scene);
+  doubts_->showScene(scene);
+  const std::size_t count = scene.interpretation ? scene.interpretation->doubts.size() : 0;
+  tabs_->setTabText(tabs_->indexOf(doubts_), count > 0 ? tr("&Doubts (%1)").arg(count) : tr("&Doubts"));
 }
 
-void SectionPanel::drawInterface(const Section& section, std::size_t index, double& lowest) {
-  const Units units{scene_.survey->settings.feet};
-  const SectionInterface& interface = section.interfaces[index];
-  QVector<double> x, middle, low, high;
-  for (std::size_t i = 0; i < section.x.size(); ++i) {
-    const Estimate& d = interface.depth[i];
-    if (d.determined) {
-      x << units.fromMetres(section.x[i]);
-      middle << units.fromMetres(section.ground[i] - d.value);
-      low << units.fromMetres(section.ground[i] - d.high95);
-      high << units.fromMetres(section.ground[i] - d.low95);
-      lowest = std::min(lowest, low.back());
-    }
-  }
-  const QColor colour = look().layerColour(interface.layer);
-  QColor fill = colour;
-  fill.setAlpha(60);
-  auto* top = plot().addGraph();
-  top->setData(x, high, true);
-  top->setPen(Qt::NoPen);
-  auto* bottom = plot().addGraph();
-  bottom->setData(x, low, true);
-  bottom->setPen(Qt::NoPen);
-  top->setBrush(fill);
-  top->setChannelFillGraph(bottom);
-  auto* line = plot().addGraph();
-  line->setData(x, middle, true);
-  line->setPen(QPen(colour, 1.6 * look().lineWidth));
+void SectionPanel::showSelection(const Selection& selection) {
+  scene_.selection = selection;
+  plot_->showSelection(selection);
+  layers_->showSelection(selection);
+  opinions_->showSelection(selection);
 }
 
-void SectionPanel::drawData() {
-  const Units units{scene_.survey->settings.feet};
-  const QString unit = QString::fromStdString(units.lengthUnit());
-  plot().xAxis->setLabel(tr("Position along the line (%1)").arg(unit));
-  plot().yAxis->setLabel(tr("Elevation (%1)").arg(unit));
-  QVector<double> x, ground;
-  for (const Geophone& geophone : scene_.survey->geophones) {
-    x << units.fromMetres(geophone.x);
-    ground << units.fromMetres(geophone.elevation);
-  }
-  auto* surface = plot().addGraph();
-  surface->setData(x, ground, true);
-  surface->setPen(QPen(look().ground, 1.6 * look().lineWidth));
-  surface->setScatterStyle(QCPScatterStyle(QCPScatterStyle::ssTriangleInverted, 5));
-  const double highest = ground.isEmpty() ? 0.0 : *std::max_element(ground.begin(), ground.end());
-  double lowest = highest - 5.0;
-  if (scene_.interpretation && scene_.interpretation->section.determined) {
-    for (std::size_t i = 0; i < scene_.interpretation->section.interfaces.size(); ++i) {
-      drawInterface(scene_.interpretation->section, i, lowest);
-    }
-  }
-  const double edge = 0.1 * (highest - lowest);
-  plot().yAxis->setRange(lowest - edge, highest + edge);
+void SectionPanel::showPlumbLine(double x) {
+  plot_->showPlumbLine(x);
+  layers_->showPlumbLine(x);
+  opinions_->showPlumbLine(x);
+}
+
+void SectionPanel::showPositionRange(double left, double right) {
+  range_ = {left, right};
+  plot_->showPositionRange(left, right);
+}
+
+void SectionPanel::setLook(const Look& look) {
+  plot_->setLook(look);
+  layers_->setLook(look);
+  opinions_->setLook(look);
 }
 
 }  // namespace strikeplate
