@@ -122,6 +122,7 @@ void MainWindow::buildPanes() {
   for (View* view : views_) {
     connectView(view);
   }
+  connect(recordView_, &RecordView::pickShotWanted, this, &MainWindow::startPicking);
 }
 
 void MainWindow::connectView(View* view) {

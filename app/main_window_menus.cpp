@@ -4,6 +4,8 @@
 #include <QSettings>
 
 #include "app/main_window.h"
+#include "widgets/record_display_menu.h"
+#include "widgets/record_view.h"
 #include "widgets/travel_time_plot.h"
 
 namespace strikeplate {
@@ -109,6 +111,7 @@ void MainWindow::buildViewMenu() {
     ++kind;
   }
   menu->addSeparator();
+  fillDisplayMenu(*menu->addMenu(tr("&Record")), *recordView_);
   buildTravelTimeMenu(menu->addMenu(tr("Travel &times")));
   menu->addSeparator();
   feet_ = menu->addAction(tr("&Feet instead of metres"));

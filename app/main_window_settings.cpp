@@ -7,6 +7,7 @@
 #include "app/answer_line.h"
 #include "app/borehole_dialog.h"
 #include "app/info_dialog.h"
+#include "app/key_list.h"
 #include "app/main_window.h"
 #include "app/trigger_dialog.h"
 #include "app/versions.h"
@@ -107,32 +108,7 @@ void MainWindow::setLookKind(LookKind kind) {
 }
 
 void MainWindow::showKeys() {
-  say(tr("Keys and gestures"),
-      tr("<table cellpadding=3>"
-         "<tr><td><b>Record</b></td><td></td></tr>"
-         "<tr><td>Click</td><td>sets the first break at the onset nearby (Alt: exactly there)</td></tr>"
-         "<tr><td>Drag a pick</td><td>moves it</td></tr>"
-         "<tr><td>Delete</td><td>deletes the pick</td></tr>"
-         "<tr><td>Page up, Page down</td><td>shot before, next shot</td></tr>"
-         "<tr><td><b>Travel times</b></td><td></td></tr>"
-         "<tr><td>Drag a ringed branch end</td><td>slides it along the curve and re-assigns what it passes</td></tr>"
-         "<tr><td>Click a pick, Left, Right</td><td>selects it; goes along the curve</td></tr>"
-         "<tr><td>Drag over empty ground, Ctrl+click, Shift+Left, Right</td><td>marks many picks</td></tr>"
-         "<tr><td>1 to 6, 0</td><td>gives the marked picks to a layer; 0 leaves them to the program</td></tr>"
-         "<tr><td>Wheel, middle drag, +, -, Home</td><td>zooms and moves along the line; the whole line</td></tr>"
-         "<tr><td><b>Line strip</b></td><td></td></tr>"
-         "<tr><td>Click, Left, Right</td><td>chooses a shot, or the trace at a geophone</td></tr>"
-         "<tr><td>Drag a shot</td><td>moves it (Alt: without steps)</td></tr>"
-         "<tr><td><b>Section</b></td><td></td></tr>"
-         "<tr><td>Click</td><td>chooses a layer or a shot</td></tr>"
-         "<tr><td>Drag</td><td>moves along the line</td></tr>"
-         "<tr><td><b>Everywhere</b></td><td></td></tr>"
-         "<tr><td>Escape</td><td>abandons the gesture</td></tr>"
-         "<tr><td>Ctrl+Z, Ctrl+Shift+Z</td><td>undo, redo</td></tr>"
-         "<tr><td>F5</td><td>picks the line automatically</td></tr>"
-         "<tr><td>Ctrl+G</td><td>puts the geometry right in a table</td></tr>"
-         "<tr><td>Ctrl+P</td><td>prints the sheet</td></tr>"
-         "</table>"));
+  KeyList(this).exec();
 }
 
 void MainWindow::showAbout() {
