@@ -52,7 +52,7 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
       updateNoise(work);
     if (round > 1)
       findLinePrior(work);
-    const NoiseModel noise = whitenAll(work, 1e-5);
+    const NoiseModel noise = whitenAll(work, 1e-5, 1);
     silenceCrosstalk(work);
     const auto report = [&](double f) { return goOn(progress, 0.5 * (round + f) / kCoarseRounds); };
     if (!coarsePass(work, noise, report))
@@ -61,7 +61,7 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
   for (int round = 0; round < kFineRounds; ++round) {
     updateNoise(work);
     findLinePrior(work);
-    const PulseBank bank = makePulseBank(whitenAll(work, 1e-5));
+    const PulseBank bank = makePulseBank(whitenAll(work, 1e-5, 2));
     silenceCrosstalk(work);
     const auto report = [&](double f) { return goOn(progress, 0.5 + 0.5 * (round + f) / kFineRounds); };
     if (!finePass(work, bank, report))

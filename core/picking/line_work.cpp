@@ -60,12 +60,22 @@ std::vector<std::size_t> sideOf(const LineWork& work, std::size_t gather, bool r
   return side;
 }
 
-/// Brings the whitened noise to unit variance: a trace's noise may sound unlike the survey's.
-void levelWhite(LineTrace& t, std::size_t first) {
+/// Brings the whitened noise to the spectral level of unit white noise where arrivals have their energy: a trace's
+/// noise may sound unlike the survey's. Measured on running sums of `length` samples, since above the recorded band
+/// there is nothing, and a variance over all frequencies makes the noise in the band too small.
+void levelWhite(LineTrace& t, std::size_t first, std::size_t length) {
   const std::size_t from = std::min(t.noiseEnd, first + 14);
-  const NoiseLevel level = noiseLevel({t.white.data() + from, t.noiseEnd - from});
   const auto count = static_cast<double>(t.noiseEnd - from);
-  const double factor = std::sqrt((count * (level.rms * level.rms) + 10.0) / (count + 10.0));
+  double power = 0.0, sum = 0.0;
+  for (std::size_t i = from; i < t.noiseEnd; ++i) {
+    sum += t.white[i];
+    if (i >= from + length) {
+      sum -= t.white[i - length];
+      power += sum * sum / static_cast<double>(length);
+    }
+  }
+  const double level = count > static_cast<double>(length) ? power / (count - static_cast<double>(length)) : 1.0;
+  const double factor = std::sqrt((count * level + 10.0) / (count + 10.0));
   t.rms *= factor;
   for (float& e : t.white)
     e = static_cast<float>(e / factor);
@@ -147,7 +157,7 @@ void removeHumAll(LineWork& work) {
   }
 }
 
-NoiseModel whitenAll(LineWork& work, double floor) {
+NoiseModel whitenAll(LineWork& work, double floor, std::size_t sum) {
   std::vector<std::vector<float>> samples;
   std::vector<std::size_t> ends;
   std::vector<double> levels;
@@ -174,7 +184,7 @@ NoiseModel whitenAll(LineWork& work, double floor) {
       unit[i] = static_cast<float>((t.samples[i] - (count > 5.0 ? level.mean : 0.0)) / t.rms);
     }
     t.white = whitened(model, unit);
-    levelWhite(t, first);
+    levelWhite(t, first, sum);
   }
   return model;
 }

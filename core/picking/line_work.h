@@ -54,7 +54,7 @@ std::size_t noiseEndOf(const LineTrace& trace);
 void removeHumAll(LineWork& work);
 
 /// Fits the noise model to the usable traces' noise, with `floor` of white noise as a share of its variance, levels
-/// each trace by its noise and whitens it.
-NoiseModel whitenAll(LineWork& work, double floor);
+/// each trace by its noise, measured on running sums of `sum` samples, and whitens it.
+NoiseModel whitenAll(LineWork& work, double floor, std::size_t sum);
 
 }  // namespace strikeplate
