@@ -8,8 +8,7 @@
 
 namespace strikeplate {
 
-/// Depth to layer 2 by intercept time, for each shot and side with a direct branch and one through layer 2. The
-/// covariance of intercept and slope enters the sigma. Source: Sheriff and Geldart, Exploration Seismology (1995).
+/// The depths by every route for which the picks hold the data; a route without data is absent.
 std::vector<Opinion> secondOpinions(const TravelTimes& times, const std::vector<Branch>& branches);
 
 }  // namespace strikeplate
