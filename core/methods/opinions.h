@@ -8,8 +8,11 @@
 
 namespace strikeplate {
 
-/// Depth to layer 2 by intercept time, for each shot and side with a direct branch and one through layer 2. The
-/// covariance of intercept and slope enters the sigma. Source: Sheriff and Geldart, Exploration Seismology (1995).
+/// Every hand method's depths, for each layer and place where the picks hold what it needs; a route without data is
+/// absent, one whose data contradict its assumptions is there with the reason. Below the shots: "intercept time",
+/// "crossover distance" (from a free direct line, so that no trigger delay enters) and "dipping layers". Below the
+/// geophones: "plus-minus" and "reciprocal". Where several pairs of shots speak about one place, the surest one.
+/// Sources: flat_layers.h, dipping_layers.h, reversed_pair.h.
 std::vector<Opinion> secondOpinions(const TravelTimes& times, const std::vector<Branch>& branches);
 
 }  // namespace strikeplate
