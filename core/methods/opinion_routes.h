@@ -47,6 +47,9 @@ void addDippingLayers(const Evidence& evidence, std::vector<Opinion>& opinions);
 /// Plus-minus and reciprocal depths below each geophone that a refractor was recorded at from both sides.
 void addStationDepths(const Evidence& evidence, const OverburdenModel& overburden, std::vector<Opinion>& opinions);
 
+/// Depths by time terms below each geophone whose term the picks fix, shots between geophones taking their terms.
+void addTimeTerms(const Evidence& evidence, const OverburdenModel& overburden, std::vector<Opinion>& opinions);
+
 /// The fitted lines of one shot's side from the direct one to layer `deepest`, as far as they follow without a gap.
 std::vector<LineFit> linesDownTo(const Evidence& evidence, int shot, int side, int deepest);
 

@@ -130,7 +130,9 @@ std::vector<Opinion> secondOpinions(const TravelTimes& times, const std::vector<
   std::vector<Opinion> opinions;
   opinion_routes::addLevelLayers(evidence, opinions);
   opinion_routes::addDippingLayers(evidence, opinions);
-  opinion_routes::addStationDepths(evidence, opinion_routes::OverburdenModel(evidence), opinions);
+  const opinion_routes::OverburdenModel overburden(evidence);
+  opinion_routes::addStationDepths(evidence, overburden, opinions);
+  opinion_routes::addTimeTerms(evidence, overburden, opinions);
   return opinions;
 }
 

@@ -1,9 +1,11 @@
-// Depths below the geophones: plus-minus and the conventional reciprocal method.
+// Depths below the geophones: plus-minus, the conventional reciprocal method, time terms.
+#include <set>
 #include <string>
 #include <utility>
 
 #include "core/methods/opinion_routes.h"
 #include "core/methods/reversed_pair.h"
+#include "core/methods/time_terms.h"
 
 namespace strikeplate::opinion_routes {
 
@@ -36,6 +38,31 @@ void addStationDepths(const Evidence& evidence, const OverburdenModel& overburde
   }
   byMinus.moveInto(opinions);
   byMean.moveInto(opinions);
+}
+
+void addTimeTerms(const Evidence& evidence, const OverburdenModel& overburden, std::vector<Opinion>& opinions) {
+  std::set<int> layers;
+  for (const Branch& branch : evidence.branches) {
+    if (branch.layer > 1) {
+      layers.insert(branch.layer);
+    }
+  }
+  for (const int layer : layers) {
+    const TimeTerms terms = timeTerms(evidence.times, layer, TimeTerms::Sources::Tied);
+    if (!terms.determined || !terms.isFixed(terms.unknowns - 1)) {
+      continue;
+    }
+    for (std::size_t i = 0; i < terms.geophones.size(); ++i) {
+      const double x = evidence.times.geophones[static_cast<std::size_t>(terms.geophones[i])].x;
+      const auto above = overburden.above(layer, x);
+      if (!above || !terms.isFixed(static_cast<Eigen::Index>(i))) {
+        continue;
+      }
+      opinions.push_back({"time terms", layer, -1, x, depthFromDelay(terms.delay(i), *above),
+                          "one refractor velocity for all shots, relief small against the depth; a shot between two "
+                          "geophones takes their terms"});
+    }
+  }
 }
 
 }  // namespace strikeplate::opinion_routes

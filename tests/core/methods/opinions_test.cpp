@@ -37,6 +37,7 @@ TEST(SecondOpinions, EveryRouteFindsALevelRefractor) {
   EXPECT_EQ(count["dipping layers"], 3);
   EXPECT_GE(count["plus-minus"], 16);
   EXPECT_EQ(count["plus-minus"], count["reciprocal"]);
+  EXPECT_GE(count["time terms"], 16);
 }
 
 TEST(SecondOpinions, ARouteWithoutDataIsAbsent) {
