@@ -1,139 +1,160 @@
 #include "core/methods/dipping_layers.h"
 
 #include <cmath>
+#include <optional>
+#include <utility>
 
-#include "core/methods/derivatives.h"
+#include "core/methods/first_order.h"
 #include "core/traveltime/line_fit.h"
 
 namespace strikeplate {
 namespace {
 
-DippingLayers none(std::string reason) {
-  DippingLayers out;
-  out.reason = std::move(reason);
-  return out;
+template <typename Result>
+Result undetermined(std::string reason) {
+  Result result;
+  result.reason = std::move(reason);
+  return result;
 }
 
-bool isSine(const Derived& value) {
-  return std::abs(value.value()) < 1.0;
+std::string layerName(std::size_t refractor) {
+  return "layer " + std::to_string(refractor + 2);
 }
 
-/// What is known when some layers have been stripped.
-struct Stripped {
-  std::vector<Derived> velocity, dip, thicknessA, thicknessB;
-};
-
-/// Strips one more refractor; an empty string when it went well, else why not.
-std::string stripNext(Stripped& known, const Derived& slopeA, const Derived& interceptA, const Derived& slopeB,
-                      const Derived& interceptB) {
-  const std::string layer = "layer " + std::to_string(known.velocity.size() + 1);
-  Derived e(known.velocity[0] * slopeA);
-  Derived d(known.velocity[0] * slopeB);
-  if (!isSine(e) || !isSine(d)) {
-    return "The branch of " + layer + " is slower than the first layer.";
+/// data = v1's slowness, then slope and intercept from A and from B of each refractor. Gives slowness of layers 2 to
+/// N, dips, depths at A, depths at B, N - 1 of each.
+std::optional<Eigen::VectorXd> planesOf(const Eigen::VectorXd& data) {
+  std::vector<ReversedTimes> times;
+  for (Eigen::Index i = 1; i < data.size(); i += 4) {
+    times.push_back({data(i + 1), data(i), data(i + 3), data(i + 2)});
   }
-  e = asin(e);
-  d = asin(d);
-  Derived sumA(interceptA * 0.0);
-  Derived sumB(sumA);
-  for (std::size_t i = 0; i < known.dip.size(); ++i) {
-    const Derived way((cos(d) + cos(e)) / known.velocity[i]);
-    sumA += known.thicknessA[i] * way;
-    sumB += known.thicknessB[i] * way;
-    const Derived ratio(known.velocity[i + 1] / known.velocity[i]);
-    const Derived down(ratio * sin(Derived(d + known.dip[i])));
-    const Derived up(ratio * sin(Derived(e - known.dip[i])));
-    if (!isSine(down) || !isSine(up)) {
-      return "The wave of " + layer + " cannot pass through the layers above; check the assignment of its branches.";
-    }
-    d = asin(down) - known.dip[i];
-    e = asin(up) + known.dip[i];
+  const DippingPlanes planes = dippingPlanes(1.0 / data(0), times);
+  if (!planes.determined) {
+    return std::nullopt;
   }
-  const Derived critical(0.5 * (d + e));
-  if (!(std::sin(critical.value()) > 0.0)) {
-    return "The branches of " + layer + " give no critical angle.";
-  }
-  const Derived above = known.velocity.back();
-  const Derived way((cos(d) + cos(e)) / above);
-  known.thicknessA.emplace_back((interceptA - sumA) / way);
-  known.thicknessB.emplace_back((interceptB - sumB) / way);
-  known.dip.emplace_back(0.5 * (e - d));
-  known.velocity.emplace_back(above / sin(critical));
-  if (!(known.velocity.back().value() > above.value())) {
-    return "The " + layer + " comes out no faster than the one above it.";
-  }
-  if (!(known.thicknessA.back().value() > 0.0) || !(known.thicknessB.back().value() > 0.0)) {
-    return "The interface above " + layer + " crosses the one above it between the shots.";
-  }
-  return {};
-}
-
-std::vector<Estimate> estimates(const std::vector<Derived>& values, const Eigen::MatrixXd& covariance) {
-  std::vector<Estimate> out;
-  for (const Derived& v : values) {
-    out.push_back(estimateOf(v, covariance));
+  const auto count = static_cast<Eigen::Index>(times.size());
+  Eigen::VectorXd out(4 * count);
+  double depthA = 0.0, depthB = 0.0;
+  for (Eigen::Index i = 0; i < count; ++i) {
+    const auto at = static_cast<std::size_t>(i);
+    depthA += planes.thicknessA[at];
+    depthB += planes.thicknessB[at];
+    out(i) = 1.0 / planes.velocity[at + 1];
+    out(count + i) = planes.dip[at];
+    out(2 * count + i) = depthA;
+    out(3 * count + i) = depthB;
   }
   return out;
 }
 
-std::vector<Estimate> summed(const std::vector<Derived>& thicknesses, const Eigen::MatrixXd& covariance) {
-  std::vector<Derived> depths;
-  for (const Derived& h : thicknesses) {
-    depths.emplace_back(depths.empty() ? h : Derived(depths.back() + h));
-  }
-  return estimates(depths, covariance);
+void putLine(const LineFit& line, Eigen::Index at, Eigen::VectorXd& data, Eigen::MatrixXd& covariance) {
+  data(at) = line.intercept;
+  data(at + 1) = line.slope;
+  covariance(at, at) = line.varIntercept;
+  covariance(at + 1, at + 1) = line.varSlope;
+  covariance(at, at + 1) = covariance(at + 1, at) = line.covariance;
 }
 
 }  // namespace
 
-DippingLayers layersFromReversed(const Datum& direct, std::span<const ReversedLines> refractors) {
-  if (!(direct.value > 0.0) || !std::isfinite(direct.value) || !(direct.sigma >= 0.0)) {
-    return none("The direct wave has no velocity.");
+DippingPlanes dippingPlanes(double v1, std::span<const ReversedTimes> refractors) {
+  if (!(v1 > 0.0) || !std::isfinite(v1) || refractors.empty()) {
+    return undetermined<DippingPlanes>("a direct velocity and reversed times of a refractor are needed");
   }
-  if (refractors.empty()) {
-    return none("No refractor is seen from both ends.");
-  }
-  const auto size = 1 + 4 * static_cast<Eigen::Index>(refractors.size());
-  std::vector<double> data{direct.value};
-  Eigen::MatrixXd covariance = Eigen::MatrixXd::Zero(size, size);
-  covariance(0, 0) = direct.sigma * direct.sigma;
-  for (const ReversedLines& lines : refractors) {
-    for (const LineFit* line : {&lines.a, &lines.b}) {
-      if (!line->determined) {
-        return none("A branch has no line: " + line->reason);
-      }
-      const auto at = static_cast<Eigen::Index>(data.size());
-      data.push_back(line->slope);
-      data.push_back(line->intercept);
-      covariance.block<2, 2>(at, at) << line->varSlope, line->covariance, line->covariance, line->varIntercept;
-    }
-  }
-  const std::vector<Derived> variables = independent(data);
-  Stripped known;
-  known.velocity.emplace_back(1.0 / variables[0]);
+  DippingPlanes planes;
+  planes.velocity.push_back(v1);
   for (std::size_t n = 0; n < refractors.size(); ++n) {
-    const Derived* v = &variables[1 + 4 * n];
-    if (std::string why = stripNext(known, v[0], v[1], v[2], v[3]); !why.empty()) {
-      return none(std::move(why));
+    const ReversedTimes& t = refractors[n];
+    if (!(std::abs(v1 * t.slopeA) <= 1.0) || !(std::abs(v1 * t.slopeB) <= 1.0)) {
+      return undetermined<DippingPlanes>(layerName(n) + ": its apparent velocity is below that of layer 1");
     }
+    double e = std::asin(v1 * t.slopeA), d = std::asin(v1 * t.slopeB);
+    double aboveA = 0.0, aboveB = 0.0;
+    for (std::size_t i = 0; i < n; ++i) {
+      const double perMetre = (std::cos(d) + std::cos(e)) / planes.velocity[i];
+      aboveA += planes.thicknessA[i] * perMetre;
+      aboveB += planes.thicknessB[i] * perMetre;
+      const double ratio = planes.velocity[i + 1] / planes.velocity[i];
+      const double sinD = ratio * std::sin(d + planes.dip[i]), sinE = ratio * std::sin(e - planes.dip[i]);
+      if (!(std::abs(sinD) <= 1.0) || !(std::abs(sinE) <= 1.0)) {
+        return undetermined<DippingPlanes>(layerName(n) + ": no ray passes layer " + std::to_string(i + 2) +
+                                           " to reach it; check its assignment");
+      }
+      d = std::asin(sinD) - planes.dip[i];
+      e = std::asin(sinE) + planes.dip[i];
+    }
+    const double above = planes.velocity.back(), critical = 0.5 * (d + e);
+    const double velocity = above / std::sin(critical);
+    if (!(velocity > above) || !std::isfinite(velocity)) {
+      return undetermined<DippingPlanes>(layerName(n) + ": the velocity does not grow with depth");
+    }
+    const double perSecond = above / (std::cos(d) + std::cos(e));
+    const double hA = (t.interceptA - aboveA) * perSecond, hB = (t.interceptB - aboveB) * perSecond;
+    if (!(hA > 0.0) || !(hB > 0.0) || !std::isfinite(hA) || !std::isfinite(hB)) {
+      return undetermined<DippingPlanes>(layerName(n) + ": the layer above it gets no positive thickness");
+    }
+    planes.velocity.push_back(velocity);
+    planes.dip.push_back(0.5 * (e - d));
+    planes.thicknessA.push_back(hA);
+    planes.thicknessB.push_back(hB);
   }
-  DippingLayers out;
-  out.determined = true;
-  out.velocities = estimates(known.velocity, covariance);
-  out.dips = estimates(known.dip, covariance);
-  out.thicknessesA = estimates(known.thicknessA, covariance);
-  out.thicknessesB = estimates(known.thicknessB, covariance);
-  out.depthsA = summed(known.thicknessA, covariance);
-  out.depthsB = summed(known.thicknessB, covariance);
-  return out;
+  planes.determined = true;
+  return planes;
 }
 
-Estimate reciprocityOf(const ReversedLines& lines, double length) {
-  if (!lines.a.determined || !lines.b.determined) {
-    return Estimate::none("a branch has no line");
+DippingLayers dippingLayers(const ReversedLines& direct, std::span<const ReversedLines> refractors) {
+  double weights = 0.0, slowness = 0.0;
+  for (const LineFit* line : {&direct.fromA, &direct.fromB}) {
+    if (line->determined && line->varSlope > 0.0) {
+      weights += 1.0 / line->varSlope;
+      slowness += line->slope / line->varSlope;
+    }
   }
-  return Estimate::normal(lines.a.at(length) - lines.b.at(length),
-                          std::sqrt(varianceAt(lines.a, length) + varianceAt(lines.b, length)));
+  if (!(weights > 0.0) || refractors.empty()) {
+    return undetermined<DippingLayers>("a direct branch and reversed branches of a refractor are needed");
+  }
+  const auto count = static_cast<Eigen::Index>(refractors.size());
+  Eigen::VectorXd data(1 + 4 * count);
+  Eigen::MatrixXd covariance = Eigen::MatrixXd::Zero(data.size(), data.size());
+  data(0) = slowness / weights;
+  covariance(0, 0) = 1.0 / weights;
+  std::vector<ReversedTimes> times;
+  for (Eigen::Index i = 0; i < count; ++i) {
+    const ReversedLines& r = refractors[static_cast<std::size_t>(i)];
+    if (!r.fromA.determined || !r.fromB.determined) {
+      return undetermined<DippingLayers>(layerName(static_cast<std::size_t>(i)) + ": " +
+                                         (r.fromA.determined ? r.fromB.reason : r.fromA.reason));
+    }
+    putLine(r.fromA, 1 + 4 * i, data, covariance);
+    putLine(r.fromB, 3 + 4 * i, data, covariance);
+    times.push_back({r.fromA.slope, r.fromA.intercept, r.fromB.slope, r.fromB.intercept});
+  }
+  const auto result = propagate(planesOf, data, covariance);
+  if (!result) {
+    const DippingPlanes planes = dippingPlanes(1.0 / data(0), times);
+    return undetermined<DippingLayers>(
+        planes.determined ? "the times lie at the limit of what a plane layer can explain" : planes.reason);
+  }
+  const auto sigma = [&result](Eigen::Index i) { return std::sqrt(result->covariance(i, i)); };
+  const auto estimate = [&](Eigen::Index i) { return Estimate::normal(result->value(i), sigma(i)); };
+  DippingLayers layers;
+  layers.determined = true;
+  layers.velocities.push_back(Estimate::fromSlowness(data(0), std::sqrt(covariance(0, 0))));
+  for (Eigen::Index i = 0; i < count; ++i) {
+    layers.velocities.push_back(Estimate::fromSlowness(result->value(i), sigma(i)));
+    layers.dips.push_back(estimate(count + i));
+    layers.depthsA.push_back(estimate(2 * count + i));
+    layers.depthsB.push_back(estimate(3 * count + i));
+  }
+  return layers;
+}
+
+Estimate reciprocityGap(const ReversedLines& refractor, double distance) {
+  if (!refractor.fromA.determined || !refractor.fromB.determined) {
+    return Estimate::none("both shots need a branch of this refractor");
+  }
+  return Estimate::normal(refractor.fromA.at(distance) - refractor.fromB.at(distance),
+                          std::sqrt(varianceAt(refractor.fromA, distance) + varianceAt(refractor.fromB, distance)));
 }
 
 }  // namespace strikeplate

@@ -5,42 +5,53 @@
 #include <vector>
 
 #include "core/base/estimate.h"
-#include "core/methods/two_layers.h"
 #include "core/traveltime/branch.h"
 
 namespace strikeplate {
 
-/// The head wave of one refractor, seen from both ends of a profile.
-struct ReversedLines {
-  LineFit a;  ///< from the shot at x = 0, offsets growing with x
-  LineFit b;  ///< from the shot at x = length, offsets growing against x
+/// Reversed times of one refractor: A shoots toward larger x, B back. Slopes in s/m, intercepts in s.
+struct ReversedTimes {
+  double slopeA = 0.0, interceptA = 0.0, slopeB = 0.0, interceptB = 0.0;
 };
 
-/// Plane dipping layers between two shots of a reversed profile. Layer and interface numbers as in FlatLayers.
+/// N plane dipping layers of one strike. Interface i separates velocity i and i + 1.
+struct DippingPlanes {
+  bool determined = false;
+  std::string reason;                          ///< why not
+  std::vector<double> velocity;                ///< m/s, N
+  std::vector<double> dip;                     ///< rad, N - 1, positive when deeper toward B
+  std::vector<double> thicknessA, thicknessB;  ///< m, vertical, N - 1, below A and below B
+};
+
+/// The layers from v1 (m/s) and the reversed times of refractors 2 to N, layer by layer: the angles at the surface
+/// are asin(v1 slope), each known interface refracts them, and at the refractor theta = (d + e)/2, dip = (e - d)/2,
+/// v = v_above / sin theta, thickness = (intercept - time spent above) v_above / (cos d + cos e).
+///
+/// Not determined, with a reason, when |v1 slope| > 1, a ray cannot reach the refractor, the velocity does not grow
+/// or a thickness is not positive. Source: Adachi, Kumamoto J. Sci. A 2 (1954) 18; Mota, Geophysics 19 (1954) 242;
+/// Johnson, Geophysics 41 (1976) 418; the recursion in this form is our own derivation.
+DippingPlanes dippingPlanes(double v1, std::span<const ReversedTimes> refractors);
+
+/// Fitted lines of one refractor from A and from B.
+struct ReversedLines {
+  LineFit fromA, fromB;
+};
+
+/// The same with sigmas, depths being vertical below the two shots.
 struct DippingLayers {
   bool determined = false;
-  std::string reason;                  ///< when not determined
-  std::vector<Estimate> velocities;    ///< m/s
-  std::vector<Estimate> dips;          ///< rad, of the tops of layers 2, 3, ...; positive deeper towards +x
-  std::vector<Estimate> thicknessesA;  ///< m, vertical, under shot A
-  std::vector<Estimate> thicknessesB;  ///< m, vertical, under shot B
-  std::vector<Estimate> depthsA;       ///< m, vertical, to the tops of layers 2, 3, ...
-  std::vector<Estimate> depthsB;
+  std::string reason;
+  std::vector<Estimate> velocities;        ///< m/s, N
+  std::vector<Estimate> dips;              ///< rad, N - 1, positive when deeper toward B
+  std::vector<Estimate> depthsA, depthsB;  ///< m, to the tops of layers 2 to N below A and B
 };
 
-/// Strips dipping plane interfaces one after the other: the angles at which the wave leaves A and comes up under B
-/// are carried down through the known interfaces by Snell's law, theta = (d + e)/2 and dip = (e - d)/2 at the
-/// refractor, V_n = V_(n-1) / sin theta, and intercept time = sum over layers of (h_i / V_i)(cos d_i + cos e_i).
-///
-/// `direct` is the slowness (s/m) of the first layer. One entry of `refractors` for each of layers 2, 3, ...
-/// sigma to first order with each line's slope-intercept covariance. The same strike is assumed for all interfaces.
-/// Not determined, with the reason, where |V p| > 1, a thickness is not positive at an end, or a velocity does not
-/// grow with depth. Source: Ewing, Woollard & Vine, GSA Bull. 50 (1939); Adachi, Kumamoto J. Sci. A 2 (1954) 18;
-/// Johnson, Geophysics 41 (1976) 418-424; derivation in that form own.
-DippingLayers layersFromReversed(const Datum& direct, std::span<const ReversedLines> refractors);
+/// v1 from both direct lines together (weighted mean slowness; only `fromA` or `fromB` may be determined); sigma to
+/// first order with each line's covariance of slope and intercept, intervals of velocities from slowness.
+DippingLayers dippingLayers(const ReversedLines& direct, std::span<const ReversedLines> refractors);
 
-/// s by which the times of one refractor at the two shots differ: (tiA + pA L) - (tiB + pB L), 0 by reciprocity, with
-/// its sigma. L in m.
-Estimate reciprocityOf(const ReversedLines& lines, double length);
+/// What the times from A to B and from B to A differ by on one refractor (s), extrapolated over the distance (m)
+/// between the shots; zero where the branches belong together.
+Estimate reciprocityGap(const ReversedLines& refractor, double distance);
 
 }  // namespace strikeplate

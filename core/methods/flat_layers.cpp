@@ -1,134 +1,137 @@
 #include "core/methods/flat_layers.h"
 
 #include <cmath>
+#include <utility>
 
-#include "core/methods/derivatives.h"
+#include "core/methods/first_order.h"
 
 namespace strikeplate {
 namespace {
 
-FlatLayers none(std::string reason) {
-  FlatLayers out;
-  out.reason = std::move(reason);
-  return out;
+enum class Route { Intercepts, Crossovers };
+
+FlatLayers undetermined(std::string reason) {
+  FlatLayers layers;
+  layers.reason = std::move(reason);
+  return layers;
 }
 
-Derived contrast(const Derived& s, const Derived& below) {
-  return Derived(sqrt(s * s - below * below));
-}
-
-/// Strips from slownesses and intercept times (0 for the first layer), which depend on data with a covariance.
-FlatLayers strip(const std::vector<Derived>& slowness, const std::vector<Derived>& intercept,
-                 const Eigen::MatrixXd& covariance) {
-  FlatLayers out;
-  std::vector<Derived> thickness;
-  Derived depth = intercept[1] * 0.0;
-  for (std::size_t n = 0; n < slowness.size(); ++n) {
-    if (!(slowness[n].value() > 0.0) || (n > 0 && !(slowness[n].value() < slowness[n - 1].value()))) {
-      return none("The velocity of branch " + std::to_string(n + 1) +
-                  " is not greater than that of the one before; layers must be faster with depth.");
+/// data = intercept and slope of each line in turn; gives the thicknesses, then the depths.
+std::optional<Eigen::VectorXd> layersOf(const Eigen::VectorXd& data, Route datum) {
+  const auto count = static_cast<std::size_t>(data.size() / 2);
+  std::vector<double> slowness, intercepts, crossovers;
+  for (std::size_t i = 0; i < count; ++i) {
+    const auto at = static_cast<Eigen::Index>(2 * i);
+    slowness.push_back(data(at + 1));
+    if (i > 0) {
+      intercepts.push_back(data(at));
+      crossovers.push_back((data(at) - data(at - 2)) / (data(at - 1) - data(at + 1)));
     }
-    out.velocities.push_back(Estimate::fromSlowness(slowness[n].value(), firstOrderSigma(slowness[n], covariance)));
-    if (n == 0) {
-      continue;
-    }
-    Derived rest = intercept[n];
-    for (std::size_t k = 0; k + 1 < n; ++k) {
-      rest -= 2.0 * thickness[k] * contrast(slowness[k], slowness[n]);
-    }
-    thickness.emplace_back(rest / (2.0 * contrast(slowness[n - 1], slowness[n])));
-    if (!(thickness.back().value() > 0.0)) {
-      return none("Layer " + std::to_string(n) + " comes out without thickness; check the assignment of branch " +
-                  std::to_string(n + 1) + ".");
-    }
-    depth += thickness.back();
-    out.thicknesses.push_back(estimateOf(thickness.back(), covariance));
-    out.depths.push_back(estimateOf(depth, covariance));
   }
-  out.determined = true;
+  if (datum == Route::Crossovers) {
+    intercepts = interceptsFromCrossovers(slowness, crossovers);
+  }
+  const auto thickness = thicknessesFromIntercepts(slowness, intercepts);
+  if (!thickness) {
+    return std::nullopt;
+  }
+  const auto layers = static_cast<Eigen::Index>(thickness->size());
+  Eigen::VectorXd out(2 * layers);
+  double depth = 0.0;
+  for (Eigen::Index i = 0; i < layers; ++i) {
+    out(i) = (*thickness)[static_cast<std::size_t>(i)];
+    depth += out(i);
+    out(layers + i) = depth;
+  }
   return out;
+}
+
+FlatLayers fromLines(std::span<const LineFit> lines, Route datum) {
+  if (lines.size() < 2) {
+    return undetermined("a direct branch and at least one through a deeper layer are needed");
+  }
+  const auto size = static_cast<Eigen::Index>(2 * lines.size());
+  Eigen::VectorXd data(size);
+  Eigen::MatrixXd covariance = Eigen::MatrixXd::Zero(size, size);
+  for (std::size_t i = 0; i < lines.size(); ++i) {
+    const LineFit& line = lines[i];
+    if (!line.determined) {
+      return undetermined("branch " + std::to_string(i + 1) + ": " + line.reason);
+    }
+    if (!(line.slope > 0.0) || (i > 0 && !(line.slope < lines[i - 1].slope))) {
+      return undetermined("the velocity does not grow from layer to layer");
+    }
+    const auto at = static_cast<Eigen::Index>(2 * i);
+    data(at) = line.intercept;
+    data(at + 1) = line.slope;
+    covariance(at, at) = line.varIntercept;
+    covariance(at + 1, at + 1) = line.varSlope;
+    covariance(at, at + 1) = covariance(at + 1, at) = line.covariance;
+  }
+  const auto result = propagate([datum](const Eigen::VectorXd& d) { return layersOf(d, datum); }, data, covariance);
+  if (!result) {
+    return undetermined("the times give a layer no positive thickness");
+  }
+  FlatLayers layers;
+  layers.determined = true;
+  for (const LineFit& line : lines) {
+    layers.velocities.push_back(Estimate::fromSlowness(line.slope, std::sqrt(line.varSlope)));
+  }
+  const Eigen::Index half = result->value.size() / 2;
+  for (Eigen::Index i = 0; i < half; ++i) {
+    layers.thickness.push_back(Estimate::normal(result->value(i), std::sqrt(result->covariance(i, i))));
+    layers.depths.push_back(
+        Estimate::normal(result->value(half + i), std::sqrt(result->covariance(half + i, half + i))));
+  }
+  return layers;
 }
 
 }  // namespace
 
-FlatLayers layersFromIntercepts(std::span<const LineFit> branches) {
-  const auto count = static_cast<Eigen::Index>(branches.size());
-  if (count < 2) {
-    return none("One branch alone has no intercept time; at least two are needed.");
+std::optional<std::vector<double>> thicknessesFromIntercepts(std::span<const double> slowness,
+                                                             std::span<const double> intercepts) {
+  if (slowness.size() < 2 || intercepts.size() + 1 != slowness.size()) {
+    return std::nullopt;
   }
-  std::vector<double> data;
-  Eigen::MatrixXd covariance = Eigen::MatrixXd::Zero(2 * count, 2 * count);
-  for (Eigen::Index n = 0; n < count; ++n) {
-    const LineFit& line = branches[static_cast<std::size_t>(n)];
-    if (!line.determined) {
-      return none("Branch " + std::to_string(n + 1) + " has no line: " + line.reason);
-    }
-    data.push_back(line.slope);
-    data.push_back(line.intercept);
-    covariance.block<2, 2>(2 * n, 2 * n) << line.varSlope, line.covariance, line.covariance, line.varIntercept;
-  }
-  const std::vector<Derived> variables = independent(data);
-  std::vector<Derived> slowness, intercept;
-  for (std::size_t n = 0; n < branches.size(); ++n) {
-    slowness.push_back(variables[2 * n]);
-    intercept.push_back(variables[2 * n + 1]);
-  }
-  return strip(slowness, intercept, covariance);
-}
-
-Estimate depthWhereLinesCross(const LineFit& nearer, const LineFit& farther) {
-  if (!nearer.determined || !farther.determined || !(farther.slope > 0.0) || !(nearer.slope > farther.slope) ||
-      !(farther.intercept > nearer.intercept)) {
-    return Estimate::none("the lines do not cross at a positive offset");
-  }
-  Eigen::Matrix4d covariance = Eigen::Matrix4d::Zero();
-  covariance.topLeftCorner<2, 2>() << nearer.varSlope, nearer.covariance, nearer.covariance, nearer.varIntercept;
-  covariance.bottomRightCorner<2, 2>() << farther.varSlope, farther.covariance, farther.covariance,
-      farther.varIntercept;
-  const std::vector<Derived> v = independent({nearer.slope, nearer.intercept, farther.slope, farther.intercept});
-  const Derived less(v[0] - v[2]);
-  const Derived crossing((v[3] - v[1]) / less);
-  return estimateOf(Derived(0.5 * crossing * sqrt(Derived(less / Derived(v[0] + v[2])))), covariance);
-}
-
-FlatLayers layersFromCrossovers(std::span<const Datum> crossovers, std::span<const Datum> velocities) {
-  if (crossovers.empty() || velocities.size() != crossovers.size() + 1) {
-    return none("There must be one velocity more than crossover distances.");
-  }
-  std::vector<double> data;
-  std::vector<double> variances;
-  for (const auto& list : {crossovers, velocities}) {
-    for (const Datum& d : list) {
-      if (!(d.value > 0.0) || !std::isfinite(d.value) || !(d.sigma >= 0.0)) {
-        return none("Crossover distances and velocities must be positive.");
-      }
-      data.push_back(d.value);
-      variances.push_back(d.sigma * d.sigma);
+  for (std::size_t i = 0; i < slowness.size(); ++i) {
+    if (!(slowness[i] > 0.0) || !std::isfinite(slowness[i]) || (i > 0 && !(slowness[i] < slowness[i - 1]))) {
+      return std::nullopt;
     }
   }
-  const std::vector<Derived> variables = independent(data);
-  std::vector<Derived> slowness, intercept;
-  for (std::size_t n = 0; n < velocities.size(); ++n) {
-    slowness.emplace_back(1.0 / variables[crossovers.size() + n]);
-    intercept.emplace_back(n == 0 ? Derived(variables[0] * 0.0)
-                                  : Derived(intercept[n - 1] + variables[n - 1] * (slowness[n - 1] - slowness[n])));
+  std::vector<double> thickness;
+  for (std::size_t n = 1; n < slowness.size(); ++n) {
+    const auto c = [&slowness, n](std::size_t k) {
+      return std::sqrt(slowness[k] * slowness[k] - slowness[n] * slowness[n]);
+    };
+    double time = intercepts[n - 1];
+    for (std::size_t k = 0; k + 1 < n; ++k) {
+      time -= 2.0 * thickness[k] * c(k);
+    }
+    const double h = time / (2.0 * c(n - 1));
+    if (!(h > 0.0) || !std::isfinite(h)) {
+      return std::nullopt;
+    }
+    thickness.push_back(h);
   }
-  const auto count = static_cast<Eigen::Index>(variances.size());
-  return strip(slowness, intercept, Eigen::VectorXd::Map(variances.data(), count).asDiagonal());
+  return thickness;
 }
 
-std::vector<double> interceptTimes(std::span<const double> velocities, std::span<const double> thicknesses) {
-  std::vector<double> out;
-  for (std::size_t n = 1; n < velocities.size(); ++n) {
-    const double below = 1.0 / velocities[n];
-    double time = 0.0;
-    for (std::size_t k = 0; k < n; ++k) {
-      const double s = 1.0 / velocities[k];
-      time += 2.0 * thicknesses[k] * std::sqrt(s * s - below * below);
-    }
-    out.push_back(time);
+std::vector<double> interceptsFromCrossovers(std::span<const double> slowness, std::span<const double> crossovers) {
+  std::vector<double> intercepts;
+  double time = 0.0;
+  for (std::size_t i = 0; i < crossovers.size() && i + 1 < slowness.size(); ++i) {
+    time += crossovers[i] * (slowness[i] - slowness[i + 1]);
+    intercepts.push_back(time);
   }
-  return out;
+  return intercepts;
+}
+
+FlatLayers flatLayersFromIntercepts(std::span<const LineFit> lines) {
+  return fromLines(lines, Route::Intercepts);
+}
+
+FlatLayers flatLayersFromCrossovers(std::span<const LineFit> lines) {
+  return fromLines(lines, Route::Crossovers);
 }
 
 }  // namespace strikeplate

@@ -15,7 +15,7 @@ struct Source {
 };
 
 // Publications of the hand methods, found by what their route is called.
-constexpr std::array<Source, 13> kSources = {{
+constexpr std::array<Source, 14> kSources = {{
     {"crossover", "Redpath (1973) AD-768 710"},
     {"critical", "Sheriff & Geldart (1995) Exploration Seismology"},
     {"reflection", "Sheriff & Geldart (1995) Exploration Seismology"},
@@ -23,7 +23,8 @@ constexpr std::array<Source, 13> kSources = {{
     {"intercept", "Ewing, Woollard & Vine (1939) GSA Bulletin 50, 257-296"},
     {"flat", "Ewing, Woollard & Vine (1939) GSA Bulletin 50, 257-296"},
     {"plus-minus", "Hagedoorn (1959) Geophysical Prospecting 7, 158-182"},
-    {"reciprocal", "Palmer (1981) Geophysics 46, 1508-1518"},
+    {"generalized reciprocal", "Palmer (1981) Geophysics 46, 1508-1518"},
+    {"reciprocal", "Hawkins (1961) Geophysics 26, 806"},
     {"delay", "Gardner (1939) Geophysics 4, 247-259"},
     {"time-term", "Scheidegger & Willmore (1957) Geophysics 22, 9-22"},
     {"time term", "Scheidegger & Willmore (1957) Geophysics 22, 9-22"},
