@@ -77,7 +77,7 @@ void beliefFromPosterior(LineTrace& trace) {
   trace.beliefSigma = 0.5 * (at[2] - at[0]);
 }
 
-bool coarsePass(LineWork& work, const NoiseModel& noise, const Progress& progress) {
+bool coarsePass(LineWork& work, const std::vector<NoiseModel>& noise, const Progress& progress) {
   double done = 0.0;
   for (const auto& side : work.sides) {
     if (!goOn(progress, done++ / static_cast<double>(work.sides.size())))
@@ -94,7 +94,7 @@ bool coarsePass(LineWork& work, const NoiseModel& noise, const Progress& progres
       const double origin = t.onsetTime(static_cast<double>(axis.first)) + 0.5 * kWorkInterval;
       evidence.origins.push_back(origin);
       evidence.offsets.push_back(t.offset());
-      evidence.logEvidence.push_back(rasterEvidence(t, noise, axis));
+      evidence.logEvidence.push_back(rasterEvidence(t, noise[t.setting], axis));
       addTracePrior(t, origin, evidence.step, evidence.logEvidence.back());
     }
     const auto posterior = pathPosterior(evidence);

@@ -49,7 +49,7 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
       updateNoise(work);
     if (round > 1)
       findLinePrior(work);
-    const NoiseModel noise = whitenAll(work, 1e-5);
+    const std::vector<NoiseModel> noise = whitenAll(work, 1e-5);
     silenceCrosstalk(work);
     const auto report = [&](double f) { return goOn(progress, 0.5 * (round + f) / kCoarseRounds); };
     if (!coarsePass(work, noise, report))
@@ -58,10 +58,12 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
   for (int round = 0; round < kFineRounds; ++round) {
     updateNoise(work);
     findLinePrior(work);
-    const PulseBank bank = makePulseBank(whitenAll(work, 1e-5));
+    std::vector<PulseBank> banks;
+    for (const NoiseModel& noise : whitenAll(work, 1e-5))
+      banks.push_back(makePulseBank(noise));
     silenceCrosstalk(work);
     const auto report = [&](double f) { return goOn(progress, 0.5 + 0.5 * (round + f) / kFineRounds); };
-    if (!finePass(work, bank, report))
+    if (!finePass(work, banks, report))
       return picksOf(gathers, work, false);
     findPolarity(work);
   }

@@ -13,6 +13,7 @@ namespace strikeplate {
 /// What the line picker knows of one trace.
 struct LineTrace {
   std::size_t gather = 0, trace = 0;
+  std::size_t setting = 0;      ///< of the recorder; traces that share it share a noise model
   double shotX = 0.0, x = 0.0;  ///< m
   bool usable = true;           ///< holds ground motion
   double start = 0.0;           ///< s, recorder time of the first work sample
@@ -39,6 +40,7 @@ struct LineTrace {
 /// A line being picked.
 struct LineWork {
   std::vector<LineTrace> traces;                ///< gather by gather
+  std::size_t settings = 0;                     ///< of the recorder: different sample intervals
   std::vector<std::vector<std::size_t>> sides;  ///< indices of usable traces on one side of one shot, nearest first
 };
 
@@ -52,8 +54,9 @@ std::size_t noiseEndOf(const LineTrace& trace);
 /// Takes mains hum out of every usable trace, if the line has any (hum.h).
 void removeHumAll(LineWork& work);
 
-/// Fits the noise model to the usable traces' noise, with `floor` of white noise as a share of its variance, levels
-/// each trace by its noise and whitens it.
-NoiseModel whitenAll(LineWork& work, double floor);
+/// Fits a noise model to the usable traces' noise, one for each setting of the recorder (what a long sample interval
+/// has cut off is no noise to be whitened), with `floor` of white noise as a share of its variance; levels each trace
+/// by its noise and whitens it.
+std::vector<NoiseModel> whitenAll(LineWork& work, double floor);
 
 }  // namespace strikeplate
