@@ -90,11 +90,14 @@ bool coarsePass(LineWork& work, const std::vector<NoiseModel>& noise, const Prog
     PathEvidence evidence;
     evidence.step = kSkip * kWorkInterval;
     for (const std::size_t i : side) {
-      const LineTrace& t = work.traces[i];
+      LineTrace& t = work.traces[i];
       const double origin = t.onsetTime(static_cast<double>(axis.first)) + 0.5 * kWorkInterval;
       evidence.origins.push_back(origin);
       evidence.offsets.push_back(t.offset());
       evidence.logEvidence.push_back(rasterEvidence(t, noise[t.setting], axis));
+      t.evidence = evidence.logEvidence.back();
+      t.evidenceStart = origin;
+      t.evidenceStep = evidence.step;
       addTracePrior(t, origin, evidence.step, evidence.logEvidence.back());
     }
     const auto posterior = pathPosterior(evidence);

@@ -10,6 +10,7 @@
 #include "core/picking/fine_pass.h"
 #include "core/picking/line_prior.h"
 #include "core/picking/line_work.h"
+#include "core/picking/offset_curve.h"
 #include "core/picking/pick_decision.h"
 #include "core/picking/polarity.h"
 
@@ -54,6 +55,7 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
     const auto report = [&](double f) { return goOn(progress, 0.5 * (round + f) / kCoarseRounds); };
     if (!coarsePass(work, noise, report))
       return picksOf(gathers, work, false);
+    findOffsetCurve(work);
   }
   for (int round = 0; round < kFineRounds; ++round) {
     updateNoise(work);

@@ -15,6 +15,8 @@ constexpr std::array<double, 22> kSlowness{-0.0004, -0.0002, 0.0,    0.00015, 0.
                                            0.0025,  0.003,   0.0036, 0.0043,  0.0053,  0.0067};
 constexpr auto kStates = static_cast<Eigen::Index>(kSlowness.size());
 
+constexpr double kRiseFade = 0.5;  // by state: how much rarer a rise is the steeper it is
+
 using Table = Eigen::ArrayXXd;  // [position][slowness state]
 
 /// Probability of going from state i (row) to j, outwards: keep 0.7, neighbours 0.1 together, fall 0.15, rise 0.05.
@@ -26,8 +28,13 @@ Eigen::MatrixXd transitions() {
     t(i, std::min(i + 1, kStates - 1)) += 0.04;
     for (Eigen::Index j = 0; j <= i; ++j)
       t(i, j) += 0.15 / static_cast<double>(i + 1);
+    double rises = 0.0;
     for (Eigen::Index j = i; j < kStates; ++j)
-      t(i, j) += 0.05 / static_cast<double>(kStates - i);
+      rises += std::exp(-kRiseFade * static_cast<double>(j - i));
+    for (Eigen::Index j = i; j < kStates; ++j) {
+      t(i, j) += 0.049 * std::exp(-kRiseFade * static_cast<double>(j - i)) / rises;
+      t(i, j) += 0.001 / static_cast<double>(kStates - i);
+    }
   }
   return t;
 }
