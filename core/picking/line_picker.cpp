@@ -55,7 +55,8 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
     const auto report = [&](double f) { return goOn(progress, 0.5 * (round + f) / kCoarseRounds); };
     if (!coarsePass(work, noise, report))
       return picksOf(gathers, work, false);
-    findOffsetCurve(work);
+    if (round > 0)
+      findOffsetCurve(work);
   }
   for (int round = 0; round < kFineRounds; ++round) {
     updateNoise(work);

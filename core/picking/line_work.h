@@ -22,13 +22,13 @@ struct LineTrace {
   double rms = 0.0;             ///< of the noise
   std::vector<float> white;     ///< whitened, unit noise
   std::optional<Onset> trusted, predicted;
-  double belief = 0.0, beliefSigma = 0.0;  ///< s, the present idea of the first break
-  std::vector<double> evidence;            ///< bounded log evidence of the coarse pass, without any prior
+  double belief = 0.0, beliefSigma = 0.0;          ///< s, the present idea of the first break
+  std::vector<double> evidence;                    ///< bounded log evidence of the coarse pass, without any prior
   double evidenceStart = 0.0, evidenceStep = 0.0;  ///< s, recorder time of its first position, s between positions
   double curveMean = 0.0, curveScale = 0.0;        ///< s, from the line's curve over offset; scale 0 = no curve
-  std::vector<double> posterior;           ///< probability of each onset position
-  double posteriorStart = 0.0;             ///< s, recorder time of the first position
-  double step = 0.0;                       ///< s between positions
+  std::vector<double> posterior;                   ///< probability of each onset position
+  double posteriorStart = 0.0;                     ///< s, recorder time of the first position
+  double step = 0.0;                               ///< s between positions
   bool reversed = false;
   double upness = 0.0;                       ///< ln p(first swing up) - ln p(down)
   double support = 0.0;                      ///< ln p(an arrival) - ln p(noise alone), of it and its neighbours

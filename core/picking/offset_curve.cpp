@@ -9,6 +9,7 @@
 namespace strikeplate {
 namespace {
 
+constexpr double kTraceCap = 1.0;
 constexpr double kStep = 0.001;        // s
 constexpr double kBlur = 0.0012;       // s
 constexpr double kLeastScale = 0.003;  // s
@@ -89,13 +90,14 @@ PathEvidence pooledEvidence(const LineWork& work, const Axis& axis) {
   }
   PathEvidence evidence;
   evidence.step = kStep;
+  evidence.rigid = true;
   for (const auto& [number, traces] : pools) {
     std::vector<double> sum(axis.count, 0.0);
     double offset = 0.0;
     for (const LineTrace* t : traces) {
       const std::vector<double> weights = blurredWeights(*t, axis);
       for (std::size_t k = 0; k < axis.count; ++k)
-        sum[k] += std::log(weights[k]);
+        sum[k] += logAdd(std::log(weights[k]), -kTraceCap);
       offset += t->offset() / static_cast<double>(traces.size());
     }
     evidence.origins.push_back(axis.start);
