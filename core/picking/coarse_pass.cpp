@@ -77,7 +77,7 @@ void beliefFromPosterior(LineTrace& trace) {
   trace.beliefSigma = 0.5 * (at[2] - at[0]);
 }
 
-bool coarsePass(LineWork& work, const NoiseModel& noise, const Progress& progress) {
+bool coarsePass(LineWork& work, const std::vector<NoiseModel>& noise, const Progress& progress) {
   double done = 0.0;
   for (const auto& side : work.sides) {
     if (!goOn(progress, done++ / static_cast<double>(work.sides.size())))
@@ -90,11 +90,14 @@ bool coarsePass(LineWork& work, const NoiseModel& noise, const Progress& progres
     PathEvidence evidence;
     evidence.step = kSkip * kWorkInterval;
     for (const std::size_t i : side) {
-      const LineTrace& t = work.traces[i];
+      LineTrace& t = work.traces[i];
       const double origin = t.onsetTime(static_cast<double>(axis.first)) + 0.5 * kWorkInterval;
       evidence.origins.push_back(origin);
       evidence.offsets.push_back(t.offset());
-      evidence.logEvidence.push_back(rasterEvidence(t, noise, axis));
+      evidence.logEvidence.push_back(rasterEvidence(t, noise[t.setting], axis));
+      t.evidence = evidence.logEvidence.back();
+      t.evidenceStart = origin;
+      t.evidenceStep = evidence.step;
       addTracePrior(t, origin, evidence.step, evidence.logEvidence.back());
     }
     const auto posterior = pathPosterior(evidence);

@@ -115,7 +115,7 @@ void updateNoise(LineWork& work) {
   }
 }
 
-bool finePass(LineWork& work, const PulseBank& bank, const Progress& progress) {
+bool finePass(LineWork& work, const std::vector<PulseBank>& banks, const Progress& progress) {
   double done = 0.0;
   for (const auto& side : work.sides) {
     if (!goOn(progress, done++ / static_cast<double>(work.sides.size())))
@@ -129,7 +129,7 @@ bool finePass(LineWork& work, const PulseBank& bank, const Progress& progress) {
       const std::ptrdiff_t from = centre - kBefore;
       evidence.origins.push_back(t.onsetTime(static_cast<double>(from)));
       evidence.offsets.push_back(t.offset());
-      FineEvidence fine = fineEvidence(t, bank, from);
+      FineEvidence fine = fineEvidence(t, banks[t.setting], from);
       evidence.logEvidence.push_back(std::move(fine.log));
       upness.push_back(std::move(fine.upness));
       support.push_back(std::move(fine.support));
@@ -149,7 +149,7 @@ bool finePass(LineWork& work, const PulseBank& bank, const Progress& progress) {
     shareSupport(work, side, own);
     for (const std::size_t i : side) {
       LineTrace& t = work.traces[i];
-      t.sureness = t.support * trustIn(t, bank);
+      t.sureness = t.support * trustIn(t, banks[t.setting]);
     }
   }
   return true;

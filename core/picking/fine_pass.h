@@ -8,7 +8,7 @@ namespace strikeplate {
 
 /// Sharpens every belief: likelihood of the onset over all pulses from 6 ms before to 4 ms after it, joined along
 /// offset. Replaces posterior, belief and beliefSigma of usable traces; false when asked to stop.
-bool finePass(LineWork& work, const PulseBank& bank, const Progress& progress);
+bool finePass(LineWork& work, const std::vector<PulseBank>& banks, const Progress& progress);
 
 /// Ends each usable trace's noise 2.5 ms, or three times its uncertainty, before its present belief.
 void updateNoise(LineWork& work);

@@ -10,6 +10,7 @@
 #include "core/picking/fine_pass.h"
 #include "core/picking/line_prior.h"
 #include "core/picking/line_work.h"
+#include "core/picking/offset_curve.h"
 #include "core/picking/pick_decision.h"
 #include "core/picking/polarity.h"
 
@@ -52,19 +53,23 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
       updateNoise(work);
     if (round > 1)
       findLinePrior(work);
-    const NoiseModel noise = whitenAll(work, 1e-5, 1);
+    const std::vector<NoiseModel> noise = whitenAll(work, 1e-5, 1);
     silenceCrosstalk(work);
     const auto report = [&](double f) { return goOn(progress, 0.5 * (round + f) / kCoarseRounds); };
     if (!coarsePass(work, noise, report))
       return picksOf(gathers, work, false);
+    if (round > 0)
+      findOffsetCurve(work);
   }
   for (int round = 0; round < kFineRounds; ++round) {
     updateNoise(work);
     findLinePrior(work);
-    const PulseBank bank = makePulseBank(whitenAll(work, 1e-5, 2));
+    std::vector<PulseBank> banks;
+    for (const NoiseModel& noise : whitenAll(work, 1e-5, 1))
+      banks.push_back(makePulseBank(noise));
     silenceCrosstalk(work);
     const auto report = [&](double f) { return goOn(progress, 0.5 + 0.5 * (round + f) / kFineRounds); };
-    if (!finePass(work, bank, report))
+    if (!finePass(work, banks, report))
       return picksOf(gathers, work, false);
     findPolarity(work);
   }

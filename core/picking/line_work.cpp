@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <map>
 
 #include "core/picking/dead_traces.h"
 #include "core/picking/hum.h"
@@ -96,6 +97,26 @@ double leastNoise(const LineTrace& t) {
   return std::max(kRecorderShare * loudest, kFirstShare * first);
 }
 
+NoiseModel modelOf(const LineWork& work, std::size_t setting, double floor) {
+  std::vector<std::vector<float>> samples;
+  std::vector<std::size_t> ends;
+  for (const LineTrace& t : work.traces) {
+    if (!t.usable || t.setting != setting)
+      continue;
+    samples.push_back(t.samples);
+    ends.push_back(t.noiseEnd);
+  }
+  return fitNoise(samples, ends, floor);
+}
+
+/// Numbers the different sample intervals: the settings of the recorder.
+std::map<double, std::size_t> settingsOf(const std::vector<Gather>& gathers) {
+  std::map<double, std::size_t> settings;
+  for (const Gather& gather : gathers)
+    settings.try_emplace(gather.sampleInterval, settings.size());
+  return settings;
+}
+
 double median(std::vector<double> values) {
   if (values.empty())
     return 0.0;
@@ -125,9 +146,12 @@ std::size_t noiseEndOf(const LineTrace& trace) {
 
 LineWork makeLineWork(const std::vector<Gather>& gathers, const LinePickOptions& options) {
   LineWork work;
+  const auto settings = settingsOf(gathers);
+  work.settings = settings.size();
   for (std::size_t g = 0; g < gathers.size(); ++g) {
     for (std::size_t i = 0; i < gathers[g].traces.size(); ++i) {
       work.traces.push_back(lineTrace(gathers, options, g, i));
+      work.traces.back().setting = settings.at(gathers[g].sampleInterval);
       work.traces.back().noiseEnd = work.traces.back().usable ? noiseEndOf(work.traces.back()) : 0;
     }
   }
@@ -157,19 +181,15 @@ void removeHumAll(LineWork& work) {
   }
 }
 
-NoiseModel whitenAll(LineWork& work, double floor, std::size_t sum) {
-  std::vector<std::vector<float>> samples;
-  std::vector<std::size_t> ends;
+std::vector<NoiseModel> whitenAll(LineWork& work, double floor, std::size_t sum) {
   std::vector<double> levels;
   for (const LineTrace& t : work.traces) {
-    if (!t.usable)
-      continue;
-    samples.push_back(t.samples);
-    ends.push_back(t.noiseEnd);
-    if (t.noiseEnd >= 20)
+    if (t.usable && t.noiseEnd >= 20)
       levels.push_back(noiseLevel({t.samples.data(), t.noiseEnd}).rms);
   }
-  const NoiseModel model = fitNoise(samples, ends, floor);
+  std::vector<NoiseModel> models;
+  for (std::size_t setting = 0; setting < work.settings; ++setting)
+    models.push_back(modelOf(work, setting, floor));
   const double common = median(levels);
   for (LineTrace& t : work.traces) {
     if (!t.usable)
@@ -183,10 +203,10 @@ NoiseModel whitenAll(LineWork& work, double floor, std::size_t sum) {
     for (std::size_t i = 0; i < unit.size(); ++i) {
       unit[i] = static_cast<float>((t.samples[i] - (count > 5.0 ? level.mean : 0.0)) / t.rms);
     }
-    t.white = whitened(model, unit);
+    t.white = whitened(models[t.setting], unit);
     levelWhite(t, first, sum);
   }
-  return model;
+  return models;
 }
 
 }  // namespace strikeplate

@@ -15,10 +15,14 @@ constexpr std::array<double, 22> kSlowness{-0.0004, -0.0002, 0.0,    0.00015, 0.
                                            0.0025,  0.003,   0.0036, 0.0043,  0.0053,  0.0067};
 constexpr auto kStates = static_cast<Eigen::Index>(kSlowness.size());
 
+constexpr double kRises = 0.05, kRigidRises = 1e-20;
+constexpr double kRiseFade = 0.5;  // by state: how much rarer a rise is the steeper it is
+
 using Table = Eigen::ArrayXXd;  // [position][slowness state]
 
-/// Probability of going from state i (row) to j, outwards: keep 0.7, neighbours 0.1 together, fall 0.15, rise 0.05.
-Eigen::MatrixXd transitions() {
+/// Probability of going from state i (row) to j, outwards: keep 0.7, neighbours 0.1 together, fall 0.15,
+/// rise `rises`, the steeper the rarer.
+Eigen::MatrixXd transitions(double rises) {
   Eigen::MatrixXd t = Eigen::MatrixXd::Zero(kStates, kStates);
   for (Eigen::Index i = 0; i < kStates; ++i) {
     t(i, i) += 0.70;
@@ -26,8 +30,12 @@ Eigen::MatrixXd transitions() {
     t(i, std::min(i + 1, kStates - 1)) += 0.04;
     for (Eigen::Index j = 0; j <= i; ++j)
       t(i, j) += 0.15 / static_cast<double>(i + 1);
+    double sum = 0.0;
     for (Eigen::Index j = i; j < kStates; ++j)
-      t(i, j) += 0.05 / static_cast<double>(kStates - i);
+      sum += std::exp(-kRiseFade * static_cast<double>(j - i));
+    for (Eigen::Index j = i; j < kStates; ++j) {
+      t(i, j) += rises * std::exp(-kRiseFade * static_cast<double>(j - i)) / sum;
+    }
   }
   return t;
 }
@@ -90,6 +98,7 @@ Stride strideTo(const PathEvidence& evidence, std::size_t k) {
 constexpr double kFreedom = 0.00015;     // s at each trace
 constexpr double kFreedomPerGap = 0.30;  // of the gap between slownesses
 constexpr double kTailWidth = 0.002;     // s
+
 constexpr double kTailShare = 0.03;
 
 void spread(Eigen::Ref<Eigen::ArrayXd> column, Eigen::Index state, const Stride& stride) {
@@ -100,18 +109,20 @@ void spread(Eigen::Ref<Eigen::ArrayXd> column, Eigen::Index state, const Stride&
   column = (1.0 - kTailShare) * column + kTailShare * tail;
 }
 
-Table forward(const Table& before, const Eigen::MatrixXd& transition, const Stride& stride) {
+Table forward(const Table& before, const Eigen::MatrixXd& transition, const Stride& stride, bool rigid) {
   Table mixed = (before.matrix() * transition).array();
   for (Eigen::Index j = 0; j < kStates; ++j) {
     mixed.col(j) = moved(mixed.col(j), stride.shift(j));
-    spread(mixed.col(j), j, stride);
+    if (!rigid)
+      spread(mixed.col(j), j, stride);
   }
   return mixed;
 }
 
-Table backward(Table after, const Eigen::MatrixXd& transition, const Stride& stride) {
+Table backward(Table after, const Eigen::MatrixXd& transition, const Stride& stride, bool rigid) {
   for (Eigen::Index j = 0; j < kStates; ++j) {
-    spread(after.col(j), j, stride);
+    if (!rigid)
+      spread(after.col(j), j, stride);
     after.col(j) = moved(after.col(j), -stride.shift(j));
   }
   return (after.matrix() * transition.transpose()).array();
@@ -129,14 +140,21 @@ std::vector<std::vector<double>> pathPosterior(const PathEvidence& evidence) {
   std::vector<std::vector<double>> posterior(n);
   if (n == 0)
     return posterior;
-  const Eigen::MatrixXd transition = transitions();
+  Eigen::MatrixXd transition = transitions(evidence.rigid ? kRigidRises : kRises);
+  Table start = Table::Ones(static_cast<Eigen::Index>(evidence.logEvidence[0].size()), kStates);
+  for (Eigen::Index j = 0; j < kStates; ++j) {
+    if (!evidence.rigid || kSlowness[static_cast<std::size_t>(j)] > 0.0)
+      continue;
+    transition.col(j).setZero();
+    start.col(j).setZero();
+  }
   std::vector<Eigen::ArrayXd> weights;
   for (const auto& row : evidence.logEvidence)
     weights.push_back(weightsOf(row));
   const Eigen::Index positions = weights[0].size();
   std::vector<Table> ahead(n);
   for (std::size_t k = 0; k < n; ++k) {
-    Table prior = k == 0 ? Table::Ones(positions, kStates) : forward(ahead[k - 1], transition, strideTo(evidence, k));
+    Table prior = k == 0 ? start : forward(ahead[k - 1], transition, strideTo(evidence, k), evidence.rigid);
     prior.colwise() *= weights[k];
     ahead[k] = prior / prior.sum();
   }
@@ -148,7 +166,7 @@ std::vector<std::vector<double>> pathPosterior(const PathEvidence& evidence) {
     if (k == 0)
       break;
     back.colwise() *= weights[k];
-    back = backward(back, transition, strideTo(evidence, k));
+    back = backward(back, transition, strideTo(evidence, k), evidence.rigid);
     back /= back.maxCoeff();
   }
   return posterior;

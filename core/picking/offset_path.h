@@ -12,6 +12,7 @@ struct PathEvidence {
   std::vector<double> origins;                   ///< s, recorder time of each trace's position 0
   std::vector<double> offsets;                   ///< m, not falling
   std::vector<std::vector<double>> logEvidence;  ///< [trace][position], any constant per trace
+  bool rigid = false;  ///< the path bends one way: slowness keeps or falls and stays positive, no trace lies off it
 };
 
 /// Probability of each position for each trace, given all traces of the side: a path along offset whose slowness is

@@ -30,6 +30,8 @@ void addTracePrior(const LineTrace& trace, double origin, double step, std::vect
       logEvidence[p] -= kTooFast;
     if (trace.priorScale > 0.0)
       logEvidence[p] += studentLog((time - trace.priorMean) / trace.priorScale);
+    if (trace.curveScale > 0.0)
+      logEvidence[p] += studentLog((time - trace.curveMean) / trace.curveScale);
     if (trace.predicted) {
       logEvidence[p] +=
           studentLog((time - trace.predicted->time) / std::max(trace.predicted->sigma, kLeastPrediction));
