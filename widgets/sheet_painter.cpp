@@ -1,5 +1,7 @@
 #include "widgets/sheet_painter.h"
 
+#include <QBuffer>
+#include <QFileInfo>
 #include <QMarginsF>
 #include <QPainter>
 #include <QPdfWriter>
@@ -19,6 +21,20 @@ constexpr int kResolution = 1200;    // dots per inch of the PDF's own units
 Failure notWritten(const QString& path, const QString& reason) {
   return Failure{path.toStdString() + " could not be written (" + reason.toStdString() +
                  "); check its folder, your right to write there, and the room left."};
+}
+
+/// Writes all or nothing; a device, such as a printer's or the null one, is written to and not replaced.
+Outcome writeBytes(const QString& path, const QByteArray& bytes) {
+  const auto written = [&](QFileDevice& file, bool opened) {
+    return opened && file.write(bytes) == bytes.size() && file.flush();
+  };
+  if (const QFileInfo info(path); info.exists() && !info.isFile()) {
+    QFile file(path);
+    return written(file, file.open(QIODevice::WriteOnly)) ? Outcome(Done{}) : notWritten(path, file.errorString());
+  }
+  QSaveFile file(path);
+  const bool good = written(file, file.open(QIODevice::WriteOnly)) && file.commit();
+  return good ? Outcome(Done{}) : notWritten(path, file.errorString());
 }
 
 }  // namespace
@@ -68,24 +84,19 @@ Outcome paintSheet(QPagedPaintDevice& device, const Survey& survey, const Interp
 
 Outcome writeSheetPdf(const QString& path, const Survey& survey, const Interpretation& interpretation,
                       const SheetOptions& options, QPageSize::PageSizeId size) {
-  QSaveFile file(path);
-  if (!file.open(QIODevice::WriteOnly)) {
-    return notWritten(path, file.errorString());
-  }
-  QPdfWriter writer(&file);
+  QByteArray bytes;
+  QBuffer buffer(&bytes);
+  buffer.open(QIODevice::WriteOnly);
+  QPdfWriter writer(&buffer);
   writer.setPageSize(QPageSize(size));
   writer.setPageMargins(QMarginsF(0, 0, 0, 0));
   writer.setResolution(kResolution);
   writer.setTitle(QString::fromStdString(sheetContent(survey, interpretation, options).title));
   writer.setCreator(QStringLiteral("Strikeplate"));
   if (Outcome painted = paintSheet(writer, survey, interpretation, options); !painted) {
-    file.cancelWriting();
     return painted;
   }
-  if (!file.commit()) {
-    return notWritten(path, file.errorString());
-  }
-  return Done{};
+  return writeBytes(path, bytes);
 }
 
 }  // namespace strikeplate

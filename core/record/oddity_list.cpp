@@ -11,25 +11,25 @@ bool OddityList::isFull() {
   return more_;
 }
 
-void OddityList::add(std::string sentence) {
+void OddityList::add(std::string sentence, Kind kind) {
   for (const Item& item : items_) {
     if (item.traces.empty() && item.text == sentence) {
       return;
     }
   }
   if (!isFull()) {
-    items_.push_back({std::move(sentence), {}});
+    items_.push_back({std::move(sentence), {}, kind});
   }
 }
 
-void OddityList::addForTrace(int trace, const std::string& words) {
+void OddityList::addForTrace(int trace, const std::string& words, Kind kind) {
   auto place = itemOfWords_.find(words);
   if (place == itemOfWords_.end()) {
     if (isFull()) {
       return;
     }
     place = itemOfWords_.emplace(words, items_.size()).first;
-    items_.push_back({words, {}});
+    items_.push_back({words, {}, kind});
   }
   std::vector<int>& traces = items_[place->second].traces;
   if (traces.empty() || traces.back() != trace) {
@@ -37,11 +37,25 @@ void OddityList::addForTrace(int trace, const std::string& words) {
   }
 }
 
+std::string OddityList::Item::sentence() const {
+  return traces.empty() ? text : tracesListed(traces) + ": " + text + ".";
+}
+
+std::vector<std::string> OddityList::losses() const {
+  std::vector<std::string> out;
+  for (const Item& item : items_) {
+    if (item.kind == Kind::Lost) {
+      out.push_back(item.sentence());
+    }
+  }
+  return out;
+}
+
 std::vector<std::string> OddityList::sentences() const {
   std::vector<std::string> out;
   out.reserve(items_.size());
   for (const Item& item : items_) {
-    out.push_back(item.traces.empty() ? item.text : tracesListed(item.traces) + ": " + item.text + ".");
+    out.push_back(item.sentence());
   }
   if (more_) {
     out.push_back("More is odd about this file; only the first " + std::to_string(items_.size()) +

@@ -10,20 +10,29 @@ namespace strikeplate {
 /// new wrong at every trace only the first fifty things are kept.
 class OddityList {
  public:
+  /// Whether something is merely odd, or part of the file is lost by it.
+  enum class Kind { Odd, Lost };
+
   /// Something about the whole file: one sentence.
-  void add(std::string sentence);
+  void add(std::string sentence, Kind kind = Kind::Odd);
 
   /// Something about one trace (number in the file, from 1), in words that go on after "Trace 3" or "Traces 3 to 7",
   /// such as "without a receiver location".
-  void addForTrace(int trace, const std::string& words);
+  void addForTrace(int trace, const std::string& words, Kind kind = Kind::Odd);
 
   /// One sentence for each thing, in the order in which they were first met.
   [[nodiscard]] std::vector<std::string> sentences() const;
+
+  /// Those of them by which part of the file is lost.
+  [[nodiscard]] std::vector<std::string> losses() const;
 
  private:
   struct Item {
     std::string text;
     std::vector<int> traces;  // empty: the whole file
+    Kind kind = Kind::Odd;
+
+    [[nodiscard]] std::string sentence() const;
   };
   bool isFull();
 

@@ -48,6 +48,7 @@ struct ShotRecord {
   std::vector<HeaderEntry> header;    ///< keywords of the file
   std::vector<Trace> traces;          ///< at least one
   std::vector<std::string> oddities;  ///< what is odd about the file, one sentence each
+  std::vector<std::string> losses;    ///< those of them by which part of the file could not be read; not kept on disk
 };
 
 /// Records are large and never change once read, so surveys share them.

@@ -82,6 +82,7 @@ class Seg2Reader {
     }
     compareTraces();
     record_.oddities = odd_.sentences();
+    record_.losses = odd_.losses();
     return std::move(record_);
   }
 
@@ -130,7 +131,7 @@ void Seg2Reader::readFileWords() {
 }
 
 void Seg2Reader::unreadable(int number, const std::string& why) {
-  odd_.addForTrace(number, why);
+  odd_.addForTrace(number, why, OddityList::Kind::Lost);
   if (record_.traces.empty()) {
     firstReason_ = why;
   }
@@ -224,8 +225,10 @@ bool Seg2Reader::readSamples(int number, const TraceHead& head, Trace& trace) {
   }
   trace.samples.resize(std::min<std::uint64_t>(count, samplesIn(head.code, got)));
   if (trace.samples.size() < head.samples) {
-    odd_.addForTrace(number, "cut off, only its first " + std::to_string(trace.samples.size()) + " of " +
-                                 std::to_string(head.samples) + " samples are in the file");
+    odd_.addForTrace(number,
+                     "cut off, only its first " + std::to_string(trace.samples.size()) + " of " +
+                         std::to_string(head.samples) + " samples are in the file",
+                     OddityList::Kind::Lost);
   }
   if (const std::size_t bad = zeroNonNumbers(trace.samples); bad > 0) {
     odd_.addForTrace(number, std::to_string(bad) + " of its samples are not numbers and are taken as 0");

@@ -134,8 +134,10 @@ void SegyReader::addTraces(std::uint64_t fixedSamples) {
     at += head_.headerBytes;
     const std::uint64_t there = std::min(samples, (source_.size() - at) / width);
     if (there < samples) {
-      odd_.addForTrace(number, "cut off, only its first " + std::to_string(there) + " of " + std::to_string(samples) +
-                                   " samples are in the file, and what came behind it is missing");
+      odd_.addForTrace(number,
+                       "cut off, only its first " + std::to_string(there) + " of " + std::to_string(samples) +
+                           " samples are in the file, and what came behind it is missing",
+                       OddityList::Kind::Lost);
     } else if (fixedSamples > 0 && header.samples > 0 && header.samples != fixedSamples) {
       odd_.addForTrace(number, "its header says " + std::to_string(header.samples) + " samples, there are " +
                                    std::to_string(fixedSamples));
@@ -148,7 +150,8 @@ void SegyReader::addTraces(std::uint64_t fixedSamples) {
   }
   if (at < source_.size()) {
     odd_.add("The file ends within the header of trace " + std::to_string(headers_.size() + 1) +
-             "; that trace and any behind it are missing.");
+                 "; that trace and any behind it are missing.",
+             OddityList::Kind::Lost);
   }
 }
 
@@ -271,6 +274,7 @@ std::vector<ShotRecord> SegyReader::makeRecords() {
     }
   }
   records[0].oddities = odd_.sentences();
+  records[0].losses = odd_.losses();
   return records;
 }
 

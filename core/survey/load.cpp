@@ -72,6 +72,9 @@ class Loading {
     line_.filesRead += static_cast<int>(paths.size() - read.failures.size());
     line_.problems.insert(line_.problems.end(), read.failures.begin(), read.failures.end());
     for (RecordPtr& record : read.records) {
+      for (const std::string& loss : record->losses) {
+        line_.problems.push_back(record->file + " could be read in part only. " + loss);
+      }
       take(std::move(record));
     }
   }
