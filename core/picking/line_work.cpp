@@ -19,7 +19,7 @@ constexpr double kRecorderShare = 2e-4;    // of the loudest swing
 constexpr double kFirstShare = 4e-3;       // of the first swing
 constexpr double kFirstSwing = 12.0;       // work samples
 constexpr double kSound = 340.0;           // m/s, in air
-constexpr double kNearShare = 0.012;       // of the swing soon after the sound wave's time
+constexpr double kNearShare = 0.05;        // of the swing soon after the sound wave's time
 constexpr double kNearSwing = 32.0;        // work samples
 constexpr double kClear = 0.0025;          // s between the end of the noise and an onset
 constexpr double kEarlyTrigger = 0.004;    // s by which recorder time may run ahead of the blow
@@ -92,7 +92,7 @@ double leastNoise(const LineTrace& t) {
     if (!t.posterior.empty() && at >= from && at < from + kFirstSwing)
       first = std::max(first, swing);
   }
-  const bool soundFirst = !t.posterior.empty() && from + kFirstSwing > sound;
+  const bool soundFirst = !t.posterior.empty() && from + kNearSwing > sound;
   return std::max({kRecorderShare * loudest, kFirstShare * first, soundFirst ? kNearShare * near : 0.0});
 }
 
