@@ -7,11 +7,11 @@ namespace {
 
 constexpr double kNear = 0.002;  // s
 constexpr double kLeastMass = 0.7;
-constexpr double kLeastSupport = 1.0;                                              // in log probability
-constexpr double kSureMass = 0.97, kSureSigma = 0.0009, kLeastSureSupport = -2.5;  // neighbours and shots agree
-constexpr double kMostSigma = 0.0015;                                              // s
-constexpr double kWiden = 1.3;           // the posterior is too sure of its model
-constexpr double kPulseSigma = 0.00017;  // s, what the unknown shape of the pulse leaves open
+constexpr double kLeastSupport = 1.0, kLeastSureSupport = -2.5;  // in log probability
+constexpr double kSureMass = 0.97;
+constexpr double kSureSigma = 0.0009, kMostSigma = 0.0015;  // s
+constexpr double kWiden = 1.3;                              // the posterior is too sure of its model
+constexpr double kPulseSigma = 0.00017;                     // s, what the unknown shape of the pulse leaves open
 
 }  // namespace
 
