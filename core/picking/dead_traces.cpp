@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <cmath>
 #include <limits>
+#include <map>
 
 #include "core/picking/noise_model.h"
 
@@ -24,6 +25,21 @@ Loudness loudnessOf(const LineTrace& t) {
   return loudness;
 }
 
+/// A geophone that is dead for most shots is dead for all: at the quietest ones its hiss may pass for noise.
+void markDeadGeophones(std::vector<LineTrace>& traces) {
+  std::map<double, std::pair<std::size_t, std::size_t>> geophones;  // position -> dead, all
+  for (const LineTrace& t : traces) {
+    auto& [dead, all] = geophones[t.x];
+    dead += t.usable ? 0 : 1;
+    ++all;
+  }
+  for (LineTrace& t : traces) {
+    const auto& [dead, all] = geophones[t.x];
+    if (2 * dead > all)
+      t.usable = false;
+  }
+}
+
 }  // namespace
 
 void markDeadTraces(std::vector<LineTrace>& traces) {
@@ -41,6 +57,7 @@ void markDeadTraces(std::vector<LineTrace>& traces) {
     if (quiet && loudness[i].peak < kStandsOut * loudness[i].rms)
       traces[i].usable = false;
   }
+  markDeadGeophones(traces);
 }
 
 }  // namespace strikeplate

@@ -19,6 +19,9 @@ namespace {
 
 constexpr int kCoarseRounds = 3, kFineRounds = 2;
 constexpr double kCertain = 10.0;  // in log probability
+// White noise that is assumed beside the noise (share of its variance). Sharp whitening finds an onset to a fraction
+// of a millisecond; to find the right wave at all, a later and stronger one must not gain too much by it.
+constexpr double kCoarseFloor = 0.03, kFineFloor = 1e-4;
 
 LinePicks emptyPicks(const std::vector<Gather>& gathers) {
   LinePicks picks;
@@ -53,7 +56,7 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
       updateNoise(work);
     if (round > 1)
       findLinePrior(work);
-    const std::vector<NoiseModel> noise = whitenAll(work, 1e-5, 1);
+    const std::vector<NoiseModel> noise = whitenAll(work, kCoarseFloor);
     silenceCrosstalk(work);
     const auto report = [&](double f) { return goOn(progress, 0.5 * (round + f) / kCoarseRounds); };
     if (!coarsePass(work, noise, report))
@@ -65,7 +68,7 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
     updateNoise(work);
     findLinePrior(work);
     std::vector<PulseBank> banks;
-    for (const NoiseModel& noise : whitenAll(work, 1e-5, 1))
+    for (const NoiseModel& noise : whitenAll(work, kFineFloor))
       banks.push_back(makePulseBank(noise));
     silenceCrosstalk(work);
     const auto report = [&](double f) { return goOn(progress, 0.5 + 0.5 * (round + f) / kFineRounds); };

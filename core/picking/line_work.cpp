@@ -18,6 +18,9 @@ constexpr double kUsualIntercept = 0.002;  // s
 constexpr double kRecorderShare = 2e-4;    // of the loudest swing
 constexpr double kFirstShare = 4e-3;       // of the first swing
 constexpr double kFirstSwing = 12.0;       // work samples
+constexpr double kSound = 340.0;           // m/s, in air
+constexpr double kNearShare = 0.03;        // of the swing soon after the sound wave's time
+constexpr double kNearSwing = 32.0;        // work samples
 constexpr double kClear = 0.0025;          // s between the end of the noise and an onset
 constexpr double kEarlyTrigger = 0.004;    // s by which recorder time may run ahead of the blow
 constexpr double kShrink = 3.0;            // samples that the other traces' level counts for
@@ -61,40 +64,36 @@ std::vector<std::size_t> sideOf(const LineWork& work, std::size_t gather, bool r
   return side;
 }
 
-/// Brings the whitened noise to the spectral level of unit white noise where arrivals have their energy: a trace's
-/// noise may sound unlike the survey's. Measured on running sums of `length` samples, since above the recorded band
-/// there is nothing, and a variance over all frequencies makes the noise in the band too small.
-void levelWhite(LineTrace& t, std::size_t first, std::size_t length) {
+/// Brings the whitened noise to unit variance: a trace's noise may sound unlike the survey's, but
+/// it is not below `least`.
+void levelWhite(LineTrace& t, std::size_t first, double least) {
   const std::size_t from = std::min(t.noiseEnd, first + 14);
+  const NoiseLevel level = noiseLevel({t.white.data() + from, t.noiseEnd - from});
   const auto count = static_cast<double>(t.noiseEnd - from);
-  double power = 0.0, sum = 0.0;
-  for (std::size_t i = from; i < t.noiseEnd; ++i) {
-    sum += t.white[i];
-    if (i >= from + length) {
-      sum -= t.white[i - length];
-      power += sum * sum / static_cast<double>(length);
-    }
-  }
-  const double level = count > static_cast<double>(length) ? power / (count - static_cast<double>(length)) : 1.0;
-  const double factor = std::sqrt((count * level + 10.0) / (count + 10.0));
+  const double factor = std::max(std::sqrt((count * (level.rms * level.rms) + 10.0) / (count + 10.0)), least / t.rms);
   t.rms *= factor;
   for (float& e : t.white)
     e = static_cast<float>(e / factor);
 }
 
 /// Noise that is assumed at the least: what a recorder leaves beside its loudest swing, and, once there is an idea of
-/// the first break, a small share of the swing there. Keeps a start without quiet from being taken for silence.
+/// the first break, a small share of the swing there. Keeps a start without quiet from being taken for silence. Where
+/// the sound wave in air may come first, it is a small share of the ground's swing and counts as noise.
 double leastNoise(const LineTrace& t) {
-  double loudest = 0.0, first = 0.0;
+  double loudest = 0.0, first = 0.0, near = 0.0;
+  const double sound = (t.offset() / kSound - t.start) / kWorkInterval;
   const double from = t.posterior.empty() ? 0.0 : (t.belief - t.start) / kWorkInterval;
   for (std::size_t i = 0; i < t.samples.size(); ++i) {
     const double swing = std::abs(static_cast<double>(t.samples[i]));
     const double at = static_cast<double>(i);
+    if (at >= sound && at < sound + kNearSwing)
+      near = std::max(near, swing);
     loudest = std::max(loudest, swing);
     if (!t.posterior.empty() && at >= from && at < from + kFirstSwing)
       first = std::max(first, swing);
   }
-  return std::max(kRecorderShare * loudest, kFirstShare * first);
+  const bool soundFirst = !t.posterior.empty() && from + kNearSwing > sound;
+  return std::max({kRecorderShare * loudest, kFirstShare * first, soundFirst ? kNearShare * near : 0.0});
 }
 
 NoiseModel modelOf(const LineWork& work, std::size_t setting, double floor) {
@@ -181,7 +180,7 @@ void removeHumAll(LineWork& work) {
   }
 }
 
-std::vector<NoiseModel> whitenAll(LineWork& work, double floor, std::size_t sum) {
+std::vector<NoiseModel> whitenAll(LineWork& work, double floor) {
   std::vector<double> levels;
   for (const LineTrace& t : work.traces) {
     if (t.usable && t.noiseEnd >= 20)
@@ -198,13 +197,14 @@ std::vector<NoiseModel> whitenAll(LineWork& work, double floor, std::size_t sum)
     const NoiseLevel level = noiseLevel({t.samples.data() + first, t.noiseEnd - first});
     const double count = 0.25 * static_cast<double>(t.noiseEnd - first);  // samples are not independent
     t.rms = std::sqrt((count * level.rms * level.rms + kShrink * common * common) / (count + kShrink));
-    t.rms = std::max(t.rms, leastNoise(t));
+    const double least = leastNoise(t);
+    t.rms = std::max(t.rms, least);
     std::vector<float> unit(t.samples.size());
     for (std::size_t i = 0; i < unit.size(); ++i) {
       unit[i] = static_cast<float>((t.samples[i] - (count > 5.0 ? level.mean : 0.0)) / t.rms);
     }
     t.white = whitened(models[t.setting], unit);
-    levelWhite(t, first, sum);
+    levelWhite(t, first, least);
   }
   return models;
 }

@@ -61,6 +61,6 @@ void removeHumAll(LineWork& work);
 /// Fits a noise model to the usable traces' noise, one for each setting of the recorder (what a long sample interval
 /// has cut off is no noise to be whitened), with `floor` of white noise as a share of its variance; levels each trace
 /// by its noise and whitens it.
-std::vector<NoiseModel> whitenAll(LineWork& work, double floor, std::size_t sum);
+std::vector<NoiseModel> whitenAll(LineWork& work, double floor);
 
 }  // namespace strikeplate

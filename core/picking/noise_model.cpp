@@ -3,6 +3,8 @@
 #include <algorithm>
 #include <cmath>
 
+#include <Eigen/Dense>
+
 namespace strikeplate {
 namespace {
 
@@ -10,23 +12,19 @@ constexpr std::size_t kOrder = 14;
 constexpr std::size_t kLeastStretch = 40;
 constexpr std::size_t kLongestStretch = 1200;
 
-/// Levinson's recursion: prediction error filter and error variance from autocorrelation r.
-std::vector<double> predictionFilter(const std::vector<double>& r, double& error) {
-  std::vector<double> a{1.0};
-  error = r[0];
-  for (std::size_t m = 1; m < r.size(); ++m) {
-    double sum = 0.0;
-    for (std::size_t i = 0; i < m; ++i)
-      sum += a[i] * r[m - i];
-    const double reflection = -sum / error;
-    std::vector<double> next = a;
-    next.push_back(0.0);
-    for (std::size_t i = 1; i <= m; ++i)
-      next[i] += reflection * (m - i < a.size() ? a[m - i] : 0.0);
-    a = std::move(next);
-    error *= 1.0 - reflection * reflection;
+/// Adds the products of a stretch with itself shifted, forwards and backwards, per unit variance.
+void addProducts(std::span<const float> noise, const NoiseLevel& level, Eigen::MatrixXd& products) {
+  const std::size_t n = noise.size();
+  Eigen::VectorXd ahead(kOrder + 1), back(kOrder + 1);
+  for (std::size_t i = kOrder; i < n; ++i) {
+    for (std::size_t lag = 0; lag <= kOrder; ++lag) {
+      const auto k = static_cast<Eigen::Index>(lag);
+      ahead(k) = (noise[i - lag] - level.mean) / level.rms;
+      back(k) = (noise[i - kOrder + lag] - level.mean) / level.rms;
+    }
+    products.noalias() += 0.5 * ahead * ahead.transpose();
+    products.noalias() += 0.5 * back * back.transpose();
   }
-  return a;
 }
 
 }  // namespace
@@ -46,8 +44,8 @@ NoiseLevel noiseLevel(std::span<const float> noise) {
 
 NoiseModel fitNoise(const std::vector<std::vector<float>>& traces, const std::vector<std::size_t>& noiseEnds,
                     double floor) {
-  std::vector<double> r(kOrder + 1, 0.0);
-  double weights = 0.0;
+  Eigen::MatrixXd products = Eigen::MatrixXd::Zero(kOrder + 1, kOrder + 1);
+  double count = 0.0;
   for (std::size_t t = 0; t < traces.size(); ++t) {
     if (noiseEnds[t] < kLeastStretch)
       continue;
@@ -56,26 +54,20 @@ NoiseModel fitNoise(const std::vector<std::vector<float>>& traces, const std::ve
     const NoiseLevel level = noiseLevel(noise);
     if (!(level.rms > 0.0))
       continue;
-    for (std::size_t lag = 0; lag <= kOrder; ++lag) {
-      double sum = 0.0;
-      for (std::size_t i = lag; i < noise.size(); ++i)
-        sum += (noise[i] - level.mean) * (noise[i - lag] - level.mean);
-      r[lag] += sum / (level.rms * level.rms);
-    }
-    weights += static_cast<double>(noise.size());
+    addProducts(noise, level, products);
+    count += static_cast<double>(noise.size() - kOrder);
   }
-  if (!(weights > 0.0))
+  if (!(count > 0.0))
     return {{1.0}};
-  for (std::size_t lag = 0; lag <= kOrder; ++lag) {
-    const double taper = std::exp(-0.5 * std::pow(static_cast<double>(lag) / 120.0, 2.0));
-    r[lag] *= taper / weights;
-  }
-  r[0] += floor;
-  double error = 1.0;
+  products /= count;
+  products.diagonal().array() += floor;
+  const Eigen::VectorXd right = products.col(0).tail(kOrder);
+  const Eigen::VectorXd weights = products.bottomRightCorner(kOrder, kOrder).ldlt().solve(-right);
+  const double error = products(0, 0) + right.dot(weights);
   NoiseModel model;
-  model.whitener = predictionFilter(r, error);
-  for (double& a : model.whitener)
-    a /= std::sqrt(error);
+  model.whitener.push_back(1.0 / std::sqrt(error));
+  for (const double w : weights)
+    model.whitener.push_back(w / std::sqrt(error));
   return model;
 }
 

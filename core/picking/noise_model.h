@@ -10,10 +10,11 @@ struct NoiseModel {
   std::vector<double> whitener;  ///< weights of the present and the earlier samples
 };
 
-/// Fits an autoregression of order 14 to the autocorrelation of the noise (Levinson 1947, J. Math. Phys. 25,
-/// 261-278), averaged over the traces after scaling each to unit variance, tapered, with `floor` of white noise (a
-/// share of the variance) added. `traces` are work traces, the first `noiseEnds` samples of each hold noise only;
-/// stretches under 40 samples are passed over. Without any stretch the noise is taken as white.
+/// Fits an autoregression of order 14 to the noise by least squares, forwards and backwards (the modified covariance
+/// method: Marple 1980, IEEE Trans. ASSP 28, 441-454; on short stretches of smooth noise, autocorrelations would
+/// leave it far from white), each trace scaled to unit variance, with `floor` of white noise (a share of the
+/// variance) added. `traces` are work traces, the first `noiseEnds` samples of each hold noise only; stretches under
+/// 40 samples are passed over. Without any stretch the noise is taken as white.
 NoiseModel fitNoise(const std::vector<std::vector<float>>& traces, const std::vector<std::size_t>& noiseEnds,
                     double floor);
 

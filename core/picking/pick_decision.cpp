@@ -6,11 +6,12 @@ namespace strikeplate {
 namespace {
 
 constexpr double kNear = 0.002;  // s
-constexpr double kLeastMass = 0.75;
-constexpr double kLeastSupport = 1.5;    // in log probability
-constexpr double kMostSigma = 0.0013;    // s
-constexpr double kWiden = 1.3;           // the posterior is too sure of its model
-constexpr double kPulseSigma = 0.00017;  // s, what the unknown shape of the pulse leaves open
+constexpr double kLeastMass = 0.7;
+constexpr double kLeastSupport = 1.0, kLeastSureSupport = -2.5;  // in log probability
+constexpr double kSureMass = 0.97;
+constexpr double kSureSigma = 0.0009, kMostSigma = 0.0015;  // s
+constexpr double kWiden = 1.3;                              // the posterior is too sure of its model
+constexpr double kPulseSigma = 0.00017;                     // s, what the unknown shape of the pulse leaves open
 
 }  // namespace
 
@@ -23,9 +24,10 @@ std::optional<Onset> decide(const LineTrace& trace) {
     if (std::abs(time - trace.belief) <= kNear)
       mass += trace.posterior[p];
   }
-  if (!trace.trusted && !(trace.support >= kLeastSupport))
-    return std::nullopt;
   const double sigma = std::hypot(kWiden * trace.beliefSigma, kPulseSigma);
+  const bool sure = mass >= kSureMass && sigma <= kSureSigma;
+  if (!trace.trusted && !(trace.support >= (sure ? kLeastSureSupport : kLeastSupport)))
+    return std::nullopt;
   if (!(mass >= kLeastMass) || !(sigma <= kMostSigma))
     return std::nullopt;
   return Onset{trace.belief, sigma, mass};

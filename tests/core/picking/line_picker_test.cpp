@@ -102,14 +102,15 @@ TEST(LinePicker, AShiftOfTimeZeroMovesThePicks) {
   for (Gather& gather : gathers)
     gather.start += 0.001;
   const std::vector<double> after = timesOf(pickLine(gathers));
-  std::size_t picked = 0;
+  int picked = 0;
   for (std::size_t i = 0; i < before.size(); ++i) {
-    if (before[i] > 0.0) {
-      ++picked;
-      EXPECT_NEAR(after[i] - before[i], 0.001, 0.0002);
-    }
+    ASSERT_EQ(before[i] > 0.0, after[i] > 0.0);
+    if (!(before[i] > 0.0))
+      continue;
+    EXPECT_NEAR(after[i] - before[i], 0.001, 0.0002);
+    ++picked;
   }
-  EXPECT_GE(picked + 1, before.size());  // one may be left open
+  EXPECT_GE(picked, 46);
 }
 
 TEST(LinePicker, TheGainOfATraceChangesNothing) {
