@@ -74,7 +74,7 @@ TEST_F(BatchBadInput, ARecordWithOneTraceGivesAReasonAndNoDepth) {
   ASSERT_TRUE(record);
   ShotRecord one = *record;
   one.traces.resize(1);
-  ASSERT_TRUE(writeSeg2(path("one.sg2").toStdString(), one));
+  ASSERT_TRUE(writeSeg2(path("one.sg2").toStdString(), one, {}));
   const BatchRun run = runBatchProgram({path("one.sg2"), "--depths", path("depths.csv")});
   EXPECT_EQ(run.status, 0) << run.errors.toStdString();
   EXPECT_TRUE(run.out.startsWith("No depth is determined: ")) << run.out.toStdString();
