@@ -19,6 +19,9 @@ struct Comparison {
   double worstX = 0.0;
 };
 
+/// Share of the depth to which refraction by hand is commonly held to be good; common practice, no source.
+constexpr double kRouteAccuracy = 0.1;
+
 std::string likelyCause(const std::string& route) {
   if (route.find("plus-minus") != std::string::npos || route.find("reciprocal") != std::string::npos) {
     return "A wrong reciprocal time shifts every depth of this route; relief or dip beyond its assumptions does too.";
@@ -41,7 +44,9 @@ void opinions(const Survey& survey, const Interpretation& interpretation, std::v
     }
     Comparison& c = comparisons[{opinion.layer, opinion.route}];
     const double difference = opinion.depth.value - section.value;
-    const double allowed = kNormal95 * std::hypot(opinion.depth.sigma, section.sigma);
+    // The bars of a route hold its picks' errors, not what its assumptions cost.
+    const double allowed =
+        std::hypot(kNormal95 * std::hypot(opinion.depth.sigma, section.sigma), kRouteAccuracy * section.value);
     ++c.count;
     c.outside += std::abs(difference) > allowed ? 1 : 0;
     c.sum += difference;
@@ -61,7 +66,7 @@ void opinions(const Survey& survey, const Interpretation& interpretation, std::v
     doubt.x = c.worstX;
     doubt.where = "layer " + std::to_string(key.first) + ", " + key.second;
     doubt.says = "The depth to layer " + std::to_string(key.first) + " by " + key.second +
-                 " differs from the section beyond both error bars at " + std::to_string(c.outside) + " of " +
+                 " differs from the section beyond both error bars and a tenth of the depth at " + std::to_string(c.outside) + " of " +
                  std::to_string(c.count) + " places.";
     doubt.restsOn = "Mean difference " + units.length(c.sum / c.count, 2) + ", largest " + units.length(c.worst, 2) +
                     " at " + units.length(c.worstX) + ".";
