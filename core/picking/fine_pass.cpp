@@ -147,12 +147,15 @@ bool finePass(LineWork& work, const std::vector<PulseBank>& banks, const Progres
       beliefFromPosterior(t);
     }
     shareSupport(work, side, own);
-    for (const std::size_t i : side) {
-      LineTrace& t = work.traces[i];
-      t.sureness = t.support * trustIn(t, banks[t.setting]);
-    }
   }
   return true;
+}
+
+void judgeSureness(LineWork& work, const std::vector<PulseBank>& banks) {
+  for (LineTrace& t : work.traces) {
+    if (t.usable)
+      t.sureness = t.support * trustIn(t, banks[t.setting]);
+  }
 }
 
 }  // namespace strikeplate

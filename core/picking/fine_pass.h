@@ -10,6 +10,10 @@ namespace strikeplate {
 /// offset. Replaces posterior, belief and beliefSigma of usable traces; false when asked to stop.
 bool finePass(LineWork& work, const std::vector<PulseBank>& banks, const Progress& progress);
 
+/// Judges which beliefs can be built upon: sureness of every usable trace, from its support and from what its noise
+/// alone can pretend. Needs the traces whitened as for the last finePass.
+void judgeSureness(LineWork& work, const std::vector<PulseBank>& banks);
+
 /// Ends each usable trace's noise 2.5 ms, or three times its uncertainty, before its present belief.
 void updateNoise(LineWork& work);
 

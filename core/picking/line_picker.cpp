@@ -74,6 +74,9 @@ LinePicks pickLine(const std::vector<Gather>& gathers, const LinePickOptions& op
     const auto report = [&](double f) { return goOn(progress, 0.5 + 0.5 * (round + f) / kFineRounds); };
     if (!finePass(work, banks, report))
       return picksOf(gathers, work, false);
+    // With a prediction the picks are led already; nobody builds upon their sureness.
+    if (round + 1 == kFineRounds && options.predicted.empty())
+      judgeSureness(work, banks);
     findPolarity(work);
   }
   return picksOf(gathers, work, goOn(progress, 1.0));

@@ -22,7 +22,8 @@ struct LinePickOptions {
 struct LinePicks {
   std::vector<std::vector<std::optional<Onset>>> onsets;  ///< [gather][trace]; none where no onset is usable
   /// [gather][trace]; ln p(an arrival) - ln p(noise alone) of the trace and its neighbours, at most 10, less where
-  /// the trace's own noise looks like arrivals; tells which picks can be built upon.
+  /// the trace's own noise looks like arrivals; tells which picks can be built
+  /// upon. Not judged (0) when predictions were given.
   std::vector<std::vector<double>> sureness;
   std::vector<std::vector<bool>> reversed;  ///< [gather][trace]; the trace's polarity is the wrong way round
   std::vector<std::vector<bool>> dead;      ///< [gather][trace]; the trace has recorded no ground motion
