@@ -11,7 +11,7 @@
 namespace strikeplate {
 namespace {
 
-constexpr double kLegendHeight = 5.0;  // mm
+constexpr double kLegendHeight = 8.6;  // mm, for two rows
 constexpr double kNameRow = 3.2;       // mm for one row of borehole names
 constexpr int kNameRows = 3;
 const SheetText kNameText{6.5, false, Qt::black, Qt::AlignHCenter};
@@ -107,8 +107,8 @@ void paintBand(SheetPaper& paper, const Run& run, const QColor& colour) {
 
 void paintInterfaceLine(SheetPaper& paper, const Run& run, int layer) {
   QPainter& painter = paper.painter();
-  const QColor colour = paper.look().layerColour(layer).darker(115);
-  painter.setPen(QPen(colour, 0.55));
+  const QColor colour = paper.layerColour(layer).darker(115);
+  painter.setPen(paper.layerPen(layer, colour, 0.55));
   painter.drawPolyline(run.middle);
   painter.setPen(QPen(colour.darker(130), 0.2));
   painter.setBrush(Qt::white);
@@ -125,7 +125,7 @@ void paintInterfaceLine(SheetPaper& paper, const Run& run, int layer) {
 void paintInterfaces(SheetPaper& paper, const SheetFrame& frame, const Section& section) {
   for (const SectionInterface& interface : section.interfaces) {
     for (const Run& run : runsOf(frame, section, interface)) {
-      paintBand(paper, run, paper.look().layerColour(interface.layer));
+      paintBand(paper, run, paper.layerColour(interface.layer));
     }
   }
   for (const SectionInterface& interface : section.interfaces) {
@@ -247,6 +247,15 @@ void paintLayerName(SheetPaper& paper, const SheetFrame& frame, const SheetFigur
   }
 }
 
+// A reader takes slopes for what they look like, so it is said in words which way they are drawn wrong.
+QString scaleWords(double exaggeration) {
+  const QString bands = QStringLiteral("bands: 95 %    vertical exaggeration %1 : 1").arg(exaggeration);
+  if (exaggeration > 1.0) {
+    return bands + QStringLiteral(" (slopes look steeper than they are)");
+  }
+  return bands + (exaggeration < 1.0 ? QStringLiteral(" (slopes look flatter than they are)") : QString());
+}
+
 void paintLegend(SheetPaper& paper, const QPointF& corner, const SheetFigures& figures) {
   QPainter& painter = paper.painter();
   const Look& look = paper.look();
@@ -269,7 +278,7 @@ void paintLegend(SheetPaper& paper, const QPointF& corner, const SheetFigures& f
     entry(QStringLiteral("borehole"));
   }
   for (const SectionInterface& interface : figures.interpretation.section.interfaces) {
-    painter.setPen(QPen(look.layerColour(interface.layer).darker(130), 0.2));
+    painter.setPen(QPen(paper.layerColour(interface.layer).darker(130), 0.2));
     painter.setBrush(Qt::white);
     paintLayerSymbol(painter, interface.layer, {x + 0.8, y - 0.8}, 1.8);
     painter.setBrush(Qt::NoBrush);
@@ -303,9 +312,14 @@ SheetSpan sheetSpan(const SheetFigures& figures) {
 }
 
 double verticalExaggeration(double depth, double height, double scale) {
-  double best = 0.1;
-  for (const double factor : {0.1, 0.2, 0.25, 0.5, 1.0, 1.5, 2.0, 2.5, 3.0, 4.0, 5.0, 6.0, 8.0, 10.0}) {
-    best = factor * depth * scale <= height ? factor : best;
+  constexpr double kMost = 20.0;
+  constexpr double kLeast = 0.1;
+  double best = kLeast;
+  for (double power = kLeast; power <= kMost; power *= 10.0) {
+    for (const double factor : {1.0, 1.25, 1.5, 1.75, 2.0, 2.5, 3.0, 3.5, 4.0, 5.0, 6.0, 7.0, 8.0, 9.0}) {
+      const bool fits = factor * power <= kMost && factor * power * depth * scale <= height;
+      best = fits ? factor * power : best;
+    }
   }
   return best;
 }
@@ -350,8 +364,8 @@ void paintSection(SheetPaper& paper, const QRectF& area, const SheetFigures& fig
   for (const BoreholeName& name : names) {
     paper.label({name.x, frame.area.top() - 1.0 - kNameRow * name.row}, name.name, kNameText);
   }
-  const QString scale = QStringLiteral("band: 95 %     vertical exaggeration %1 : 1").arg(exaggeration);
-  paper.label({frame.area.right(), frame.area.bottom() + 7.2}, scale, {6.5, true, paper.look().ink, Qt::AlignRight});
+  paper.label({frame.area.right(), area.bottom() - kLegendHeight + 7.2}, scaleWords(exaggeration),
+              {6.5, true, paper.look().ink, Qt::AlignRight});
   paintLegend(paper, {frame.area.left(), area.bottom() - kLegendHeight + 1.4}, figures);
 }
 

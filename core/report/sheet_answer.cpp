@@ -101,6 +101,14 @@ std::optional<DepthAlongLine> depthAlongLine(const Survey& survey, const Section
   return along;
 }
 
+std::string sheetQuestion(const SheetSource& source) {
+  const std::vector<Geophone>& geophones = source.survey.geophones;
+  const std::string where = geophones.empty() ? ""
+                                              : " between " + source.words.place(geophones.front().x) + " and " +
+                                                    source.words.place(geophones.back().x) + " along the line";
+  return "How deep do the layers of the ground lie" + where + ", and how fast do waves travel in them?";
+}
+
 std::string sheetAnswer(const SheetSource& source) {
   const Section& section = source.interpretation.section;
   if (!section.determined) {

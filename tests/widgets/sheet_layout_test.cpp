@@ -36,8 +36,17 @@ TEST(SheetLayout, ColumnsFillTheWidthAndTheWidestAreNarrowed) {
 
 TEST(SheetLayout, ExaggerationIsTheLargestRoundOneThatFits) {
   EXPECT_EQ(verticalExaggeration(10.0, 80.0, 2.0), 4.0);
-  EXPECT_EQ(verticalExaggeration(10.0, 19.0, 2.0), 0.5);
-  EXPECT_EQ(verticalExaggeration(1.0, 1000.0, 2.0), 10.0);
+  EXPECT_EQ(verticalExaggeration(10.0, 19.0, 2.0), 0.9);
+  EXPECT_NEAR(verticalExaggeration(30.0, 75.0, 2.0), 1.25, 1e-12);
+  EXPECT_EQ(verticalExaggeration(1.0, 1000.0, 2.0), 20.0) << "beyond that a slope says nothing any more";
+}
+
+TEST(SheetLayout, ExaggerationFillsAtLeastFourFifthsOfTheRoom) {
+  for (double depth = 2.5; depth < 60.0; depth *= 1.037) {
+    const double used = verticalExaggeration(depth, 80.0, 2.0) * depth * 2.0;
+    EXPECT_LE(used, 80.0 + 1e-9);
+    EXPECT_GE(used, 0.8 * 80.0 - 1e-9) << depth;
+  }
 }
 
 TEST(SheetLayout, TheSpanHoldsEveryPlace) {
