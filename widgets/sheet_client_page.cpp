@@ -84,8 +84,10 @@ ClientLimits clientLimitsFor(SheetPaper& paper, double width, double height, con
            paintClientEnd(paper, {}, width, sheet, limits);
   };
   while (measured(paper, all) > height && limits.points > 5.0) {
-    if (limits.answerPoints > 8.0) {
+    if (limits.answerPoints > 7.6) {
       limits.answerPoints -= 0.4;
+    } else if (limits.points > 6.0) {
+      limits.points -= 0.2;
     } else if (limits.boreholes > 4) {
       --limits.boreholes;
     } else {
@@ -102,7 +104,7 @@ void paintClientPage(SheetPaper& paper, const QRectF& room, const SheetFigures& 
   const double width = room.width();
   double y = room.top() + paintTitle(paper, room, words(sheet.title), QStringLiteral("Field interpretation sheet"));
   y += paintHead(paper, {room.left(), y}, width, sheet.head) + kSheetSpace;
-  constexpr double kLeastFigure = 70.0;
+  constexpr double kLeastFigure = 64.0;
   constexpr double kMostFigure = 135.0;
   const ClientLimits limits = clientLimitsFor(paper, width, room.bottom() - y - kSheetSpace - kLeastFigure, sheet);
   y += paintAnswer(paper, {room.left(), y}, width, sheet, limits.answerPoints) + kSheetSpace;

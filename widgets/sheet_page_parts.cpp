@@ -39,7 +39,7 @@ double paintHead(SheetPaper& paper, const QPointF& corner, double width, const s
       paper.text(at, kLabel, words(field.label), {6.5, false, paper.look().faint, Qt::AlignLeft, 1});
       height =
           std::max(height, paper.text(at + QPointF(kLabel, -0.2), column - kLabel - 2.5, words(field.value),
-                                      {7.5, false, given ? paper.look().ink : paper.look().faint, Qt::AlignLeft, 2}));
+                                      {7.5, false, given ? paper.look().ink : paper.look().faint, Qt::AlignLeft, 3}));
     }
     y += height + 0.5;
   }

@@ -97,6 +97,7 @@ QFont SheetPaper::font(const SheetText& style) const {
   font.setStyleHint(QFont::SansSerif);
   font.setPixelSize(std::max(1, qRound(style.points * kMillimetresPerPoint * scale_)));
   font.setBold(style.bold);
+  font.setHintingPreference(QFont::PreferNoHinting);  // paper shows the letters' true widths
   // Any spacing keeps letters apart that would be drawn as one glyph: words can then be found and copied as typed.
   font.setLetterSpacing(QFont::AbsoluteSpacing, 0.0625);
   return font;

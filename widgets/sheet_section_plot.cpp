@@ -2,6 +2,7 @@
 #include <array>
 #include <cmath>
 #include <limits>
+#include <numeric>
 
 #include <QPolygonF>
 
@@ -180,15 +181,18 @@ struct BoreholeName {
 
 // Names above the plot, each in the first row that has room; what has none anywhere is left to the table.
 std::vector<BoreholeName> boreholeNames(const SheetPaper& paper, const SheetFrame& frame,
-                                        std::vector<Borehole> holes) {
-  std::sort(holes.begin(), holes.end(), [](const Borehole& a, const Borehole& b) { return a.x < b.x; });
+                                        const SheetFigures& figures) {
+  const std::vector<Borehole>& holes = figures.survey.boreholes;
+  std::vector<std::size_t> order(holes.size());
+  std::iota(order.begin(), order.end(), 0U);
+  std::stable_sort(order.begin(), order.end(), [&](std::size_t a, std::size_t b) { return holes[a].x < holes[b].x; });
   std::array<double, kNameRows> taken{};
   taken.fill(frame.area.left() - 10.0);
   std::vector<BoreholeName> names;
-  for (const Borehole& hole : holes) {
-    const QString name = words(hole.name).left(18);
+  for (const std::size_t i : order) {
+    const QString name = words(figures.sheet.boreholeMarks[i]);
     const double half = paper.width(name, kNameText) / 2.0;
-    const double x = std::clamp(frame.x(hole.x), frame.area.left() + half, frame.area.right() - half);
+    const double x = std::clamp(frame.x(holes[i].x), frame.area.left() + half, frame.area.right() - half);
     const auto row = std::find_if(taken.begin(), taken.end(), [&](double end) { return x - half > end; });
     if (row != taken.end()) {
       names.push_back({name, x, static_cast<int>(row - taken.begin())});
@@ -328,8 +332,13 @@ void paintSection(SheetPaper& paper, const QRectF& area, const SheetFigures& fig
   if (paper.dry()) {
     return;
   }
+  if (figures.survey.geophones.empty()) {
+    paper.text(area.topLeft(), area.width(), QStringLiteral("No section can be drawn: there is no geophone yet."),
+               {8.0, false, paper.look().faint});
+    return;
+  }
   QRectF plot = area.adjusted(kAxisLeft, 0.0, -2.0, -kAxisBottom - kLegendHeight);
-  const std::vector<BoreholeName> names = boreholeNames(paper, frameOf(plot, figures, 1.0), figures.survey.boreholes);
+  const std::vector<BoreholeName> names = boreholeNames(paper, frameOf(plot, figures, 1.0), figures);
   plot.setTop(plot.top() + roomForNames(names));
   const SheetSpan span = sheetSpan(figures);
   const Depths depths = depthsOf(figures);
@@ -365,7 +374,7 @@ void paintSection(SheetPaper& paper, const QRectF& area, const SheetFigures& fig
     paper.label({name.x, frame.area.top() - 1.0 - kNameRow * name.row}, name.name, kNameText);
   }
   paper.label({frame.area.right(), area.bottom() - kLegendHeight + 7.2}, scaleWords(exaggeration),
-              {6.5, true, paper.look().ink, Qt::AlignRight});
+              {6.5, false, paper.look().ink, Qt::AlignRight});
   paintLegend(paper, {frame.area.left(), area.bottom() - kLegendHeight + 1.4}, figures);
 }
 

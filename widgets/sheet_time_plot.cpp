@@ -99,6 +99,11 @@ void paintTravelTimes(SheetPaper& paper, const QRectF& area, const SheetFigures&
     return;
   }
   const TravelTimes& times = figures.interpretation.times;
+  if (times.arrivals.empty()) {
+    paper.text(area.topLeft(), area.width(), QStringLiteral("No travel times can be drawn: there is no used pick."),
+               {8.0, false, paper.look().faint});
+    return;
+  }
   SheetFrame frame;
   frame.area = area.adjusted(kAxisLeft, kShotRoom, -2.0, -kAxisBottom - kLegendHeight);
   const SheetSpan span = sheetSpan(figures);

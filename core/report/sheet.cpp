@@ -57,6 +57,7 @@ SheetContent sheetContent(const Survey& survey, const Interpretation& interpreta
   sheet.warnings = sheetWarnings(source);
   sheet.question = options.question.empty() ? sheetQuestion(source) : sentence(options.question);
   sheet.layers = sheetLayers(source);
+  sheet.boreholeMarks = sheetBoreholeMarks(source);
   sheet.boreholes = sheetBoreholes(source);
   sheet.opinions = sheetOpinions(source);
   sheet.reciprocals = sheetReciprocals(source);

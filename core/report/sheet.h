@@ -59,6 +59,8 @@ struct SheetContent {
   std::string answer;                 ///< for the client
   std::string strongestDoubt;         ///< one sentence, empty when there is no doubt
   std::string strongestDoubtMore;     ///< what it rests on, what would settle it, how many others there are
+  std::vector<std::string>
+      boreholeMarks;  ///< what stands above each borehole in the section and before it in its table
   SheetTable layers, boreholes, opinions, reciprocals, shots;
   std::vector<SheetDoubtKind> doubts;    ///< the gravest kind first
   std::vector<std::string> picks;        ///< how they came about

@@ -34,6 +34,7 @@ std::optional<DepthAlongLine> depthAlongLine(const Survey& survey, const Section
 std::vector<SheetField> sheetHead(const SheetSource& source);
 std::string sheetAnswer(const SheetSource& source);
 SheetTable sheetLayers(const SheetSource& source);
+std::vector<std::string> sheetBoreholeMarks(const SheetSource& source);
 SheetTable sheetBoreholes(const SheetSource& source);
 SheetTable sheetOpinions(const SheetSource& source);
 SheetTable sheetReciprocals(const SheetSource& source);
