@@ -41,6 +41,27 @@ int linesOf(const QString& words, const QFont& face, double pixels) {
   return layout.lineCount();
 }
 
+// A line may be broken behind a slash, but not within a unit such as m/s: there the number moves to the next line.
+QString withWholeUnits(QString words, const QFont& face, double pixels) {
+  static const QRegularExpression kOpenUnit(QStringLiteral("[0-9]\\x{00A0}(m|ft)/$"));
+  for (int moved = 0; moved < 20; ++moved) {
+    QTextLayout layout(words, face);
+    layOut(layout, pixels, Qt::AlignLeft);
+    qsizetype blank = -1;
+    for (int i = 0; i + 1 < layout.lineCount() && blank < 0; ++i) {
+      const QTextLine line = layout.lineAt(i);
+      const QString shown = words.mid(line.textStart(), line.textLength());
+      const qsizetype before = shown.lastIndexOf(QLatin1Char(' '));
+      blank = kOpenUnit.match(shown).hasMatch() && before > 0 ? line.textStart() + before : -1;
+    }
+    if (blank < 0) {
+      break;
+    }
+    words[blank] = QChar(QChar::LineSeparator);
+  }
+  return words;
+}
+
 QColor greyOf(const QColor& colour) {
   const int grey = qGray(colour.rgb());
   return {grey, grey, grey};
@@ -108,14 +129,15 @@ double SheetPaper::width(const QString& words, const SheetText& style) const {
 }
 
 double SheetPaper::text(const QPointF& corner, double width, const QString& given, const SheetText& style) {
-  const QString words = unbroken(given);
+  const QString unbrokenWords = unbroken(given);
   const double pixels = width * scale_;
   SheetText fitted = style;
-  while (fitted.points - 0.25 >= style.leastPoints && linesOf(words, font(fitted), pixels) > style.maxLines) {
+  while (fitted.points - 0.25 >= style.leastPoints && linesOf(unbrokenWords, font(fitted), pixels) > style.maxLines) {
     fitted.points -= 0.25;
   }
   const QFont face = font(fitted);
   const QFontMetricsF metrics(face);
+  const QString words = withWholeUnits(unbrokenWords, face, pixels);
   QTextLayout layout(words, face);
   layOut(layout, pixels, style.align);
   const bool cut = layout.lineCount() > style.maxLines;
@@ -134,7 +156,7 @@ double SheetPaper::text(const QPointF& corner, double width, const QString& give
     for (int i = 0; i < layout.lineCount(); ++i) {
       box |= layout.lineAt(i).naturalTextRect();
     }
-    addMark({corner + box.topLeft() / scale_, box.size() / scale_}, words, cut);
+    addMark({corner + box.topLeft() / scale_, box.size() / scale_}, given, cut);
   }
   return std::min(layout.lineCount(), style.maxLines) * metrics.lineSpacing() / scale_;
 }

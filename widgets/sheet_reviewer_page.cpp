@@ -32,7 +32,7 @@ double paintReviewerTables(SheetPaper& paper, const QPointF& corner, double widt
   style.mostRows = limits.shots;
   y += paintTable(paper, corner + QPointF(0, y), width, sheet.shots, style) + kSheetSpace;
   return y + paintList(paper, corner + QPointF(0, y), width,
-                       QStringLiteral("Doubts, the gravest kind first, within a kind the strongest first"),
+                       QStringLiteral("Doubts, the gravest and strongest first"),
                        doubtLines(sheet, limits.doubtsOfAKind, limits.doubtReasons), limits.points);
 }
 
@@ -43,7 +43,9 @@ std::vector<std::string> programAndFiles(const SheetContent& sheet, int most) {
   }
   std::vector<std::string> lines = {program + ".", filesLine(sheet.files, most)};
   if (!sheet.files.empty()) {
-    lines.emplace_back("Behind each file: the CRC-32 (IEEE 802.3) of its bytes when this sheet was made.");
+    lines.emplace_back(
+        "Behind a file: the CRC-32 (IEEE 802.3) of its bytes when this sheet was made; none when it was not at "
+        "hand.");
   }
   return lines;
 }
@@ -123,15 +125,22 @@ ReviewerLimits limitsFor(SheetPaper& paper, double width, double height, const S
 
 void paintReviewerPage(SheetPaper& paper, const QRectF& room, const SheetFigures& figures) {
   constexpr double kLeastFigure = 62.0;
-  constexpr double kMostFigure = 110.0;
+  constexpr double kMostFigure = 130.0;
+  constexpr double kResiduals = 27.0;  // mm for the residuals below the travel times, where there is room
+  constexpr double kWordsOnly = 6.0;
   const SheetContent& sheet = figures.sheet;
   const double y =
       room.top() + paintTitle(paper, room, QString::fromStdString(sheet.title), QStringLiteral("For the reviewer"));
   const double height = room.bottom() - y - kSheetSpace;
   const ReviewerLimits limits = limitsFor(paper, room.width(), height - kLeastFigure, sheet);
   const double end = measured(paper, [&] { return paintReviewerEnd(paper, {}, room.width(), sheet, limits); });
-  const double figure = std::clamp(height - end, kLeastFigure, kMostFigure);
-  paintTravelTimes(paper, {room.left(), y, room.width(), figure}, figures);
+  const bool drawn = !figures.interpretation.times.arrivals.empty();
+  const double figure = drawn ? std::clamp(height - end, kLeastFigure, kMostFigure) : kWordsOnly;
+  const double residuals = figure >= kLeastFigure + kResiduals && drawn ? kResiduals : 0.0;
+  paintTravelTimes(paper, {room.left(), y, room.width(), figure - residuals}, figures);
+  if (residuals > 0.0) {
+    paintResiduals(paper, {room.left(), y + figure - residuals, room.width(), residuals}, figures);
+  }
   paintReviewerEnd(paper, {room.left(), y + figure + kSheetSpace}, room.width(), sheet, limits);
 }
 

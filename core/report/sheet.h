@@ -88,7 +88,7 @@ SheetContent sheetContent(const Survey& survey, const Interpretation& interpreta
 /// is left out unless `reasons`.
 std::vector<std::string> doubtLines(const SheetContent& sheet, int mostOfAKind, bool reasons);
 
-/// "1001.sg2 1a2b3c4d, 1002.sg2 (not at hand) and 7 more.": at most `most` files by name.
+/// "1001.sg2 1a2b3c4d, 1002.sg2 and 7 more.": at most `most` files by name, with their checksums as far as known.
 std::string filesLine(const std::vector<SheetFile>& files, int most);
 
 }  // namespace strikeplate

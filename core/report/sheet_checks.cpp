@@ -124,9 +124,11 @@ std::vector<std::string> sheetPicks(const SheetSource& source) {
                                     counted(origins.traces, "trace", "traces") + ": " + std::to_string(origins.hand) +
                                     " by hand, " + std::to_string(origins.automatic) + " automatically, " +
                                     std::to_string(origins.imported) + " imported."};
-  lines.push_back(origins.byHandAssigned == 0 ? "The program assigned every pick to its layer."
-                                              : counted(origins.byHandAssigned, "pick was", "picks were") +
-                                                    " assigned to a layer by hand, the others by the program.");
+  if (origins.all() > 0) {
+    lines.push_back(origins.byHandAssigned == 0 ? "The program assigned every pick to its layer."
+                                                : counted(origins.byHandAssigned, "pick was", "picks were") +
+                                                      " assigned to a layer by hand, the others by the program.");
+  }
   if (source.options.edits >= 0) {
     lines.push_back(counted(source.options.edits, "edit is", "edits are") + " kept in the survey's history.");
   }

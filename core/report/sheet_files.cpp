@@ -61,8 +61,7 @@ std::string filesLine(const std::vector<SheetFile>& files, int most) {
   const std::size_t shown = std::min(files.size(), static_cast<std::size_t>(std::max(0, most)));
   std::string line;
   for (std::size_t i = 0; i < shown; ++i) {
-    line +=
-        (i > 0 ? ", " : "") + files[i].name + " " + (files[i].checksum.empty() ? "(not at hand)" : files[i].checksum);
+    line += (i > 0 ? ", " : "") + files[i].name + (files[i].checksum.empty() ? "" : " " + files[i].checksum);
   }
   if (shown < files.size()) {
     line += (shown > 0 ? " and " : "") + std::to_string(files.size() - shown) + " more";

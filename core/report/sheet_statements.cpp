@@ -57,8 +57,8 @@ std::vector<std::string> sheetLimitations(const SheetSource& source) {
       "too small.",
       "A depth is an average over the part of the interface that the ray touches, measured square to it, and not a "
       "point below a geophone; rock beside the line can arrive first.",
-      "A velocity is not a material: wet sand, till and weathered rock overlap, and the water table near 1500 m/s "
-      "can hide a change of ground.",
+      "A velocity is not a material: wet sand, till and weathered rock overlap, and the water table near " +
+          source.words.units.velocity(1500.0) + " can hide a change of ground.",
       "Boundaries may be gradual. Pavement, frozen ground and buried pipes can give early arrivals that are not the "
       "ground's.",
       "The 95 % intervals hold if the ground is layered as assumed. They do not cover a wrong number of layers, a "
@@ -97,6 +97,9 @@ std::vector<std::string> sheetMethods(const SheetSource& source) {
   }
   for (const std::string& route : routes) {
     lines.push_back(methodLine(route));
+  }
+  if (lines.empty()) {
+    lines.emplace_back("No method was used: there is nothing to interpret.");
   }
   return lines;
 }

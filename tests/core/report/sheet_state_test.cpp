@@ -116,8 +116,8 @@ TEST(SheetFiles, AreNamedOnceWithoutFolders) {
   ASSERT_EQ(sheet.files.size(), 2U);
   EXPECT_EQ(sheet.files[0].name, "line7_1.dat");
   EXPECT_EQ(sheet.files[1].name, "places.csv");
-  EXPECT_EQ(filesLine(sheet.files, 2), "line7_1.dat (not at hand), places.csv (not at hand).");
-  EXPECT_EQ(filesLine(sheet.files, 1), "line7_1.dat (not at hand) and 1 more.");
+  EXPECT_EQ(filesLine(sheet.files, 2), "line7_1.dat, places.csv.");
+  EXPECT_EQ(filesLine(sheet.files, 1), "line7_1.dat and 1 more.");
   EXPECT_EQ(filesLine({}, 5), "No input file.");
 }
 
