@@ -34,6 +34,9 @@ void paintTravelTimes(SheetPaper& paper, const QRectF& area, const SheetFigures&
 /// them need; what lies beyond is drawn at the edge and counted. Nothing is painted without predicted times.
 void paintResiduals(SheetPaper& paper, const QRectF& area, const SheetFigures& figures);
 
+/// Whether there is any residual to paint.
+bool hasResiduals(const Interpretation& interpretation);
+
 /// The mark of a shot: a star of three strokes.
 void paintShotMark(SheetPaper& paper, const QPointF& centre, double size);
 

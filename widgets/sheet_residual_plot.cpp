@@ -42,6 +42,10 @@ double spanOf(const std::vector<Residual>& residuals) {
 
 }  // namespace
 
+bool hasResiduals(const Interpretation& interpretation) {
+  return !residualsOf(interpretation).empty();
+}
+
 void paintResiduals(SheetPaper& paper, const QRectF& area, const SheetFigures& figures) {
   const std::vector<Residual> residuals = residualsOf(figures.interpretation);
   if (paper.dry() || residuals.empty()) {
@@ -50,15 +54,15 @@ void paintResiduals(SheetPaper& paper, const QRectF& area, const SheetFigures& f
   const double span = spanOf(residuals);
   const SheetSpan along = sheetSpan(figures);
   SheetFrame frame;
-  frame.area = area.adjusted(kAxisLeft, 4.0, -2.0, -kAxisBottom);
+  constexpr double kTitle = 4.4;   // mm
+  constexpr double kLabels = 4.4;  // mm, for the places' numbers alone: the travel times above say what they are
+  frame.area = area.adjusted(kAxisLeft - 3.0, kTitle, -2.0, -kLabels);
   frame.left = along.left;
   frame.right = along.right;
   frame.bottom = -span;
   frame.top = span;
   const Units units{figures.sheet.feet};
-  paintAxes(paper, frame,
-            {QStringLiteral("distance along the line (%1)").arg(QString::fromStdString(units.lengthUnit())),
-             QStringLiteral("ms"), units.fromMetres(1.0), 1e3});
+  paintAxes(paper, frame, {QString(), QString(), units.fromMetres(1.0), 1e3, 3.6});
   paper.line(frame.at(frame.left, 0.0), frame.at(frame.right, 0.0), paper.look().ink, 0.2);
   QPainter& painter = paper.painter();
   const double size = residuals.size() < 400 ? 1.3 : 0.8;
@@ -72,11 +76,11 @@ void paintResiduals(SheetPaper& paper, const QRectF& area, const SheetFigures& f
   painter.setBrush(Qt::NoBrush);
   painter.setPen(QPen(paper.look().ink, 0.2));
   painter.drawRect(frame.area);
-  QString title = QStringLiteral("Residuals, picked minus predicted time");
+  QString title = QStringLiteral("Residuals along the line, picked minus predicted (ms)");
   if (beyond > 0) {
-    title += QStringLiteral("; %1 beyond the scale stand at its edge").arg(beyond);
+    title += QStringLiteral("; %1 off the scale").arg(beyond);
   }
-  paper.label({frame.area.left(), frame.area.top() - 1.2}, title, {6.5, false, paper.look().ink});
+  paper.text(area.topLeft(), area.width(), title, {7.0, true, paper.look().ink, Qt::AlignLeft, 1});
 }
 
 }  // namespace strikeplate

@@ -15,13 +15,15 @@ struct ReviewerLimits {
   int reciprocals = 10;
   int shots = 31;
   int doubtsOfAKind = 3;
+  double residuals = 26.0;  ///< mm for their plot
   bool doubtReasons = true;
   int files = 64;
   double points = 6.6;
 };
 
-double paintReviewerTables(SheetPaper& paper, const QPointF& corner, double width, const SheetContent& sheet,
+double paintReviewerTables(SheetPaper& paper, const QPointF& corner, double width, const SheetFigures& figures,
                            const ReviewerLimits& limits) {
+  const SheetContent& sheet = figures.sheet;
   SheetTableStyle style;
   style.points = limits.points;
   style.mostLines = 3;
@@ -31,6 +33,10 @@ double paintReviewerTables(SheetPaper& paper, const QPointF& corner, double widt
   y += paintTable(paper, corner + QPointF(0, y), width, sheet.reciprocals, style) + kSheetSpace;
   style.mostRows = limits.shots;
   y += paintTable(paper, corner + QPointF(0, y), width, sheet.shots, style) + kSheetSpace;
+  if (limits.residuals > 0.0) {
+    paintResiduals(paper, {corner.x(), corner.y() + y, width, limits.residuals}, figures);
+    y += limits.residuals + kSheetSpace;
+  }
   return y + paintList(paper, corner + QPointF(0, y), width,
                        QStringLiteral("Doubts, the gravest and strongest first"),
                        doubtLines(sheet, limits.doubtsOfAKind, limits.doubtReasons), limits.points);
@@ -68,12 +74,12 @@ double paintReviewerWords(SheetPaper& paper, const QPointF& corner, double width
   return y;
 }
 
-double paintReviewerEnd(SheetPaper& paper, const QPointF& corner, double width, const SheetContent& sheet,
+double paintReviewerEnd(SheetPaper& paper, const QPointF& corner, double width, const SheetFigures& figures,
                         const ReviewerLimits& limits) {
   const double column = (width - kBetweenColumns) / 2.0;
-  const double left = paintReviewerTables(paper, corner, column, sheet, limits);
+  const double left = paintReviewerTables(paper, corner, column, figures, limits);
   const double right =
-      paintReviewerWords(paper, corner + QPointF(column + kBetweenColumns, 0), column, sheet, limits);
+      paintReviewerWords(paper, corner + QPointF(column + kBetweenColumns, 0), column, figures.sheet, limits);
   return std::max(left, right);
 }
 
@@ -83,6 +89,12 @@ bool shortenTables(ReviewerLimits& limits) {
   constexpr double kSmallest = 4.6;
   if (limits.shots > 12) {
     limits.shots = std::max(12, limits.shots - 2);
+  } else if (limits.reciprocals > 6) {
+    limits.reciprocals -= 2;
+  } else if (limits.doubtsOfAKind > 2) {
+    --limits.doubtsOfAKind;
+  } else if (limits.residuals > 0.0) {
+    limits.residuals = 0.0;
   } else if (limits.reciprocals > 4) {
     limits.reciprocals -= 2;
   } else if (limits.doubtsOfAKind > 1) {
@@ -104,14 +116,16 @@ bool shortenTables(ReviewerLimits& limits) {
 }
 
 // Shortens the long lists, then the letters, until both columns fit.
-ReviewerLimits limitsFor(SheetPaper& paper, double width, double height, const SheetContent& sheet) {
+ReviewerLimits limitsFor(SheetPaper& paper, double width, double height, const SheetFigures& figures) {
+  const SheetContent& sheet = figures.sheet;
   constexpr double kLeastPoints = 4.6;
   constexpr int kLeastFiles = 12;
   ReviewerLimits limits;
+  limits.residuals = hasResiduals(figures.interpretation) ? limits.residuals : 0.0;
   limits.files = std::min(limits.files, static_cast<int>(sheet.files.size()));
   limits.shots = std::min(limits.shots, static_cast<int>(sheet.shots.rows.size()));
   const double column = (width - kBetweenColumns) / 2.0;
-  const auto tables = [&] { return paintReviewerTables(paper, {}, column, sheet, limits); };
+  const auto tables = [&] { return paintReviewerTables(paper, {}, column, figures, limits); };
   const auto lists = [&] { return paintReviewerWords(paper, {}, column, sheet, limits); };
   while (measured(paper, lists) > height && limits.points > kLeastPoints) {
     limits.points > 5.6 || limits.files <= kLeastFiles ? limits.points -= 0.2 : limits.files -= 4;
@@ -126,22 +140,17 @@ ReviewerLimits limitsFor(SheetPaper& paper, double width, double height, const S
 void paintReviewerPage(SheetPaper& paper, const QRectF& room, const SheetFigures& figures) {
   constexpr double kLeastFigure = 62.0;
   constexpr double kMostFigure = 130.0;
-  constexpr double kResiduals = 27.0;  // mm for the residuals below the travel times, where there is room
   constexpr double kWordsOnly = 6.0;
   const SheetContent& sheet = figures.sheet;
   const double y =
       room.top() + paintTitle(paper, room, QString::fromStdString(sheet.title), QStringLiteral("For the reviewer"));
   const double height = room.bottom() - y - kSheetSpace;
-  const ReviewerLimits limits = limitsFor(paper, room.width(), height - kLeastFigure, sheet);
-  const double end = measured(paper, [&] { return paintReviewerEnd(paper, {}, room.width(), sheet, limits); });
+  const ReviewerLimits limits = limitsFor(paper, room.width(), height - kLeastFigure, figures);
+  const double end = measured(paper, [&] { return paintReviewerEnd(paper, {}, room.width(), figures, limits); });
   const bool drawn = !figures.interpretation.times.arrivals.empty();
   const double figure = drawn ? std::clamp(height - end, kLeastFigure, kMostFigure) : kWordsOnly;
-  const double residuals = figure >= kLeastFigure + kResiduals && drawn ? kResiduals : 0.0;
-  paintTravelTimes(paper, {room.left(), y, room.width(), figure - residuals}, figures);
-  if (residuals > 0.0) {
-    paintResiduals(paper, {room.left(), y + figure - residuals, room.width(), residuals}, figures);
-  }
-  paintReviewerEnd(paper, {room.left(), y + figure + kSheetSpace}, room.width(), sheet, limits);
+  paintTravelTimes(paper, {room.left(), y, room.width(), figure}, figures);
+  paintReviewerEnd(paper, {room.left(), y + figure + kSheetSpace}, room.width(), figures, limits);
 }
 
 }  // namespace strikeplate

@@ -14,6 +14,7 @@ namespace strikeplate {
 namespace {
 
 constexpr std::string_view kSeparators = "/\\";
+const std::string kTogether = "\xC2\xA0";  // a blank at which no line is broken
 
 }  // namespace
 
@@ -61,7 +62,7 @@ std::string filesLine(const std::vector<SheetFile>& files, int most) {
   const std::size_t shown = std::min(files.size(), static_cast<std::size_t>(std::max(0, most)));
   std::string line;
   for (std::size_t i = 0; i < shown; ++i) {
-    line += (i > 0 ? ", " : "") + files[i].name + (files[i].checksum.empty() ? "" : " " + files[i].checksum);
+    line += (i > 0 ? ", " : "") + files[i].name + (files[i].checksum.empty() ? "" : kTogether + files[i].checksum);
   }
   if (shown < files.size()) {
     line += (shown > 0 ? " and " : "") + std::to_string(files.size() - shown) + " more";
