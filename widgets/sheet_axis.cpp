@@ -43,8 +43,8 @@ void paintAxes(SheetPaper& paper, const SheetFrame& frame, const SheetAxes& axes
     paper.line({x, area.bottom()}, {x, area.bottom() + 1.0}, look.ink, 0.2);
     paper.label({x, area.bottom() + 3.6}, QString::fromStdString(fixed(tick, xs.decimals)), number);
   }
-  const SheetTicks ys =
-      sheetTicks(frame.bottom * axes.scaleY, frame.top * axes.scaleY, static_cast<int>(area.height() / 8.0));
+  const SheetTicks ys = sheetTicks(frame.bottom * axes.scaleY, frame.top * axes.scaleY,
+                                   static_cast<int>(area.height() / axes.tickHeight));
   for (const double tick : ys.at) {
     const double y = frame.y(tick / axes.scaleY);
     paper.line({area.left(), y}, {area.right(), y}, look.grid, 0.12);

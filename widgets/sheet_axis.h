@@ -36,6 +36,7 @@ inline constexpr double kAxisBottom = 8.5;
 struct SheetAxes {
   QString titleX, titleY;
   double scaleX = 1.0, scaleY = 1.0;
+  double tickHeight = 8.0;  ///< mm that a tick at the left has at least for itself
 };
 void paintAxes(SheetPaper& paper, const SheetFrame& frame, const SheetAxes& axes);
 

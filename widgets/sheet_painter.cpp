@@ -37,29 +37,8 @@ Outcome writeBytes(const QString& path, const QByteArray& bytes) {
   return good ? Outcome(Done{}) : notWritten(path, file.errorString());
 }
 
-}  // namespace
-
-int sheetPageCount() {
-  return kPages;
-}
-
-void paintSheetPage(QPainter& painter, double perMillimetre, const QSizeF& size, int page, const Survey& survey,
-                    const Interpretation& interpretation, const SheetContent& sheet) {
-  SheetPaper paper(painter, perMillimetre);
-  const QRectF room(kMargin, kMargin - 2.0, size.width() - 2.0 * kMargin,
-                    size.height() - 2.0 * kMargin - kFooterRoom + 4.0);
-  const SheetFigures figures{survey, interpretation, sheet};
-  if (page == 1) {
-    paintClientPage(paper, room, figures);
-  } else {
-    paintReviewerPage(paper, room, figures);
-  }
-  paintFooter(paper, room, sheet, page, kPages);
-}
-
-Outcome paintSheet(QPagedPaintDevice& device, const Survey& survey, const Interpretation& interpretation,
-                   const SheetOptions& options) {
-  const SheetContent sheet = sheetContent(survey, interpretation, options);
+Outcome paintContent(QPagedPaintDevice& device, const Survey& survey, const Interpretation& interpretation,
+                     const SheetContent& sheet) {
   QPainter painter;
   if (!painter.begin(&device)) {
     return Failure{"The printer cannot be painted on; choose another one."};
@@ -82,6 +61,35 @@ Outcome paintSheet(QPagedPaintDevice& device, const Survey& survey, const Interp
   return Done{};
 }
 
+}  // namespace
+
+int sheetPageCount() {
+  return kPages;
+}
+
+void paintSheetPage(QPainter& painter, double perMillimetre, const QSizeF& size, int page, const Survey& survey,
+                    const Interpretation& interpretation, const SheetContent& sheet, std::vector<SheetMark>* marks) {
+  SheetPaper paper(painter, perMillimetre);
+  paper.note(marks);
+  if (sheet.blackAndWhite) {
+    paper.setBlackAndWhite();
+  }
+  const QRectF room(kMargin, kMargin - 2.0, size.width() - 2.0 * kMargin,
+                    size.height() - 2.0 * kMargin - kFooterRoom + 4.0);
+  const SheetFigures figures{survey, interpretation, sheet};
+  if (page == 1) {
+    paintClientPage(paper, room, figures);
+  } else {
+    paintReviewerPage(paper, room, figures);
+  }
+  paintFooter(paper, room, sheet, page, kPages);
+}
+
+Outcome paintSheet(QPagedPaintDevice& device, const Survey& survey, const Interpretation& interpretation,
+                   const SheetOptions& options) {
+  return paintContent(device, survey, interpretation, sheetContent(survey, interpretation, options));
+}
+
 Outcome writeSheetPdf(const QString& path, const Survey& survey, const Interpretation& interpretation,
                       const SheetOptions& options, QPageSize::PageSizeId size) {
   QByteArray bytes;
@@ -91,9 +99,10 @@ Outcome writeSheetPdf(const QString& path, const Survey& survey, const Interpret
   writer.setPageSize(QPageSize(size));
   writer.setPageMargins(QMarginsF(0, 0, 0, 0));
   writer.setResolution(kResolution);
-  writer.setTitle(QString::fromStdString(sheetContent(survey, interpretation, options).title));
+  const SheetContent sheet = sheetContent(survey, interpretation, options);
+  writer.setTitle(QString::fromStdString(sheet.title));
   writer.setCreator(QStringLiteral("Strikeplate"));
-  if (Outcome painted = paintSheet(writer, survey, interpretation, options); !painted) {
+  if (Outcome painted = paintContent(writer, survey, interpretation, sheet); !painted) {
     return painted;
   }
   return writeBytes(path, bytes);

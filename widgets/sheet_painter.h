@@ -5,6 +5,7 @@
 
 #include "core/base/result.h"
 #include "core/report/sheet.h"
+#include "widgets/sheet_paper.h"
 
 namespace strikeplate {
 
@@ -13,8 +14,10 @@ int sheetPageCount();
 
 /// Paints one page (from 1) of the sheet; the painter's origin is the paper's corner, `perMillimetre` its units, and
 /// `paper` the paper's size in mm.
+/// Where the texts came to stand is added to `marks` when there is one.
 void paintSheetPage(QPainter& painter, double perMillimetre, const QSizeF& paper, int page, const Survey& survey,
-                    const Interpretation& interpretation, const SheetContent& sheet);
+                    const Interpretation& interpretation, const SheetContent& sheet,
+                    std::vector<SheetMark>* marks = nullptr);
 
 /// Paints every page on a printer, a preview's device or a PDF writer; the paper's size and margins are the device's
 /// own. Fails when the device cannot be painted on.

@@ -19,16 +19,97 @@ QString unbroken(QString words) {
   return words.replace(kUnit, QString(QChar::Nbsp));
 }
 
+void layOut(QTextLayout& layout, double pixels, Qt::Alignment align) {
+  // Absolute: a name written from right to left still stands beside its label.
+  QTextOption option(align | Qt::AlignAbsolute);
+  option.setWrapMode(QTextOption::WrapAtWordBoundaryOrAnywhere);
+  layout.setTextOption(option);
+  const double spacing = QFontMetricsF(layout.font()).lineSpacing();
+  layout.beginLayout();
+  double height = 0.0;
+  for (QTextLine line = layout.createLine(); line.isValid(); line = layout.createLine()) {
+    line.setLineWidth(pixels);
+    line.setPosition({0.0, height});
+    height += spacing;
+  }
+  layout.endLayout();
+}
+
+int linesOf(const QString& words, const QFont& face, double pixels) {
+  QTextLayout layout(words, face);
+  layOut(layout, pixels, Qt::AlignLeft);
+  return layout.lineCount();
+}
+
+// A line may be broken behind a slash, but not within a unit such as m/s: there the number moves to the next line.
+QString withWholeUnits(QString words, const QFont& face, double pixels) {
+  static const QRegularExpression kOpenUnit(QStringLiteral("[0-9]\\x{00A0}(m|ft)/$"));
+  for (int moved = 0; moved < 20; ++moved) {
+    QTextLayout layout(words, face);
+    layOut(layout, pixels, Qt::AlignLeft);
+    qsizetype blank = -1;
+    for (int i = 0; i + 1 < layout.lineCount() && blank < 0; ++i) {
+      const QTextLine line = layout.lineAt(i);
+      const QString shown = words.mid(line.textStart(), line.textLength());
+      const qsizetype before = shown.lastIndexOf(QLatin1Char(' '));
+      blank = kOpenUnit.match(shown).hasMatch() && before > 0 ? line.textStart() + before : -1;
+    }
+    if (blank < 0) {
+      break;
+    }
+    words[blank] = QChar(QChar::LineSeparator);
+  }
+  return words;
+}
+
+QColor greyOf(const QColor& colour) {
+  const int grey = qGray(colour.rgb());
+  return {grey, grey, grey};
+}
+
 }  // namespace
 
 SheetPaper::SheetPaper(QPainter& painter, double perMillimetre) : painter_(painter), scale_(perMillimetre) {
   painter_.save();
   painter_.scale(scale_, scale_);
   painter_.setRenderHint(QPainter::Antialiasing);
+  page_ = painter_.transform();
 }
 
 SheetPaper::~SheetPaper() {
   painter_.restore();
+}
+
+void SheetPaper::setBlackAndWhite() {
+  blackAndWhite_ = true;
+  for (QColor* colour : {&look_.window, &look_.paper, &look_.ink, &look_.faint, &look_.grid}) {
+    *colour = greyOf(*colour);
+  }
+  look_.accent = look_.warning = look_.ground = look_.ink;
+}
+
+QColor SheetPaper::layerColour(int layer) const {
+  if (!blackAndWhite_) {
+    return look_.layerColour(layer);
+  }
+  constexpr int kDarkest = 60, kStep = 40;  // symbols and dashes tell the layers apart, the greys only help
+  const int grey = kDarkest + kStep * (std::max(0, layer) % 4);
+  return {grey, grey, grey};
+}
+
+QPen SheetPaper::layerPen(int layer, const QColor& colour, double width) const {
+  QPen pen(colour, width, Qt::SolidLine, Qt::FlatCap);
+  if (blackAndWhite_ && layer > 2) {
+    const QList<QList<qreal>> dashes = {{8, 2}, {4, 2}, {8, 2, 2, 2}, {2, 2}};
+    pen.setDashPattern(dashes[(layer - 3) % dashes.size()]);
+  }
+  return pen;
+}
+
+void SheetPaper::addMark(const QRectF& box, const QString& words, bool cut) {
+  if (marks_ != nullptr && !words.isEmpty()) {
+    marks_->push_back({(painter_.transform() * page_.inverted()).mapRect(box), words, cut});
+  }
 }
 
 // In device units, which are fine enough for whole pixels; a font of a few millimetres' units would be rounded.
@@ -37,6 +118,7 @@ QFont SheetPaper::font(const SheetText& style) const {
   font.setStyleHint(QFont::SansSerif);
   font.setPixelSize(std::max(1, qRound(style.points * kMillimetresPerPoint * scale_)));
   font.setBold(style.bold);
+  font.setHintingPreference(QFont::PreferNoHinting);  // paper shows the letters' true widths
   // Any spacing keeps letters apart that would be drawn as one glyph: words can then be found and copied as typed.
   font.setLetterSpacing(QFont::AbsoluteSpacing, 0.0625);
   return font;
@@ -47,40 +129,36 @@ double SheetPaper::width(const QString& words, const SheetText& style) const {
 }
 
 double SheetPaper::text(const QPointF& corner, double width, const QString& given, const SheetText& style) {
-  const QString words = unbroken(given);
-  const QFont face = font(style);
-  const QFontMetricsF metrics(face);
+  const QString unbrokenWords = unbroken(given);
   const double pixels = width * scale_;
-  QTextOption option(style.align);
-  option.setWrapMode(QTextOption::WrapAtWordBoundaryOrAnywhere);
-  const auto layOut = [&](QTextLayout& layout) {
-    layout.setTextOption(option);
-    layout.beginLayout();
-    double height = 0.0;
-    for (QTextLine line = layout.createLine(); line.isValid(); line = layout.createLine()) {
-      line.setLineWidth(pixels);
-      line.setPosition({0.0, height});
-      height += metrics.lineSpacing();
-    }
-    layout.endLayout();
-  };
-  QTextLayout layout(words, face);
-  layOut(layout);
-  QString fitting = words;
-  if (layout.lineCount() > style.maxLines) {
-    const int start = layout.lineAt(style.maxLines - 1).textStart();
-    fitting = words.left(start) + metrics.elidedText(words.mid(start), Qt::ElideRight, pixels);
+  SheetText fitted = style;
+  while (fitted.points - 0.25 >= style.leastPoints && linesOf(unbrokenWords, font(fitted), pixels) > style.maxLines) {
+    fitted.points -= 0.25;
   }
-  QTextLayout final(fitting, face);
-  layOut(final);
+  const QFont face = font(fitted);
+  const QFontMetricsF metrics(face);
+  const QString words = withWholeUnits(unbrokenWords, face, pixels);
+  QTextLayout layout(words, face);
+  layOut(layout, pixels, style.align);
+  const bool cut = layout.lineCount() > style.maxLines;
+  if (cut) {
+    const int start = layout.lineAt(style.maxLines - 1).textStart();
+    layout.setText(words.left(start) + metrics.elidedText(words.mid(start), Qt::ElideRight, pixels));
+    layOut(layout, pixels, style.align);
+  }
   if (!dry_) {
     painter_.save();
     painter_.scale(1.0 / scale_, 1.0 / scale_);
     painter_.setPen(style.colour);
-    final.draw(&painter_, corner * scale_);
+    layout.draw(&painter_, corner * scale_);
     painter_.restore();
+    QRectF box;
+    for (int i = 0; i < layout.lineCount(); ++i) {
+      box |= layout.lineAt(i).naturalTextRect();
+    }
+    addMark({corner + box.topLeft() / scale_, box.size() / scale_}, given, cut);
   }
-  return std::min(final.lineCount(), style.maxLines) * metrics.lineSpacing() / scale_;
+  return std::min(layout.lineCount(), style.maxLines) * metrics.lineSpacing() / scale_;
 }
 
 void SheetPaper::label(const QPointF& base, const QString& words, const SheetText& style) {
@@ -98,6 +176,10 @@ void SheetPaper::label(const QPointF& base, const QString& words, const SheetTex
   painter_.setFont(face);
   painter_.drawText(base * scale_ - QPointF(shift, 0.0), words);
   painter_.restore();
+  const QFontMetricsF metrics(face);
+  addMark(
+      {base.x() - shift / scale_, base.y() - metrics.ascent() / scale_, advance / scale_, metrics.height() / scale_},
+      words, false);
 }
 
 void SheetPaper::uprightLabel(const QPointF& middle, const QString& words, const SheetText& style) {

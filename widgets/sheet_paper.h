@@ -1,9 +1,12 @@
 #pragma once
 
+#include <vector>
+
 #include <QColor>
 #include <QPainter>
 #include <QRectF>
 #include <QString>
+#include <QTransform>
 
 #include "widgets/look.h"
 
@@ -14,7 +17,15 @@ struct SheetText {
   bool bold = false;
   QColor colour = Qt::black;
   Qt::Alignment align = Qt::AlignLeft;
-  int maxLines = 100;  ///< what is longer ends in an ellipsis
+  int maxLines = 100;        ///< what is longer gets smaller letters, and ends in an ellipsis when that does not help
+  double leastPoints = 5.0;  ///< how small
+};
+
+/// A text as it came to stand on the page, for a test to look at.
+struct SheetMark {
+  QRectF box;  ///< mm, around the letters' lines
+  QString words;
+  bool cut = false;  ///< ended in an ellipsis
 };
 
 /// A painter in millimetres from the page's upper left corner, whatever the device's resolution. Fonts are in points.
@@ -30,6 +41,16 @@ class SheetPaper {
   void setDry(bool dry) { dry_ = dry; }
   [[nodiscard]] bool dry() const { return dry_; }
   [[nodiscard]] const Look& look() const { return look_; }
+
+  /// Ink and greys only.
+  void setBlackAndWhite();
+  [[nodiscard]] bool blackAndWhite() const { return blackAndWhite_; }
+  [[nodiscard]] QColor layerColour(int layer) const;
+  /// Full in colour; in black and white each layer has its own dashes.
+  [[nodiscard]] QPen layerPen(int layer, const QColor& colour, double width) const;
+
+  /// Every text painted from now on is added to `marks`, which has to outlive the paper.
+  void note(std::vector<SheetMark>* marks) { marks_ = marks; }
 
   /// For lines and areas, in mm.
   [[nodiscard]] QPainter& painter() { return painter_; }
@@ -48,11 +69,15 @@ class SheetPaper {
 
  private:
   [[nodiscard]] QFont font(const SheetText& style) const;
+  void addMark(const QRectF& box, const QString& words, bool cut);
 
   QPainter& painter_;
   double scale_;
   Look look_ = Look::of(LookKind::Light);
   bool dry_ = false;
+  bool blackAndWhite_ = false;
+  QTransform page_;  // from mm to the device
+  std::vector<SheetMark>* marks_ = nullptr;
 };
 
 }  // namespace strikeplate

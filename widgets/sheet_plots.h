@@ -30,6 +30,13 @@ void paintSection(SheetPaper& paper, const QRectF& area, const SheetFigures& fig
 /// Travel times over position: picks with 95 % bars, symbols by layer, the branches' fitted lines, shots.
 void paintTravelTimes(SheetPaper& paper, const QRectF& area, const SheetFigures& figures);
 
+/// Residuals, picked minus predicted time, over the geophone's position, symbols by layer, as tall as nearly all of
+/// them need; what lies beyond is drawn at the edge and counted. Nothing is painted without predicted times.
+void paintResiduals(SheetPaper& paper, const QRectF& area, const SheetFigures& figures);
+
+/// Whether there is any residual to paint.
+bool hasResiduals(const Interpretation& interpretation);
+
 /// The mark of a shot: a star of three strokes.
 void paintShotMark(SheetPaper& paper, const QPointF& centre, double size);
 

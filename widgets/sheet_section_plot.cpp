@@ -2,6 +2,7 @@
 #include <array>
 #include <cmath>
 #include <limits>
+#include <numeric>
 
 #include <QPolygonF>
 
@@ -11,7 +12,7 @@
 namespace strikeplate {
 namespace {
 
-constexpr double kLegendHeight = 5.0;  // mm
+constexpr double kLegendHeight = 8.6;  // mm, for two rows
 constexpr double kNameRow = 3.2;       // mm for one row of borehole names
 constexpr int kNameRows = 3;
 const SheetText kNameText{6.5, false, Qt::black, Qt::AlignHCenter};
@@ -107,8 +108,8 @@ void paintBand(SheetPaper& paper, const Run& run, const QColor& colour) {
 
 void paintInterfaceLine(SheetPaper& paper, const Run& run, int layer) {
   QPainter& painter = paper.painter();
-  const QColor colour = paper.look().layerColour(layer).darker(115);
-  painter.setPen(QPen(colour, 0.55));
+  const QColor colour = paper.layerColour(layer).darker(115);
+  painter.setPen(paper.layerPen(layer, colour, 0.55));
   painter.drawPolyline(run.middle);
   painter.setPen(QPen(colour.darker(130), 0.2));
   painter.setBrush(Qt::white);
@@ -125,7 +126,7 @@ void paintInterfaceLine(SheetPaper& paper, const Run& run, int layer) {
 void paintInterfaces(SheetPaper& paper, const SheetFrame& frame, const Section& section) {
   for (const SectionInterface& interface : section.interfaces) {
     for (const Run& run : runsOf(frame, section, interface)) {
-      paintBand(paper, run, paper.look().layerColour(interface.layer));
+      paintBand(paper, run, paper.layerColour(interface.layer));
     }
   }
   for (const SectionInterface& interface : section.interfaces) {
@@ -180,15 +181,18 @@ struct BoreholeName {
 
 // Names above the plot, each in the first row that has room; what has none anywhere is left to the table.
 std::vector<BoreholeName> boreholeNames(const SheetPaper& paper, const SheetFrame& frame,
-                                        std::vector<Borehole> holes) {
-  std::sort(holes.begin(), holes.end(), [](const Borehole& a, const Borehole& b) { return a.x < b.x; });
+                                        const SheetFigures& figures) {
+  const std::vector<Borehole>& holes = figures.survey.boreholes;
+  std::vector<std::size_t> order(holes.size());
+  std::iota(order.begin(), order.end(), 0U);
+  std::stable_sort(order.begin(), order.end(), [&](std::size_t a, std::size_t b) { return holes[a].x < holes[b].x; });
   std::array<double, kNameRows> taken{};
   taken.fill(frame.area.left() - 10.0);
   std::vector<BoreholeName> names;
-  for (const Borehole& hole : holes) {
-    const QString name = words(hole.name).left(18);
+  for (const std::size_t i : order) {
+    const QString name = words(figures.sheet.boreholeMarks[i]);
     const double half = paper.width(name, kNameText) / 2.0;
-    const double x = std::clamp(frame.x(hole.x), frame.area.left() + half, frame.area.right() - half);
+    const double x = std::clamp(frame.x(holes[i].x), frame.area.left() + half, frame.area.right() - half);
     const auto row = std::find_if(taken.begin(), taken.end(), [&](double end) { return x - half > end; });
     if (row != taken.end()) {
       names.push_back({name, x, static_cast<int>(row - taken.begin())});
@@ -247,6 +251,15 @@ void paintLayerName(SheetPaper& paper, const SheetFrame& frame, const SheetFigur
   }
 }
 
+// A reader takes slopes for what they look like, so it is said in words which way they are drawn wrong.
+QString scaleWords(double exaggeration) {
+  const QString bands = QStringLiteral("bands: 95 %    vertical exaggeration %1 : 1").arg(exaggeration);
+  if (exaggeration > 1.0) {
+    return bands + QStringLiteral(" (slopes look steeper than they are)");
+  }
+  return bands + (exaggeration < 1.0 ? QStringLiteral(" (slopes look flatter than they are)") : QString());
+}
+
 void paintLegend(SheetPaper& paper, const QPointF& corner, const SheetFigures& figures) {
   QPainter& painter = paper.painter();
   const Look& look = paper.look();
@@ -269,7 +282,7 @@ void paintLegend(SheetPaper& paper, const QPointF& corner, const SheetFigures& f
     entry(QStringLiteral("borehole"));
   }
   for (const SectionInterface& interface : figures.interpretation.section.interfaces) {
-    painter.setPen(QPen(look.layerColour(interface.layer).darker(130), 0.2));
+    painter.setPen(QPen(paper.layerColour(interface.layer).darker(130), 0.2));
     painter.setBrush(Qt::white);
     paintLayerSymbol(painter, interface.layer, {x + 0.8, y - 0.8}, 1.8);
     painter.setBrush(Qt::NoBrush);
@@ -303,9 +316,14 @@ SheetSpan sheetSpan(const SheetFigures& figures) {
 }
 
 double verticalExaggeration(double depth, double height, double scale) {
-  double best = 0.1;
-  for (const double factor : {0.1, 0.2, 0.25, 0.5, 1.0, 1.5, 2.0, 2.5, 3.0, 4.0, 5.0, 6.0, 8.0, 10.0}) {
-    best = factor * depth * scale <= height ? factor : best;
+  constexpr double kMost = 20.0;
+  constexpr double kLeast = 0.1;
+  double best = kLeast;
+  for (double power = kLeast; power <= kMost; power *= 10.0) {
+    for (const double factor : {1.0, 1.25, 1.5, 1.75, 2.0, 2.5, 3.0, 3.5, 4.0, 5.0, 6.0, 7.0, 8.0, 9.0}) {
+      const bool fits = factor * power <= kMost && factor * power * depth * scale <= height;
+      best = fits ? factor * power : best;
+    }
   }
   return best;
 }
@@ -314,8 +332,13 @@ void paintSection(SheetPaper& paper, const QRectF& area, const SheetFigures& fig
   if (paper.dry()) {
     return;
   }
+  if (figures.survey.geophones.empty()) {
+    paper.text(area.topLeft(), area.width(), QStringLiteral("No section can be drawn: there is no geophone yet."),
+               {8.0, false, paper.look().faint});
+    return;
+  }
   QRectF plot = area.adjusted(kAxisLeft, 0.0, -2.0, -kAxisBottom - kLegendHeight);
-  const std::vector<BoreholeName> names = boreholeNames(paper, frameOf(plot, figures, 1.0), figures.survey.boreholes);
+  const std::vector<BoreholeName> names = boreholeNames(paper, frameOf(plot, figures, 1.0), figures);
   plot.setTop(plot.top() + roomForNames(names));
   const SheetSpan span = sheetSpan(figures);
   const Depths depths = depthsOf(figures);
@@ -350,8 +373,8 @@ void paintSection(SheetPaper& paper, const QRectF& area, const SheetFigures& fig
   for (const BoreholeName& name : names) {
     paper.label({name.x, frame.area.top() - 1.0 - kNameRow * name.row}, name.name, kNameText);
   }
-  const QString scale = QStringLiteral("band: 95 %     vertical exaggeration %1 : 1").arg(exaggeration);
-  paper.label({frame.area.right(), frame.area.bottom() + 7.2}, scale, {6.5, true, paper.look().ink, Qt::AlignRight});
+  paper.label({frame.area.right(), area.bottom() - kLegendHeight + 7.2}, scaleWords(exaggeration),
+              {6.5, false, paper.look().ink, Qt::AlignRight});
   paintLegend(paper, {frame.area.left(), area.bottom() - kLegendHeight + 1.4}, figures);
 }
 

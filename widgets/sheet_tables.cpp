@@ -72,7 +72,7 @@ void paintRowSymbol(SheetPaper& paper, const QPointF& corner, const std::string&
   const int number = std::stoi(layer);
   QPainter& painter = paper.painter();
   painter.setPen(QPen(paper.look().ink, 0.2));
-  painter.setBrush(paper.look().layerColour(number));
+  painter.setBrush(paper.layerColour(number));
   paintLayerSymbol(painter, number, corner + QPointF(kSymbol / 2 + 0.2, kRowSpace + points * 0.21), kSymbol);
   painter.setBrush(Qt::NoBrush);
 }

@@ -25,13 +25,12 @@ double latest(const TravelTimes& times) {
 
 void paintPicks(SheetPaper& paper, const SheetFrame& frame, const TravelTimes& times) {
   QPainter& painter = paper.painter();
-  const Look& look = paper.look();
   const double size = symbolSize(times.arrivals.size());
   for (const Arrival& a : times.arrivals) {
     const double x = times.geophones[static_cast<std::size_t>(a.geophone)].x;
-    const QColor colour = look.layerColour(a.layer);
-    paper.line(frame.at(x, a.time - kNormal95 * a.sigma), frame.at(x, a.time + kNormal95 * a.sigma), look.faint,
-               0.12);
+    const QColor colour = paper.layerColour(a.layer);
+    paper.line(frame.at(x, a.time - kNormal95 * a.sigma), frame.at(x, a.time + kNormal95 * a.sigma),
+               paper.look().faint, 0.12);
     painter.setPen(QPen(colour.darker(150), 0.15));
     painter.setBrush(colour);
     paintLayerSymbol(painter, a.layer, frame.at(x, a.time), size);
@@ -49,8 +48,8 @@ void paintFits(SheetPaper& paper, const SheetFrame& frame, const Interpretation&
     const double first = times.offset(times.arrivals[static_cast<std::size_t>(branch.arrivals.front())]);
     const double last = times.offset(times.arrivals[static_cast<std::size_t>(branch.arrivals.back())]);
     paper.line(frame.at(shot + branch.side * first, branch.fit.at(first)),
-               frame.at(shot + branch.side * last, branch.fit.at(last)),
-               paper.look().layerColour(branch.layer).darker(125), 0.3);
+               frame.at(shot + branch.side * last, branch.fit.at(last)), paper.layerColour(branch.layer).darker(125),
+               0.3);
   }
 }
 
@@ -74,8 +73,8 @@ void paintLegend(SheetPaper& paper, const QPointF& corner, const Interpretation&
   double x = corner.x();
   const double y = corner.y() + 2.0;
   for (int layer = 1; layer <= interpretation.section.layers; ++layer) {
-    painter.setPen(QPen(paper.look().layerColour(layer).darker(130), 0.2));
-    painter.setBrush(paper.look().layerColour(layer));
+    painter.setPen(QPen(paper.layerColour(layer).darker(130), 0.2));
+    painter.setBrush(paper.layerColour(layer));
     paintLayerSymbol(painter, layer, {x + 1.0, y - 0.8}, 1.8);
     painter.setBrush(Qt::NoBrush);
     const QString words = QStringLiteral("layer %1").arg(layer);
@@ -100,6 +99,11 @@ void paintTravelTimes(SheetPaper& paper, const QRectF& area, const SheetFigures&
     return;
   }
   const TravelTimes& times = figures.interpretation.times;
+  if (times.arrivals.empty()) {
+    paper.text(area.topLeft(), area.width(), QStringLiteral("No travel times can be drawn: there is no used pick."),
+               {8.0, false, paper.look().faint});
+    return;
+  }
   SheetFrame frame;
   frame.area = area.adjusted(kAxisLeft, kShotRoom, -2.0, -kAxisBottom - kLegendHeight);
   const SheetSpan span = sheetSpan(figures);

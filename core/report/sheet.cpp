@@ -24,6 +24,22 @@ std::string titleOf(const SurveyInfo& info) {
   return info.line.empty() ? "Seismic refraction line" : "Seismic refraction, line " + info.line;
 }
 
+void addStrongestDoubt(SheetContent& sheet, int all) {
+  if (sheet.doubts.empty()) {
+    return;
+  }
+  const SheetDoubt& strongest = sheet.doubts.front().doubts.front();
+  sheet.strongestDoubt = strongest.says;
+  sheet.strongestDoubtMore = strongest.restsOn;
+  if (!strongest.settles.empty()) {
+    sheet.strongestDoubtMore +=
+        std::string(strongest.restsOn.empty() ? "" : " ") + "To settle it: " + strongest.settles;
+  }
+  if (all > 1) {
+    sheet.strongestDoubtMore += " " + counted(all - 1, "other doubt stands", "other doubts stand") + " on page 2.";
+  }
+}
+
 }  // namespace
 
 SheetContent sheetContent(const Survey& survey, const Interpretation& interpretation, const SheetOptions& options) {
@@ -38,15 +54,17 @@ SheetContent sheetContent(const Survey& survey, const Interpretation& interpreta
     }
   }
   sheet.answer = options.answer.empty() ? sheetAnswer(source) : options.answer;
-  if (!interpretation.doubts.empty()) {
-    sheet.strongestDoubt = sentence(interpretation.doubts.front().says);
-  }
+  sheet.warnings = sheetWarnings(source);
+  sheet.question = options.question.empty() ? sheetQuestion(source) : sentence(options.question);
   sheet.layers = sheetLayers(source);
+  sheet.boreholeMarks = sheetBoreholeMarks(source);
   sheet.boreholes = sheetBoreholes(source);
   sheet.opinions = sheetOpinions(source);
   sheet.reciprocals = sheetReciprocals(source);
   sheet.shots = sheetShots(source);
   sheet.doubts = sheetDoubts(source);
+  addStrongestDoubt(sheet, static_cast<int>(interpretation.doubts.size()));
+  sheet.triggers = sheetTriggers(source);
   sheet.picks = sheetPicks(source);
   sheet.fit = sheetFit(source);
   sheet.limitations = sheetLimitations(source);
@@ -55,7 +73,9 @@ SheetContent sheetContent(const Survey& survey, const Interpretation& interpreta
   sheet.cautions = sheetCautions();
   sheet.signatory = options.signatory;
   sheet.program = "Strikeplate " STRIKEPLATE_VERSION;
+  sheet.builtOn = options.builtOn;
   sheet.files = sheetFiles(source);
+  sheet.blackAndWhite = options.blackAndWhite;
   sheet.feet = survey.settings.feet;
   return sheet;
 }

@@ -101,6 +101,14 @@ std::optional<DepthAlongLine> depthAlongLine(const Survey& survey, const Section
   return along;
 }
 
+std::string sheetQuestion(const SheetSource& source) {
+  const std::vector<Geophone>& geophones = source.survey.geophones;
+  const std::string where = geophones.empty() ? ""
+                                              : " between " + source.words.place(geophones.front().x) + " and " +
+                                                    source.words.place(geophones.back().x) + " along the line";
+  return "How deep do the layers of the ground lie" + where + ", and how fast do waves travel in them?";
+}
+
 std::string sheetAnswer(const SheetSource& source) {
   const Section& section = source.interpretation.section;
   if (!section.determined) {
@@ -135,15 +143,29 @@ SheetTable sheetLayers(const SheetSource& source) {
   return table;
 }
 
+// A name that has no room above the section is stood for by a number.
+std::vector<std::string> sheetBoreholeMarks(const SheetSource& source) {
+  constexpr std::size_t kLongest = 14;
+  std::vector<std::string> marks;
+  for (const Borehole& hole : source.survey.boreholes) {
+    const bool fits = !hole.name.empty() && hole.name.size() <= kLongest;
+    marks.push_back(fits ? hole.name : "No. " + std::to_string(marks.size() + 1));
+  }
+  return marks;
+}
+
 SheetTable sheetBoreholes(const SheetSource& source) {
   SheetTable table;
   table.title = "Boreholes";
   table.columns = {"Borehole", "At", "Top of layer", "Drilled depth", "Section", "Difference", "In the section"};
-  for (const Borehole& hole : source.survey.boreholes) {
+  const std::vector<std::string> marks = sheetBoreholeMarks(source);
+  for (std::size_t i = 0; i < marks.size(); ++i) {
+    const Borehole& hole = source.survey.boreholes[i];
+    const std::string name = hole.name.empty() ? kNotGiven : hole.name;
     const Estimate depth = source.interpretation.section.depthAt(hole.layer, hole.x);
     const double difference = depth.determined ? depth.value - hole.depth : Estimate::kNaN;
     table.rows.push_back(
-        {hole.name.empty() ? kNotGiven : hole.name, source.words.place(hole.x), std::to_string(hole.layer),
+        {marks[i] == name ? name : marks[i] + ": " + name, source.words.place(hole.x), std::to_string(hole.layer),
          source.words.depth(hole.depth) + " ± " + source.words.depth(kNormal95 * hole.sigma),
          source.words.depth(depth), source.words.depth(difference), hole.used ? "used as a datum" : "compared only"});
   }

@@ -1,6 +1,5 @@
 #include <algorithm>
 #include <cmath>
-#include <map>
 #include <utility>
 
 #include "core/base/numbers.h"
@@ -24,33 +23,6 @@ struct Tally {
   [[nodiscard]] double deviation() const { return count > 1 ? std::sqrt(squares / (count - 1)) : Estimate::kNaN; }
   [[nodiscard]] double rms() const { return count > 0 ? std::sqrt(squares / count + mean * mean) : Estimate::kNaN; }
 };
-
-struct Route {
-  int all = 0;
-  int compared = 0;
-  int agree = 0;
-  Tally depth, difference;
-  std::string reason;
-};
-
-bool overlap(const Estimate& a, const Estimate& b) {
-  return a.low95 <= b.high95 && b.low95 <= a.high95;
-}
-
-void take(Route& route, const Opinion& opinion, const Section& section) {
-  ++route.all;
-  if (!opinion.depth.determined) {
-    route.reason = route.reason.empty() ? opinion.depth.reason : route.reason;
-    return;
-  }
-  route.depth.take(opinion.depth.value);
-  const Estimate there = section.depthAt(opinion.layer, opinion.x);
-  if (there.determined) {
-    ++route.compared;
-    route.difference.take(opinion.depth.value - there.value);
-    route.agree += overlap(opinion.depth, there) ? 1 : 0;
-  }
-}
 
 std::string shotName(const SheetSource& source, int shot) {
   return std::to_string(shot + 1) + " at " +
@@ -96,31 +68,6 @@ double excess(const ReciprocalPair& pair) {
 }
 
 }  // namespace
-
-SheetTable sheetOpinions(const SheetSource& source) {
-  std::map<std::pair<std::string, int>, Route> routes;
-  for (const Opinion& opinion : source.interpretation.opinions) {
-    take(routes[{opinion.route, opinion.layer}], opinion, source.interpretation.section);
-  }
-  SheetTable table;
-  table.title = "Second opinions";
-  table.columns = {"Route", "Layer", "Depths", "Mean depth", "Spread", "Minus section", "Agree"};
-  for (const auto& [key, route] : routes) {
-    std::vector<std::string> row = {key.first, std::to_string(key.second),
-                                    std::to_string(route.depth.count) + " of " + std::to_string(route.all)};
-    row.push_back(source.words.depth(route.depth.count > 0 ? route.depth.mean : Estimate::kNaN));
-    row.push_back(route.depth.count > 1 ? source.words.depth(route.depth.deviation()) : "");
-    row.push_back(route.compared > 0 ? source.words.depth(route.difference.mean) : "");
-    row.push_back(route.compared > 0 ? std::to_string(route.agree) + " of " + std::to_string(route.compared) : "");
-    table.rows.push_back(std::move(row));
-  }
-  table.note =
-      "The depth to the top of the layer by other published methods. Spread is one standard deviation of the depths; "
-      "agree counts those "
-      "whose 95 % interval meets the section's at the same place.";
-  table.summary = table.rows.empty() ? "No other method has the picks it needs." : "";
-  return table;
-}
 
 SheetTable sheetReciprocals(const SheetSource& source) {
   std::vector<ReciprocalPair> pairs = source.interpretation.reciprocals;
@@ -168,17 +115,6 @@ SheetTable sheetShots(const SheetSource& source) {
   return table;
 }
 
-SheetTable sheetDoubts(const SheetSource& source) {
-  SheetTable table;
-  table.title = "Doubts";
-  table.columns = {"Where", "Doubt", "What would settle it"};
-  for (const Doubt& doubt : source.interpretation.doubts) {
-    table.rows.push_back({doubt.where, sentence(doubt.says), sentence(doubt.wouldSettle)});
-  }
-  table.summary = table.rows.empty() ? "The program's checks found nothing to doubt." : "";
-  return table;
-}
-
 std::vector<std::string> sheetPicks(const SheetSource& source) {
   Origins origins;
   for (const Shot& shot : source.survey.shots) {
@@ -188,8 +124,11 @@ std::vector<std::string> sheetPicks(const SheetSource& source) {
                                     counted(origins.traces, "trace", "traces") + ": " + std::to_string(origins.hand) +
                                     " by hand, " + std::to_string(origins.automatic) + " automatically, " +
                                     std::to_string(origins.imported) + " imported."};
-  lines.push_back("The layer of " + counted(origins.byHandAssigned, "pick was", "picks was") +
-                  " assigned by hand, of the others by the program.");
+  if (origins.all() > 0) {
+    lines.push_back(origins.byHandAssigned == 0 ? "The program assigned every pick to its layer."
+                                                : counted(origins.byHandAssigned, "pick was", "picks were") +
+                                                      " assigned to a layer by hand, the others by the program.");
+  }
   if (source.options.edits >= 0) {
     lines.push_back(counted(source.options.edits, "edit is", "edits are") + " kept in the survey's history.");
   }
@@ -206,7 +145,7 @@ std::vector<std::string> sheetFit(const SheetSource& source) {
                                     ms(all.rms(), 2) + "; noise scale " + fixed(section.noiseScale, 2) +
                                     " times the picks' stated sigmas."};
   if (!section.converged) {
-    lines.emplace_back("The solution had not settled when it was stopped; its intervals are not to be relied on.");
+    lines.emplace_back("The inversion has not settled; its intervals are not to be relied on.");
   }
   for (const LayerCountEvidence& other : section.layerCounts) {
     if (other.determined && other.layers != section.layers) {

@@ -49,22 +49,21 @@ bool hasPicksOf(const Survey& survey, PickOrigin origin) {
 }  // namespace
 
 std::vector<std::string> sheetLimitations(const SheetSource& source) {
-  std::vector<std::string> lines = {
+  std::vector<std::string> lines = sheetReach(source);
+  const std::vector<std::string> always = {
       "Refraction sees a layer only when it is faster than all above it. A slower layer under a faster one sends "
-      "back "
-      "no first arrival; the depths below it are then too large.",
+      "back no first arrival; the depths below it are then too large.",
       "A layer that is too thin for its waves to arrive first anywhere stays hidden; the depths below it are then "
-      "too "
-      "small.",
+      "too small.",
       "A depth is an average over the part of the interface that the ray touches, measured square to it, and not a "
       "point below a geophone; rock beside the line can arrive first.",
-      "A velocity is not a material: wet sand, till and weathered rock overlap, and the water table near 1500 m/s "
-      "can "
-      "hide a change of ground.",
+      "A velocity is not a material: wet sand, till and weathered rock overlap, and the water table near " +
+          source.words.units.velocity(1500.0) + " can hide a change of ground.",
       "Boundaries may be gradual. Pavement, frozen ground and buried pipes can give early arrivals that are not the "
       "ground's.",
       "The 95 % intervals hold if the ground is layered as assumed. They do not cover a wrong number of layers, a "
       "hidden layer, or wrong positions."};
+  lines.insert(lines.end(), always.begin(), always.end());
   if (source.survey.geophones.size() > 1) {
     lines.push_back(
         "Valid for this line, " +
@@ -87,6 +86,11 @@ std::vector<std::string> sheetMethods(const SheetSource& source) {
         "Rasmussen & Williams (2006) Gaussian Processes for Machine Learning; intervals from the posterior "
         "covariance, Tarantola (2005) Inverse Problem Theory.");
   }
+  if (!sheetReach(source).empty()) {
+    lines.emplace_back(
+        "Hidden-layer allowance: Soske (1959) Geophysics 24, 359-365; Green (1962) Geophysical Prospecting 10, "
+        "166-170. Reach: travel times of flat layers, Sheriff & Geldart (1995) Exploration Seismology.");
+  }
   std::set<std::string> routes;
   for (const Opinion& opinion : source.interpretation.opinions) {
     routes.insert(opinion.route);
@@ -94,18 +98,9 @@ std::vector<std::string> sheetMethods(const SheetSource& source) {
   for (const std::string& route : routes) {
     lines.push_back(methodLine(route));
   }
-  return lines;
-}
-
-std::vector<std::string> sheetFiles(const SheetSource& source) {
-  std::vector<std::string> lines;
-  std::set<std::string> known;
-  for (const RecordPtr& record : source.survey.records) {
-    if (known.insert(record->file).second) {
-      lines.push_back(record->file);
-    }
+  if (lines.empty()) {
+    lines.emplace_back("No method was used: there is nothing to interpret.");
   }
-  lines.insert(lines.end(), source.options.inputFiles.begin(), source.options.inputFiles.end());
   return lines;
 }
 
@@ -117,11 +112,9 @@ std::string sheetCautionShort() {
 std::vector<std::string> sheetCautions() {
   return {
       "Interpretation, not fact: other ground can explain the same times. Verify by drilling or trial pits before "
-      "any "
-      "design rests on it.",
+      "any design rests on it.",
       "Digging, trenching, building: local codes, the owner of the works and a licensed professional decide, not "
-      "this "
-      "sheet.",
+      "this sheet.",
       "Buried services: have them located and marked before driving spikes, striking plates, drilling or digging.",
       "Hammer: eye, ear and foot protection, a sound handle, a clear circle of 3 m (10 ft), a warning before each "
       "blow.",

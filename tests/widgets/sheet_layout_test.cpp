@@ -1,9 +1,11 @@
-// The sheet's geometry as plain functions of numbers.
+// The sheet's geometry: plain functions of numbers, and where every text of a whole page comes to stand.
 #include <numeric>
 
+#include <QImage>
 #include <gtest/gtest.h>
 
 #include "tests/core/report/sheet_sample.h"
+#include "widgets/sheet_painter.h"
 #include "widgets/sheet_plots.h"
 #include "widgets/sheet_tables.h"
 
@@ -36,8 +38,17 @@ TEST(SheetLayout, ColumnsFillTheWidthAndTheWidestAreNarrowed) {
 
 TEST(SheetLayout, ExaggerationIsTheLargestRoundOneThatFits) {
   EXPECT_EQ(verticalExaggeration(10.0, 80.0, 2.0), 4.0);
-  EXPECT_EQ(verticalExaggeration(10.0, 19.0, 2.0), 0.5);
-  EXPECT_EQ(verticalExaggeration(1.0, 1000.0, 2.0), 10.0);
+  EXPECT_EQ(verticalExaggeration(10.0, 19.0, 2.0), 0.9);
+  EXPECT_NEAR(verticalExaggeration(30.0, 75.0, 2.0), 1.25, 1e-12);
+  EXPECT_EQ(verticalExaggeration(1.0, 1000.0, 2.0), 20.0) << "beyond that a slope says nothing any more";
+}
+
+TEST(SheetLayout, ExaggerationFillsAtLeastFourFifthsOfTheRoom) {
+  for (double depth = 2.5; depth < 60.0; depth *= 1.037) {
+    const double used = verticalExaggeration(depth, 80.0, 2.0) * depth * 2.0;
+    EXPECT_LE(used, 80.0 + 1e-9);
+    EXPECT_GE(used, 0.8 * 80.0 - 1e-9) << depth;
+  }
 }
 
 TEST(SheetLayout, TheSpanHoldsEveryPlace) {
@@ -49,6 +60,100 @@ TEST(SheetLayout, TheSpanHoldsEveryPlace) {
   const Survey none;
   EXPECT_LT(sheetSpan({none, sample.interpretation, sheet}).left,
             sheetSpan({none, sample.interpretation, sheet}).right);
+}
+
+constexpr QSizeF kA4(210.0, 297.0);
+constexpr QSizeF kLetter(215.9, 279.4);
+
+std::vector<SheetMark> marksOf(const testing::SheetSample& sample, const QSizeF& paper, int page, bool grey = false) {
+  constexpr double kPerMillimetre = 12.0;  // about 300 dots per inch
+  SheetOptions options;
+  options.edits = 12;
+  options.blackAndWhite = grey;
+  options.signatory = "Dr. Agnieszka Featherstonehaugh-Grzegorzewska";
+  options.builtOn = {"Qt 6.4.2", "Eigen 3.4.0", "SQLite 3.45.1"};
+  QImage image((paper * kPerMillimetre).toSize(), QImage::Format_RGB32);
+  image.fill(Qt::white);
+  std::vector<SheetMark> marks;
+  QPainter painter(&image);
+  paintSheetPage(painter, kPerMillimetre, paper, page, sample.survey, sample.interpretation,
+                 sheetContent(sample.survey, sample.interpretation, options), &marks);
+  return marks;
+}
+
+// What is wrong with a page, one line each: texts over one another, beyond the margins, or cut.
+std::string faults(const std::vector<SheetMark>& marks, const QSizeF& paper) {
+  constexpr double kMargin = 9.0;  // mm
+  const QRectF room(kMargin, kMargin - 2.0, paper.width() - 2.0 * kMargin, paper.height() - 2.0 * kMargin + 4.0);
+  QString text;
+  for (std::size_t a = 0; a < marks.size(); ++a) {
+    if (!room.contains(marks[a].box)) {
+      text += "beyond the margins: " + marks[a].words + "\n";
+    }
+    if (marks[a].cut) {
+      text += "cut: " + marks[a].words + "\n";
+    }
+    // Boxes reach from the highest to the lowest letter of a font, so those of two rows may just touch.
+    const QRectF box = marks[a].box.adjusted(0.1, 0.45, -0.1, -0.45);
+    for (std::size_t b = a + 1; b < marks.size(); ++b) {
+      if (box.intersects(marks[b].box.adjusted(0.1, 0.45, -0.1, -0.45))) {
+        text += marks[a].words + " | over | " + marks[b].words + "\n";
+      }
+    }
+  }
+  return text.toStdString();
+}
+
+TEST(SheetLayout, TheFaultsOfAPageAreFound) {
+  const SheetMark whole{{20.0, 20.0, 30.0, 3.0}, "whole", false};
+  EXPECT_EQ(faults({whole, {{20.0, 23.0, 30.0, 3.0}, "next row", false}}, kA4), "");
+  EXPECT_EQ(faults({whole, {{45.0, 21.5, 30.0, 3.0}, "too near", false}}, kA4), "whole | over | too near\n");
+  EXPECT_EQ(faults({{{190.0, 20.0, 30.0, 3.0}, "wide", false}}, kA4), "beyond the margins: wide\n");
+  EXPECT_EQ(faults({{{20.0, 20.0, 30.0, 3.0}, "long", true}}, kA4), "cut: long\n");
+}
+
+TEST(SheetLayout, NoTextLiesOverAnotherBeyondTheMarginsOrIsCut) {
+  const std::vector<testing::SheetSample> samples = {testing::sheetSample(), testing::fullSheetSample(),
+                                                     testing::emptySheetSample(), testing::sheetSample({2, 1, 2, 0})};
+  for (std::size_t s = 0; s < samples.size(); ++s) {
+    for (const QSizeF& paper : {kA4, kLetter}) {
+      for (const bool feet : {false, true}) {
+        testing::SheetSample sample = samples[s];
+        sample.survey.settings.feet = feet;
+        for (const int page : {1, 2}) {
+          const std::vector<SheetMark> marks = marksOf(sample, paper, page, feet);
+          EXPECT_GT(marks.size(), 20U);
+          EXPECT_EQ(faults(marks, paper), "")
+              << "sample " << s << ", page " << page << ", width " << paper.width() << (feet ? " ft" : " m");
+        }
+      }
+    }
+  }
+}
+
+TEST(SheetLayout, BlackAndWhiteHasNoColourAndTheSameTexts) {
+  constexpr double kPerMillimetre = 4.0;
+  const auto sample = testing::sheetSample();
+  SheetOptions options;
+  options.blackAndWhite = true;
+  for (const int page : {1, 2}) {
+    QImage image((kA4 * kPerMillimetre).toSize(), QImage::Format_RGB32);
+    image.fill(Qt::white);
+    {
+      QPainter painter(&image);
+      paintSheetPage(painter, kPerMillimetre, kA4, page, sample.survey, sample.interpretation,
+                     sheetContent(sample.survey, sample.interpretation, options));
+    }
+    int coloured = 0;
+    for (int y = 0; y < image.height(); ++y) {
+      for (int x = 0; x < image.width(); ++x) {
+        const QRgb p = image.pixel(x, y);
+        coloured += qRed(p) != qGreen(p) || qGreen(p) != qBlue(p) ? 1 : 0;
+      }
+    }
+    EXPECT_EQ(coloured, 0) << "page " << page;
+    EXPECT_EQ(marksOf(sample, kA4, page, true).size(), marksOf(sample, kA4, page, false).size());
+  }
 }
 
 }  // namespace

@@ -140,13 +140,16 @@ TEST_F(SheetPainter, ALongLineWithLongNamesStillHasItsCautionsAndTwoPages) {
 
 TEST_F(SheetPainter, DoubtsThatFirstPageHasNoRoomForStandOnTheSecond) {
   auto sample = testing::sheetSample();
-  for (int i = 0; i < 4; ++i) {
+  for (int i = 0; i < 9; ++i) {
     sample.interpretation.doubts.push_back(
-        {"late pick", "shot 4", "Pick " + std::to_string(i) + " is late", "", "a second look", 3, i, 0, 0.0});
+        {"late pick", "shot 4", "Pick " + std::to_string(i) + " is late", "", "a second look", -1, -1, 0, 0.0});
   }
   write(sample);
-  EXPECT_FALSE(holds(pageText(1), "Pick 3 is late"));
-  EXPECT_TRUE(holds(pageText(2), "Pick 3 is late."));
+  EXPECT_FALSE(holds(pageText(1), "Pick 0 is late"));
+  const std::string second = pageText(2);
+  EXPECT_TRUE(holds(second, "Pick 0 is late. To settle it: a second look.")) << second;
+  EXPECT_TRUE(holds(second, " more of this kind (late pick).")) << second;
+  EXPECT_FALSE(holds(second, "Pick 8 is late.")) << second;
 }
 
 TEST_F(SheetPainter, AnEmptySurveyPrintsThatNothingIsDetermined) {

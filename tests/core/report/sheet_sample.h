@@ -245,4 +245,39 @@ inline SheetSample sheetSample(const SheetSampleSize& size = {}) {
   return sample;
 }
 
+/// The same with everything that makes a sheet full: 120 geophones, 31 shots, 6 layers, 10 boreholes with long names,
+/// 40 doubts of 5 kinds, solved trigger delays, an inversion that has not settled, accented and right-to-left names.
+inline SheetSample fullSheetSample() {
+  SheetSample sample = sheetSample({120, 31, 6, 10});
+  sample.survey.info.client = "Société d’aménagement hydraulique de l’Œuvre-Haute";
+  sample.survey.info.site = "محطة المياه الجديدة";
+  sample.survey.info.crew = "Þóra Ægisdóttir, Zbigniew Żółć, Ingeborg Straßenburger, Nuño Ibáñez, Łucja Wróbel";
+  sample.survey.info.title = "Entwässerungsgraben Hauptstraße: Tiefe des Felses zwischen Brücke und Pumpwerk";
+  for (Borehole& hole : sample.survey.boreholes) {
+    hole.name = "Observation well " + hole.name + " by the mill";
+  }
+  Interpretation& i = sample.interpretation;
+  i.section.converged = false;
+  i.section.triggerDelays.assign(31, Estimate::none("not solved for"));
+  for (const std::size_t shot : {3U, 17U, 28U}) {
+    i.section.triggerDelays[shot] = Estimate::normal(-0.0031, 0.0002);
+  }
+  for (int d = 0; d < 40; ++d) {
+    const std::string number = std::to_string(d);
+    i.doubts.push_back(
+        {"kind " + std::to_string(d % 5), "trace " + number,
+         "The first break of shot 4 at 12.0 m, trace " + number + " is later than the section can explain",
+         "Residual 2.5 ms against a stated sigma of 0.28 ms", "Look at the trace and its neighbours again", -1, -1, 0,
+         0.0});
+  }
+  return sample;
+}
+
+/// A survey of which nobody told anything, and in which nothing could be determined.
+inline SheetSample emptySheetSample() {
+  SheetSample sample;
+  sample.interpretation.section.reason = "there are no picks; pick first breaks";
+  return sample;
+}
+
 }  // namespace strikeplate::testing

@@ -137,9 +137,10 @@ TEST(Sheet, SecondOpinionsAreSummedUpByRoute) {
                                     {"intercept time", 2, 2, 5.0, Estimate::none("no branch"), ""}};
   const SheetContent sheet = sheetContent(sample.survey, sample.interpretation, {});
   ASSERT_EQ(sheet.opinions.rows.size(), 1U);
-  // Mean of 5.5, 6.5 and 9.0 is 7.0, standard deviation 1.803; minus 5, 6 and 4 the mean is 2.0; the second touches
-  // 6.0 + 0.49 from above at 6.48.
-  const std::vector<std::string> expected = {"intercept time", "2", "3 of 4", "7.0 m", "1.8 m", "2.0 m", "2 of 3"};
+  // The middle of 5.5, 6.5 and 9.0 is 6.5; minus 5, 6 and 4 they are 0.5, 0.5 and 5.0, the middle 0.5; the second
+  // touches 6.0 + 0.49 from above at 6.48.
+  const std::vector<std::string> expected = {"intercept time", "2",     "3 of 4", "5.5 to 9.0 m",
+                                             "6.5 m",          "0.5 m", "2 of 3"};
   EXPECT_EQ(sheet.opinions.rows[0], expected);
 }
 
@@ -162,6 +163,8 @@ TEST(Sheet, ResidualsAreThoseOfEachShotAndOfAll) {
     shot.traces.push_back({g, TraceState::Live, "", Pick{0.01, 1e-3, 0, PickOrigin::Imported}});
   }
   sample.survey.shots = {shot};
+  sample.interpretation.times.geophones = sample.survey.geophones;
+  sample.interpretation.times.shots = {shot.point};
   sample.interpretation.times.arrivals = {
       {0, 0, 0, 0.010, 1e-3, 1, false}, {0, 1, 1, 0.021, 1e-3, 2, false}, {0, 2, 2, 0.030, 1e-3, 2, false}};
   sample.interpretation.section.predicted = {0.009, 0.020, 0.032};
@@ -193,7 +196,7 @@ TEST(Sheet, EveryRowHasAsManyCellsAsThereAreColumns) {
   const auto sample = testing::sheetSample({120, 31, 6, 10});
   const SheetContent sheet = sheetContent(sample.survey, sample.interpretation, {});
   for (const SheetTable* table :
-       {&sheet.layers, &sheet.boreholes, &sheet.opinions, &sheet.reciprocals, &sheet.shots, &sheet.doubts}) {
+       {&sheet.layers, &sheet.boreholes, &sheet.opinions, &sheet.reciprocals, &sheet.shots}) {
     EXPECT_FALSE(table->rows.empty()) << table->title;
     for (const auto& row : table->rows) {
       EXPECT_EQ(row.size(), table->columns.size()) << table->title;
@@ -221,8 +224,9 @@ TEST(Sheet, MethodsNameTheirSourcesAndOnlyWhatWasUsed) {
   auto sample = threeGeophones();
   sample.interpretation.opinions = {{"plus-minus", 2, 0, 0.0, Estimate::normal(5.5, 0.5), ""}};
   const SheetContent sheet = sheetContent(sample.survey, sample.interpretation, {});
-  ASSERT_EQ(sheet.methods.size(), 2U);
-  EXPECT_TRUE(contains(sheet.methods[1], "Hagedoorn (1959)"));
+  ASSERT_EQ(sheet.methods.size(), 3U);
+  EXPECT_TRUE(contains(sheet.methods[1], "Soske (1959)"));
+  EXPECT_TRUE(contains(sheet.methods[2], "Hagedoorn (1959)"));
 }
 
 }  // namespace

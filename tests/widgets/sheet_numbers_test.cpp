@@ -1,0 +1,152 @@
+// The numbers on paper are those of the tables and of the interpretation: read back from the PDF and compared.
+#include <array>
+#include <cmath>
+#include <cstdio>
+#include <filesystem>
+#include <memory>
+#include <regex>
+#include <sstream>
+
+#include <gtest/gtest.h>
+
+#include "core/report/csv_out.h"
+#include "tests/core/report/sheet_sample.h"
+#include "widgets/sheet_painter.h"
+
+namespace strikeplate {
+namespace {
+
+// Words of both pages in the order of painting, with single blanks between them.
+std::string textOfPdf(const testing::SheetSample& sample) {
+  const std::string path = (std::filesystem::path(::testing::TempDir()) / "sheet_numbers.pdf").string();
+  EXPECT_TRUE(writeSheetPdf(QString::fromStdString(path), sample.survey, sample.interpretation, {}).ok());
+  const std::string command = "pdftotext -raw '" + path + "' -";
+  const std::unique_ptr<FILE, int (*)(FILE*)> pipe(::popen(command.c_str(), "r"), &::pclose);
+  std::string text;
+  std::array<char, 4096> buffer{};
+  for (std::size_t n = 1; pipe && n > 0;) {
+    n = std::fread(buffer.data(), 1, buffer.size(), pipe.get());
+    text.append(buffer.data(), n);
+  }
+  std::filesystem::remove(path);
+  return std::regex_replace(text, std::regex("(\\s|\xC2\xA0)+"), " ");
+}
+
+std::vector<std::vector<std::string>> rowsOf(const std::string& csv) {
+  std::vector<std::vector<std::string>> rows;
+  std::istringstream lines(csv);
+  for (std::string line; std::getline(lines, line);) {
+    std::istringstream cells(line);
+    rows.emplace_back();
+    for (std::string cell; std::getline(cells, cell, ',');) {
+      rows.back().push_back(cell);
+    }
+  }
+  rows.erase(rows.begin());
+  return rows;
+}
+
+// What one row of the layer table says: numbers in the user's unit.
+struct PaperLayer {
+  double velocity = 0.0, low = 0.0, high = 0.0;
+  double least = 0.0, leastLow = 0.0, leastHigh = 0.0, leastAt = 0.0;
+  double mean = 0.0, most = 0.0, mostAt = 0.0;
+};
+
+std::vector<PaperLayer> layersOnPaper(const std::string& text, const std::string& unit) {
+  const std::string n = "(-?[0-9.]+)";
+  const std::string depth = n + " " + unit + " \\(" + n + " to " + n + " " + unit + "\\)";
+  const std::regex row("[2-6] " + n + " " + unit + "/s " + n + " to " + n + " " + unit + "/s " + depth + " at " + n +
+                       " " + unit + " " + depth + " " + depth + " at " + n + " " + unit);
+  std::vector<PaperLayer> layers;
+  for (std::sregex_iterator m(text.begin(), text.end(), row), end; m != end; ++m) {
+    const auto number = [&](std::size_t group) { return std::stod((*m)[group].str()); };
+    layers.push_back({number(1), number(2), number(3), number(4), number(5), number(6), number(7), number(8),
+                      number(11), number(14)});
+  }
+  return layers;
+}
+
+void compareWithTables(bool feet) {
+  auto sample = testing::sheetSample();
+  sample.survey.settings.feet = feet;
+  const double metre = feet ? 1.0 / 0.3048 : 1.0;
+  const std::vector<PaperLayer> paper = layersOnPaper(textOfPdf(sample), feet ? "ft" : "m");
+  const auto layerRows = rowsOf(layersCsv(sample.interpretation));
+  const auto depthRows = rowsOf(depthsCsv(sample.survey, sample.interpretation));
+  ASSERT_EQ(paper.size(), 2U);
+  for (std::size_t i = 0; i < paper.size(); ++i) {
+    const std::vector<std::string>& row = layerRows[i + 1];  // the first layer has no depth
+    // Velocities on paper are whole, and to 10 above 1000.
+    EXPECT_NEAR(paper[i].velocity, std::stod(row[1]) * metre, 5.01);
+    EXPECT_NEAR(paper[i].low, std::stod(row[3]) * metre, 5.01);
+    EXPECT_NEAR(paper[i].high, std::stod(row[4]) * metre, 5.01);
+    double least = 1e9, leastLow = 0.0, leastHigh = 0.0, leastAt = 0.0, most = 0.0, mostAt = 0.0, sum = 0.0;
+    int count = 0;
+    for (const auto& at : depthRows) {
+      if (at[1] != row[0]) {
+        continue;
+      }
+      const double depth = std::stod(at[2]);
+      if (depth < least) {
+        least = depth;
+        leastLow = std::stod(at[4]);
+        leastHigh = std::stod(at[5]);
+        leastAt = std::stod(at[0]);
+      }
+      if (depth > most) {
+        most = depth;
+        mostAt = std::stod(at[0]);
+      }
+      sum += depth;
+      ++count;
+    }
+    const double half = feet ? 0.0501 : 0.00501;  // one decimal of a foot, two of a metre
+    EXPECT_NEAR(paper[i].least, least * metre, half);
+    EXPECT_NEAR(paper[i].leastLow, leastLow * metre, half);
+    EXPECT_NEAR(paper[i].leastHigh, leastHigh * metre, half);
+    EXPECT_NEAR(paper[i].leastAt, leastAt * metre, 0.0501);
+    EXPECT_NEAR(paper[i].mean, sum / count * metre, half);
+    EXPECT_NEAR(paper[i].most, most * metre, half);
+    EXPECT_NEAR(paper[i].mostAt, mostAt * metre, 0.0501);
+    const Estimate& velocity = sample.interpretation.section.velocities[i + 1];
+    EXPECT_NEAR(paper[i].velocity, velocity.value * metre, 5.01) << "and those of the interpretation";
+    const Estimate there = sample.interpretation.section.depthAt(static_cast<int>(i) + 2, leastAt);
+    EXPECT_NEAR(paper[i].least, there.value * metre, half);
+  }
+}
+
+TEST(SheetNumbers, LayersOnPaperAreThoseOfTheTablesInMetres) {
+  compareWithTables(false);
+}
+
+TEST(SheetNumbers, LayersOnPaperAreThoseOfTheTablesInFeet) {
+  compareWithTables(true);
+}
+
+TEST(SheetNumbers, ReciprocalTimesAndTriggerDelaysOnPaperAreThoseOfTheInterpretation) {
+  auto sample = testing::sheetSample();
+  auto& delays = sample.interpretation.section.triggerDelays;
+  delays.assign(7, Estimate::none("not solved for"));
+  delays[4] = Estimate::normal(-0.00312, 0.0002);
+  const std::string text = textOfPdf(sample);
+  const std::regex row("([0-9]+) and ([0-9]+) ([0-9.]+) ms ([0-9.]+) ms (-?[0-9.]+) ms ([0-9.]+) ms (yes|no)");
+  int found = 0;
+  for (std::sregex_iterator m(text.begin(), text.end(), row), end; m != end; ++m) {
+    const int a = std::stoi((*m)[1].str()) - 1;
+    const int b = std::stoi((*m)[2].str()) - 1;
+    for (const ReciprocalPair& pair : sample.interpretation.reciprocals) {
+      if (pair.shotA == a && pair.shotB == b) {
+        EXPECT_NEAR(std::stod((*m)[3].str()), 1e3 * pair.timeAB, 0.0501);
+        EXPECT_NEAR(std::stod((*m)[4].str()), 1e3 * pair.timeBA, 0.0501);
+        EXPECT_NEAR(std::stod((*m)[5].str()), 1e3 * pair.difference(), 0.00501);
+        ++found;
+      }
+    }
+  }
+  EXPECT_GE(found, 4);
+  EXPECT_NE(text.find(": -3.12 ms (-3.51 ms to -2.73 ms)"), std::string::npos) << text;
+}
+
+}  // namespace
+}  // namespace strikeplate
