@@ -20,8 +20,8 @@ AnswerLine::AnswerLine(QWidget* parent) : QWidget(parent), answer_(new QLabel(th
   hint_->setMinimumWidth(0);
   answer_->setSizePolicy(QSizePolicy::Ignored, QSizePolicy::Preferred);
   hint_->setSizePolicy(QSizePolicy::Ignored, QSizePolicy::Preferred);
-  layout->addWidget(answer_, 3);
-  layout->addWidget(hint_, 2);
+  layout->addWidget(answer_, 2);
+  layout->addWidget(hint_, 3);
 }
 
 void AnswerLine::setAnswer(const QString& sentence) {
@@ -30,7 +30,8 @@ void AnswerLine::setAnswer(const QString& sentence) {
 }
 
 void AnswerLine::setHint(const QString& text) {
-  hint_->setText(text);
+  hint_->setText(hint_->fontMetrics().elidedText(text, Qt::ElideRight, hint_->width()));
+  hint_->setToolTip(text);
 }
 
 void AnswerLine::setLook(const Look& look) {

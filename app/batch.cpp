@@ -6,6 +6,7 @@
 
 #include <QString>
 
+#include "app/versions.h"
 #include "core/base/units.h"
 #include "core/report/csv_out.h"
 #include "core/report/section_dxf.h"
@@ -69,6 +70,7 @@ class Run {
     writeTo(options_.sheet, [&](const std::string& path) {
       SheetOptions sheet;
       sheet.edits = static_cast<int>(edits_.size());
+      sheet.builtOn = libraryVersions();
       if (!options_.geometry.empty()) {
         sheet.inputFiles.push_back(options_.geometry);
       }

@@ -3,10 +3,12 @@
 #include <vector>
 
 #include <QMainWindow>
+#include <QPageSize>
 #include <QStringList>
 
 #include "app/desk.h"
 #include "app/job.h"
+#include "core/report/sheet.h"
 #include "core/survey/load.h"
 #include "widgets/view.h"
 
@@ -67,8 +69,9 @@ class MainWindow : public QMainWindow {
   void importPicks();
   void loadGeometry();
   void exportCsv();
-  void printSheet();
-  void saveSheet();
+  void makeSheet();
+  void printSheet(const SheetOptions& options, QPageSize::PageSizeId paper);
+  void saveSheet(const SheetOptions& options, QPageSize::PageSizeId paper);
   void editInfo();
   void editBoreholes();
   void editGeometry();

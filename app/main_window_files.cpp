@@ -2,12 +2,14 @@
 #include <QFileDialog>
 #include <QFileInfo>
 #include <QPageLayout>
-#include <QPrintDialog>
+#include <QPrintPreviewDialog>
 #include <QPrinter>
 #include <QSettings>
 
 #include "app/answer_line.h"
 #include "app/main_window.h"
+#include "app/sheet_dialog.h"
+#include "app/versions.h"
 #include "core/report/csv_out.h"
 #include "core/report/section_dxf.h"
 #include "core/survey/geometry_edit.h"
@@ -109,30 +111,41 @@ void MainWindow::exportCsv() {
   }
 }
 
-void MainWindow::printSheet() {
+void MainWindow::makeSheet() {
   if (!desk_.scene().interpretation) {
     say(tr("Nothing to print"), tr("There is no interpretation yet; open records and pick them first."));
-    return;
-  }
-  QPrinter printer(QPrinter::HighResolution);
-  printer.setDocName(tr("Refraction interpretation"));
-  printer.setPageMargins(QMarginsF(0, 0, 0, 0), QPageLayout::Millimeter);
-  QPrintDialog dialog(&printer, this);
-  if (dialog.exec() != QDialog::Accepted) {
     return;
   }
   SheetOptions options;
   options.edits = desk_.editCount();
-  if (const Outcome printed = paintSheet(printer, desk_.survey(), *desk_.scene().interpretation, options); !printed) {
+  options.builtOn = libraryVersions();
+  SheetDialog dialog(sheetContent(desk_.survey(), *desk_.scene().interpretation, options), this);
+  const int way = dialog.exec();
+  dialog.addTo(options);
+  if (way == SheetDialog::Print) {
+    printSheet(options, dialog.paper());
+  } else if (way == SheetDialog::Pdf) {
+    saveSheet(options, dialog.paper());
+  }
+}
+
+void MainWindow::printSheet(const SheetOptions& options, QPageSize::PageSizeId paper) {
+  QPrinter printer(QPrinter::HighResolution);
+  printer.setDocName(tr("Refraction interpretation"));
+  printer.setPageSize(QPageSize(paper));
+  printer.setPageMargins(QMarginsF(0, 0, 0, 0), QPageLayout::Millimeter);
+  QPrintPreviewDialog preview(&printer, this);
+  Outcome printed = Done{};
+  connect(&preview, &QPrintPreviewDialog::paintRequested, this, [&](QPrinter* device) {
+    printed = paintSheet(*device, desk_.survey(), *desk_.scene().interpretation, options);
+  });
+  preview.exec();
+  if (!printed) {
     say(tr("Not printed"), QString::fromStdString(printed.message()));
   }
 }
 
-void MainWindow::saveSheet() {
-  if (!desk_.scene().interpretation) {
-    say(tr("Nothing to print"), tr("There is no interpretation yet; open records and pick them first."));
-    return;
-  }
+void MainWindow::saveSheet(const SheetOptions& options, QPageSize::PageSizeId paper) {
   QString path = QFileDialog::getSaveFileName(this, tr("Save the sheet as PDF"),
                                               QSettings().value("folder").toString(), tr("PDF (*.pdf)"));
   if (path.isEmpty()) {
@@ -141,9 +154,8 @@ void MainWindow::saveSheet() {
   if (!path.endsWith(".pdf", Qt::CaseInsensitive)) {
     path += ".pdf";
   }
-  SheetOptions options;
-  options.edits = desk_.editCount();
-  if (const Outcome written = writeSheetPdf(path, desk_.survey(), *desk_.scene().interpretation, options); !written) {
+  if (const Outcome written = writeSheetPdf(path, desk_.survey(), *desk_.scene().interpretation, options, paper);
+      !written) {
     say(tr("Not written"), QString::fromStdString(written.message()));
   } else {
     answerLine_->setHint(tr("Sheet written to %1").arg(path));

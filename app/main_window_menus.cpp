@@ -40,8 +40,7 @@ void MainWindow::buildFileMenu() {
   add(menu, tr("Lay a &geometry table over the headers..."), {}, this, &MainWindow::loadGeometry);
   add(menu, tr("Read &picks from a table..."), {}, this, &MainWindow::importPicks);
   menu->addSeparator();
-  add(menu, tr("&Print sheet..."), QKeySequence::Print, this, &MainWindow::printSheet);
-  add(menu, tr("Save sheet as P&DF..."), QKeySequence(tr("Ctrl+Shift+P")), this, &MainWindow::saveSheet);
+  add(menu, tr("&Print the sheet, or save it as PDF..."), QKeySequence::Print, this, &MainWindow::makeSheet);
   add(menu, tr("Write &tables and section (CSV, DXF)..."), {}, this, &MainWindow::exportCsv);
   menu->addSeparator();
   add(menu, tr("Open the &demo line"), {}, this, &MainWindow::openDemo);

@@ -8,15 +8,22 @@
 
 namespace strikeplate {
 
-std::string versionText(const std::string& program) {
+std::vector<std::string> libraryVersions() {
   const auto triple = [](int a, int b, int c) {
     return std::to_string(a) + "." + std::to_string(b) + "." + std::to_string(c);
   };
-  return program + " " + STRIKEPLATE_VERSION + "\n" + "Qt " + qVersion() + "\n" + "QCustomPlot " +
-         QCUSTOMPLOT_VERSION_STR + "\n" + "Eigen " +
-         triple(EIGEN_WORLD_VERSION, EIGEN_MAJOR_VERSION, EIGEN_MINOR_VERSION) + "\n" + "Boost " +
-         triple(BOOST_VERSION / 100000, BOOST_VERSION / 100 % 1000, BOOST_VERSION % 100) + "\n" + "SQLite " +
-         sqlite3_libversion() + "\n";
+  return {std::string("Qt ") + qVersion(), std::string("QCustomPlot ") + QCUSTOMPLOT_VERSION_STR,
+          "Eigen " + triple(EIGEN_WORLD_VERSION, EIGEN_MAJOR_VERSION, EIGEN_MINOR_VERSION),
+          "Boost " + triple(BOOST_VERSION / 100000, BOOST_VERSION / 100 % 1000, BOOST_VERSION % 100),
+          std::string("SQLite ") + sqlite3_libversion()};
+}
+
+std::string versionText(const std::string& program) {
+  std::string text = program + " " + STRIKEPLATE_VERSION + "\n";
+  for (const std::string& library : libraryVersions()) {
+    text += library + "\n";
+  }
+  return text;
 }
 
 }  // namespace strikeplate
