@@ -4,6 +4,7 @@
 #include <QApplication>
 #include <QCommandLineParser>
 #include <QFileInfo>
+#include <QIcon>
 #include <QTimer>
 
 #include "app/main_window.h"
@@ -21,6 +22,7 @@ int main(int argc, char** argv) {
   QApplication::setOrganizationName("strikeplate");
   QApplication::setApplicationDisplayName("Strikeplate");
   QApplication::setApplicationVersion(STRIKEPLATE_VERSION);
+  QApplication::setWindowIcon(QIcon(":/strikeplate.svg"));
   QCommandLineParser parser;
   parser.setApplicationDescription("Workstation for near-surface seismic refraction.");
   parser.addHelpOption();

@@ -2,6 +2,8 @@
 
 #include <algorithm>
 #include <cmath>
+#include <limits>
+#include <optional>
 
 #include <QCoreApplication>
 #include <qcustomplot.h>
@@ -221,33 +223,57 @@ void TravelTimePicture::label(const Branch& branch, double x, double time) {
   const auto rectOf = [](const QCPItemText* item) {
     return QRectF(item->topLeft->pixelPosition(), item->bottomRight->pixelPosition());
   };
-  // Beside the middle of its line, on the side where nothing else has been written.
-  for (const double dy : {-22.0, 22.0, -40.0, 40.0, -58.0}) {
-    QRectF place(QPointF(at.x() - 0.5 * size.width(), at.y() + dy - 0.5 * size.height()), size);
-    place.moveLeft(
-        std::clamp(place.left(), inside.left() + 2, std::max(inside.left() + 2, inside.right() - size.width())));
-    const bool free = inside.contains(place) && std::none_of(labels_.begin(), labels_.end(), [&](QCPItemText* other) {
-                        return rectOf(other).intersects(place);
-                      });
-    if (!free) {
-      continue;
+  // Beside the middle of its line, where it covers no other text and the fewest picks.
+  std::optional<QRectF> best;
+  int fewest = std::numeric_limits<int>::max();
+  for (const double dy : {-22.0, 22.0, -40.0, 40.0, -58.0, 58.0}) {
+    for (const double dx : {0.0, -0.55, 0.55}) {
+      QRectF place(QPointF(at.x() + (dx - 0.5) * size.width(), at.y() + dy - 0.5 * size.height()), size);
+      place.moveLeft(
+          std::clamp(place.left(), inside.left() + 2, std::max(inside.left() + 2, inside.right() - size.width())));
+      const bool free = inside.contains(place) && std::none_of(labels_.begin(), labels_.end(), [&](auto* other) {
+                          return rectOf(other).intersects(place);
+                        });
+      const int covered = free ? picksUnder(place) : fewest;
+      if (covered < fewest) {
+        fewest = covered;
+        best = place;
+      }
     }
-    auto* item = new QCPItemText(&plot_);
-    item->setText(text);
-    item->setFont(plot_.font());
-    item->setColor(look_.ink);
-    QColor behind = look_.paper;
-    behind.setAlpha(200);
-    item->setBrush(behind);
-    item->setPadding(QMargins(2, 1, 2, 1));
-    item->setPositionAlignment(Qt::AlignTop | Qt::AlignLeft);
-    item->setClipToAxisRect(true);
-    item->position->setType(QCPItemPosition::ptAbsolute);
-    item->position->setCoords(place.topLeft());
-    item->setSelectable(false);
-    labels_.push_back(item);
+  }
+  if (!best) {
     return;
   }
+  auto* item = new QCPItemText(&plot_);
+  item->setText(text);
+  item->setFont(plot_.font());
+  item->setColor(look_.ink);
+  QColor behind = look_.paper;
+  behind.setAlpha(200);
+  item->setBrush(behind);
+  item->setPadding(QMargins(2, 1, 2, 1));
+  item->setPositionAlignment(Qt::AlignTop | Qt::AlignLeft);
+  item->setClipToAxisRect(true);
+  item->position->setType(QCPItemPosition::ptAbsolute);
+  item->position->setCoords(best->topLeft());
+  item->setSelectable(false);
+  labels_.push_back(item);
+}
+
+int TravelTimePicture::picksUnder(const QRectF& place) const {
+  const QRectF room = place.adjusted(-5, -5, 5, 5);
+  int count = 0;
+  const auto& arrivals = scene_.interpretation->times.arrivals;
+  for (std::size_t i = 0; i < arrivals.size(); ++i) {
+    if (isSelected(arrivals[i])) {
+      const double time = shownTime(*scene_.interpretation, static_cast<int>(i), display_);
+      count +=
+          room.contains(plot_.xAxis->coordToPixel(positionOf(arrivals[i].geophone)), plot_.yAxis->coordToPixel(time))
+              ? 1
+              : 0;
+    }
+  }
+  return count;
 }
 
 void TravelTimePicture::drawMarks() {

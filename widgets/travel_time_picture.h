@@ -3,6 +3,8 @@
 #include <set>
 #include <vector>
 
+#include <QRectF>
+
 #include "widgets/branch_drag.h"
 #include "widgets/look.h"
 #include "widgets/scene.h"
@@ -42,6 +44,7 @@ class TravelTimePicture {
   void drawMarks();
   void drawEnds();
   void label(const Branch& branch, double x, double time);
+  [[nodiscard]] int picksUnder(const QRectF& place) const;
   void setTimeAxis();
   [[nodiscard]] double positionOf(int geophone) const;
   [[nodiscard]] bool isSelected(const Arrival& arrival) const;
