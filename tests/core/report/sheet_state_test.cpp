@@ -1,4 +1,5 @@
 // What page 1 must say first, what the section moved by itself, how far the line sees, and the input files.
+#include <algorithm>
 #include <cmath>
 #include <filesystem>
 #include <fstream>
@@ -109,7 +110,7 @@ TEST(SheetFiles, AreNamedOnceWithoutFolders) {
   auto sample = testing::sheetSample();
   auto record = std::make_shared<ShotRecord>(*sample.survey.records[0]);
   record->file = "C:\\Users\\someone\\line7_1.dat";
-  sample.survey.records = {record, record};
+  std::fill(sample.survey.records.begin(), sample.survey.records.end(), record);
   SheetOptions options;
   options.inputFiles = {"/home/someone/places.csv"};
   const SheetContent sheet = sheetContent(sample.survey, sample.interpretation, options);
