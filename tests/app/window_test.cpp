@@ -5,7 +5,7 @@
 #include <QDir>
 #include <QElapsedTimer>
 #include <QSettings>
-#include <QStandardPaths>
+#include <QTemporaryDir>
 #include <QTest>
 #include <gtest/gtest.h>
 #include <qcustomplot.h>
@@ -21,11 +21,14 @@ namespace {
 /// The window with the demo line loaded, picked and interpreted.
 class Window : public ::testing::Test {
  protected:
+  // Every process has a home of its own, so that tests can run side by side.
   static void SetUpTestSuite() {
-    QStandardPaths::setTestModeEnabled(true);
-    QSettings::setDefaultFormat(QSettings::IniFormat);
-    QSettings::setPath(QSettings::IniFormat, QSettings::UserScope, QDir::tempPath() + "/strikeplate-window-test");
+    home = std::make_unique<QTemporaryDir>();
+    qputenv("HOME", home->path().toUtf8());
+    qputenv("XDG_DATA_HOME", home->filePath("data").toUtf8());
+    qputenv("XDG_CONFIG_HOME", home->filePath("config").toUtf8());
   }
+  static void TearDownTestSuite() { home.reset(); }
 
   void SetUp() override {
     window = std::make_unique<MainWindow>();
@@ -34,7 +37,7 @@ class Window : public ::testing::Test {
     if (demo.isEmpty()) {
       window->openDemo();
       settle();
-      demo = QDir::tempPath() + "/strikeplate-window-test-demo.splate";
+      demo = home->filePath("demo.splate");
       QFile::remove(demo);
       ASSERT_TRUE(QFile::copy(window->desk().path(), demo));
     } else {
@@ -69,10 +72,11 @@ class Window : public ::testing::Test {
     return {};
   }
 
-  static QString copy() { return QDir::tempPath() + "/strikeplate-window-test-copy.splate"; }
+  static QString copy() { return home->filePath("copy.splate"); }
 
   std::unique_ptr<MainWindow> window;
-  inline static QString demo;  // picked once for all tests
+  inline static QString demo;  // picked once for all tests of the process
+  inline static std::unique_ptr<QTemporaryDir> home;
 };
 
 TEST_F(Window, ABranchEndDraggedMovesEveryPaneBeforeTheButtonIsLetGo) {
@@ -153,7 +157,7 @@ TEST_F(Window, TheSurveyIsOnDiskAfterEveryEditAndOpensWithItsHistory) {
 }
 
 TEST_F(Window, TheSheetOfWhatIsShownIsPrinted) {
-  const QString path = QDir::tempPath() + "/strikeplate-window-test.pdf";
+  const QString path = home->filePath("sheet.pdf");
   SheetOptions options;
   options.edits = window->desk().editCount();
   ASSERT_TRUE(writeSheetPdf(path, window->desk().survey(), *scene().interpretation, options));

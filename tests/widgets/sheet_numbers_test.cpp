@@ -2,11 +2,11 @@
 #include <array>
 #include <cmath>
 #include <cstdio>
-#include <filesystem>
 #include <memory>
 #include <regex>
 #include <sstream>
 
+#include <QTemporaryDir>
 #include <gtest/gtest.h>
 
 #include "core/report/csv_out.h"
@@ -18,7 +18,8 @@ namespace {
 
 // Words of both pages in the order of painting, with single blanks between them.
 std::string textOfPdf(const testing::SheetSample& sample) {
-  const std::string path = (std::filesystem::path(::testing::TempDir()) / "sheet_numbers.pdf").string();
+  const QTemporaryDir folder;  // tests run side by side
+  const std::string path = folder.filePath("sheet.pdf").toStdString();
   EXPECT_TRUE(writeSheetPdf(QString::fromStdString(path), sample.survey, sample.interpretation, {}).ok());
   const std::string command = "pdftotext -raw '" + path + "' -";
   const std::unique_ptr<FILE, int (*)(FILE*)> pipe(::popen(command.c_str(), "r"), &::pclose);
@@ -28,7 +29,6 @@ std::string textOfPdf(const testing::SheetSample& sample) {
     n = std::fread(buffer.data(), 1, buffer.size(), pipe.get());
     text.append(buffer.data(), n);
   }
-  std::filesystem::remove(path);
   return std::regex_replace(text, std::regex("(\\s|\xC2\xA0)+"), " ");
 }
 
