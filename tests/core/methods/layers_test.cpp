@@ -48,7 +48,7 @@ TEST(FlatLayers, FourLayersComeBackFromInterceptsAndFromCrossovers) {
   EXPECT_NEAR((*again)[2], 15.0, 1e-3);
 }
 
-// Reference W11, three layers of an open course: its arithmetic gives 14.6 m, the formula 11.82 m.
+// Reference W11, three layers of open worked examples: its arithmetic gives 14.6 m, the formula 11.82 m.
 TEST(FlatLayers, TheSecondThicknessIsNotTheOneMisprinted) {
   const auto h = thicknessesFromIntercepts(std::vector<double>{1.0 / 350, 1.0 / 1650, 1.0 / 4200},
                                            std::vector<double>{6.1e-3, 19.4e-3});

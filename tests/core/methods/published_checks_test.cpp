@@ -1,5 +1,5 @@
 // Worked examples and tables met in print, by their number in the project's reference (W1 to W32), where no other
-// test has them. "Open course": ESS 314 Geophysics, University of Washington.
+// test has them. "Open examples": University of Washington, Earth and Space Sciences, open refraction examples.
 #include <cmath>
 #include <vector>
 
@@ -30,7 +30,7 @@ TEST(PublishedChecks, W3OpenCourse) {
   EXPECT_NEAR(byIntercept(12e-3, 350, 1500), 2.16, 0.005);
 }
 
-// The course prints 3.3 m; its own numbers give 3.167 m.
+// The source prints 3.3 m; its own numbers give 3.167 m.
 TEST(PublishedChecks, W4OpenCourseDepthIsNotTheOnePrinted) {
   const double h = byIntercept(15e-3, 1.0 / 2.5e-3, 1.0 / 0.8e-3);
   EXPECT_NEAR(h, 3.167, 5e-4);
@@ -38,7 +38,7 @@ TEST(PublishedChecks, W4OpenCourseDepthIsNotTheOnePrinted) {
   EXPECT_NEAR(std::asin(400.0 / 1250.0) / kDegree, 18.663, 5e-4);
 }
 
-// Questions of the open course without a printed answer; own values.
+// Questions of the open examples without a printed answer; own values.
 TEST(PublishedChecks, W5W6OpenCourseQuestions) {
   EXPECT_NEAR(byIntercept(46.577e-3, 2000, 5500), 50.0, 1e-3);
   EXPECT_NEAR(byCrossover(146.39, 2000, 5500), 50.0, 2e-3);
@@ -51,7 +51,7 @@ TEST(PublishedChecks, W9KeareyAndBrooks) {
   EXPECT_NEAR(byCrossover(500, 3000, 5000), 125.0, 1e-9);
 }
 
-// Mohorovicic (1909) as told in the open course: 54 km, head wave seen beyond about 200 km.
+// Mohorovicic (1909) as told in the open examples: 54 km, head wave seen beyond about 200 km.
 TEST(PublishedChecks, W10Mohorovicic) {
   EXPECT_NEAR(byCritical(103e3, 5600, 8100), 54e3, 500);
   EXPECT_NEAR(byCrossover(253e3, 5600, 8100), 54e3, 500);
@@ -66,7 +66,7 @@ TEST(PublishedChecks, W16MeanSlownessUnderDip) {
 }
 
 // A slow layer under a fast one leaves no branch: the depth read is too great (own values; one summary table of the
-// open course has it the wrong way round).
+// open example has it the wrong way round).
 TEST(PublishedChecks, W24ASlowLayerMakesTheDepthTooGreat) {
   const auto c = [](double v, double under) { return std::sqrt(1.0 / (v * v) - 1.0 / (under * under)); };
   struct Row {
@@ -91,7 +91,7 @@ TEST(PublishedChecks, W8IsNotHalfTheTimeTimesTheVelocity) {
   EXPECT_NEAR(byIntercept(40e-3, 300, 1500), 6.124, 5e-4);
 }
 
-// Open course question; own value.
+// Open question; own value.
 TEST(PublishedChecks, W31SmallDipUnderAKnownVelocity) {
   const DippingPair pair = dippingPair(1650.0, 1.0 / 0.255e-3, 1.0 / 0.238e-3);
   EXPECT_NEAR(pair.dip / kDegree, 0.88, 0.006);
@@ -151,7 +151,7 @@ TEST(PublishedChecks, W15BothReadingsOfTheDamsite) {
   EXPECT_NEAR(three.depths[1].value, 28.3, 0.06);
 }
 
-// Reversed line of the open course, branches 1 to 4 by their velocities (m/s); dips own, no printed answer.
+// Reversed line of the open examples, branches 1 to 4 by their velocities (m/s); dips own, no printed answer.
 // Intercepts do not enter velocities and dips.
 TEST(PublishedChecks, W17VelocitiesAndDipsOfTheOpenCoursesReversedLine) {
   const DippingPlanes planes = dippingPlanes(

@@ -39,7 +39,7 @@ TEST(TwoLayers, ReadingsInFeetComeOutInMetres) {
   EXPECT_NEAR(depthFromIntercept(exact(0.00458), exact(v1), exact(v2)).value, 3.14, 0.01);
 }
 
-// Open worked examples of the University of Washington (ESS 314, refraction), recomputed.
+// Open worked examples of the University of Washington (open refraction examples), recomputed.
 TEST(TwoLayers, WorkedExamplesComeBack) {
   EXPECT_NEAR(depthFromIntercept(exact(29.047e-3), exact(800), exact(3200)).value, 12.0, 1e-3);
   EXPECT_NEAR(depthFromCrossover(exact(30.984), exact(800), exact(3200)).value, 12.0, 1e-3);
