@@ -43,8 +43,9 @@ void paintAxes(SheetPaper& paper, const SheetFrame& frame, const SheetAxes& axes
     paper.line({x, area.bottom()}, {x, area.bottom() + 1.0}, look.ink, 0.2);
     paper.label({x, area.bottom() + 3.6}, QString::fromStdString(fixed(tick, xs.decimals)), number);
   }
-  const SheetTicks ys = sheetTicks(frame.bottom * axes.scaleY, frame.top * axes.scaleY,
-                                   static_cast<int>(area.height() / axes.tickHeight));
+  const SheetTicks ys =
+      sheetTicks(std::min(frame.bottom, frame.top) * axes.scaleY, std::max(frame.bottom, frame.top) * axes.scaleY,
+                 static_cast<int>(area.height() / axes.tickHeight));
   for (const double tick : ys.at) {
     const double y = frame.y(tick / axes.scaleY);
     paper.line({area.left(), y}, {area.right(), y}, look.grid, 0.12);

@@ -14,7 +14,7 @@ struct SheetTicks {
 };
 SheetTicks sheetTicks(double low, double high, int most);
 
-/// A plot's area on paper, mm, and the span of numbers that it shows; y grows upwards.
+/// A plot's area on paper, mm, and the span of numbers that it shows; y grows upwards where bottom is below top.
 struct SheetFrame {
   QRectF area;
   double left = 0.0, right = 1.0;

@@ -66,6 +66,11 @@ double paintClientEnd(SheetPaper& paper, const QPointF& corner, double width, co
   style.points = limits.points;
   style.layerSymbols = true;
   double y = paintTable(paper, corner, width, sheet.layers, style) + kSheetSpace;
+  if (!sheet.materials.empty()) {
+    y += paper.text(corner + QPointF(0, y), width, words(sheet.materials),
+                    {limits.points - 0.4, false, paper.look().ink}) +
+         kSheetSpace;
+  }
   style.layerSymbols = false;
   style.mostRows = limits.boreholes;
   if (!sheet.boreholes.rows.empty()) {

@@ -8,11 +8,11 @@
 #include <QSaveFile>
 
 #include "widgets/sheet_pages.h"
+#include "widgets/sheet_plan.h"
 
 namespace strikeplate {
 namespace {
 
-constexpr int kPages = 2;
 constexpr double kMargin = 13.0;     // mm
 constexpr double kFooterRoom = 5.0;  // mm
 constexpr double kInch = 25.4;       // mm
@@ -37,6 +37,10 @@ Outcome writeBytes(const QString& path, const QByteArray& bytes) {
   return good ? Outcome(Done{}) : notWritten(path, file.errorString());
 }
 
+QRectF roomOf(const QSizeF& size) {
+  return {kMargin, kMargin - 2.0, size.width() - 2.0 * kMargin, size.height() - 2.0 * kMargin - kFooterRoom + 4.0};
+}
+
 Outcome paintContent(QPagedPaintDevice& device, const Survey& survey, const Interpretation& interpretation,
                      const SheetContent& sheet) {
   QPainter painter;
@@ -49,7 +53,8 @@ Outcome paintContent(QPagedPaintDevice& device, const Survey& survey, const Inte
     painter.translate(-layout.paintRect(QPageLayout::Millimeter).topLeft() * perMillimetre);
   }
   const QSizeF size = layout.fullRect(QPageLayout::Millimeter).size();
-  for (int page = 1; page <= kPages; ++page) {
+  const int pages = sheetPageCount(painter, perMillimetre, size, survey, interpretation, sheet);
+  for (int page = 1; page <= pages; ++page) {
     if (page > 1 && !device.newPage()) {
       return Failure{"The printer did not take page " + std::to_string(page) + " of the sheet; print it again."};
     }
@@ -63,8 +68,10 @@ Outcome paintContent(QPagedPaintDevice& device, const Survey& survey, const Inte
 
 }  // namespace
 
-int sheetPageCount() {
-  return kPages;
+int sheetPageCount(QPainter& painter, double perMillimetre, const QSizeF& size, const Survey& survey,
+                   const Interpretation& interpretation, const SheetContent& sheet) {
+  SheetPaper paper(painter, perMillimetre);
+  return static_cast<int>(sheetPages(paper, roomOf(size), {survey, interpretation, sheet}).size());
 }
 
 void paintSheetPage(QPainter& painter, double perMillimetre, const QSizeF& size, int page, const Survey& survey,
@@ -74,15 +81,25 @@ void paintSheetPage(QPainter& painter, double perMillimetre, const QSizeF& size,
   if (sheet.blackAndWhite) {
     paper.setBlackAndWhite();
   }
-  const QRectF room(kMargin, kMargin - 2.0, size.width() - 2.0 * kMargin,
-                    size.height() - 2.0 * kMargin - kFooterRoom + 4.0);
+  const QRectF room = roomOf(size);
   const SheetFigures figures{survey, interpretation, sheet};
-  if (page == 1) {
-    paintClientPage(paper, room, figures);
-  } else {
-    paintReviewerPage(paper, room, figures);
+  const std::vector<SheetPage> pages = sheetPages(paper, room, figures);
+  const SheetPage& shown = pages[static_cast<std::size_t>(page) - 1];
+  switch (shown.kind) {
+    case SheetPage::Kind::Client:
+      paintClientPage(paper, room, figures);
+      break;
+    case SheetPage::Kind::Reviewer:
+      paintReviewerPage(paper, room, figures);
+      break;
+    case SheetPage::Kind::Records:
+      paintRecordsPage(paper, room, figures, shown);
+      break;
+    case SheetPage::Kind::Places:
+      paintPlacesPage(paper, room, figures, shown);
+      break;
   }
-  paintFooter(paper, room, sheet, page, kPages);
+  paintFooter(paper, room, sheet, page, static_cast<int>(pages.size()));
 }
 
 Outcome paintSheet(QPagedPaintDevice& device, const Survey& survey, const Interpretation& interpretation,

@@ -9,12 +9,13 @@
 
 namespace strikeplate {
 
-/// Pages of the sheet: one for the client, one for the reviewer.
-int sheetPageCount();
+/// Pages of the sheet on this paper: one for the client, one for the reviewer, and those that were asked for.
+int sheetPageCount(QPainter& painter, double perMillimetre, const QSizeF& paper, const Survey& survey,
+                   const Interpretation& interpretation, const SheetContent& sheet);
 
-/// Paints one page (from 1) of the sheet; the painter's origin is the paper's corner, `perMillimetre` its units, and
-/// `paper` the paper's size in mm.
-/// Where the texts came to stand is added to `marks` when there is one.
+/// Paints one page (from 1, at most sheetPageCount()) of the sheet; the painter's origin is the paper's corner,
+/// `perMillimetre` its units, and `paper` the paper's size in mm. Where the texts came to stand is added to `marks`
+/// when there is one.
 void paintSheetPage(QPainter& painter, double perMillimetre, const QSizeF& paper, int page, const Survey& survey,
                     const Interpretation& interpretation, const SheetContent& sheet,
                     std::vector<SheetMark>* marks = nullptr);

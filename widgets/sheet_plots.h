@@ -30,6 +30,9 @@ void paintSection(SheetPaper& paper, const QRectF& area, const SheetFigures& fig
 /// Travel times over position: picks with 95 % bars, symbols by layer, the branches' fitted lines, shots.
 void paintTravelTimes(SheetPaper& paper, const QRectF& area, const SheetFigures& figures);
 
+/// A shot's stacked traces at their geophones' places with its picks, time down the page.
+void paintRecord(SheetPaper& paper, const QRectF& area, const SheetFigures& figures, int shotIndex);
+
 /// Residuals, picked minus predicted time, over the geophone's position, symbols by layer, as tall as nearly all of
 /// them need; what lies beyond is drawn at the edge and counted. Nothing is painted without predicted times.
 void paintResiduals(SheetPaper& paper, const QRectF& area, const SheetFigures& figures);

@@ -57,11 +57,14 @@ SheetContent sheetContent(const Survey& survey, const Interpretation& interpreta
   sheet.warnings = sheetWarnings(source);
   sheet.question = options.question.empty() ? sheetQuestion(source) : sentence(options.question);
   sheet.layers = sheetLayers(source);
+  sheet.materials = sheetMaterials(source);
   sheet.boreholeMarks = sheetBoreholeMarks(source);
   sheet.boreholes = sheetBoreholes(source);
   sheet.opinions = sheetOpinions(source);
   sheet.reciprocals = sheetReciprocals(source);
   sheet.shots = sheetShots(source);
+  sheet.geophonePlaces = sheetGeophonePlaces(source);
+  sheet.shotPlaces = sheetShotPlaces(source);
   sheet.doubts = sheetDoubts(source);
   addStrongestDoubt(sheet, static_cast<int>(interpretation.doubts.size()));
   sheet.triggers = sheetTriggers(source);
@@ -76,6 +79,8 @@ SheetContent sheetContent(const Survey& survey, const Interpretation& interpreta
   sheet.builtOn = options.builtOn;
   sheet.files = sheetFiles(source);
   sheet.blackAndWhite = options.blackAndWhite;
+  sheet.recordPages = options.records;
+  sheet.placePages = options.places;
   sheet.feet = survey.settings.feet;
   return sheet;
 }

@@ -1,6 +1,7 @@
 #include <algorithm>
 #include <cmath>
 
+#include "core/base/file_names.h"
 #include "core/report/sheet_parts.h"
 
 namespace strikeplate {
@@ -21,7 +22,7 @@ double misfitOf(const Interpretation& interpretation, const Doubt& doubt) {
 // Folders are nobody's business but the user's.
 std::string withoutFolders(std::string text, const Survey& survey) {
   for (const RecordPtr& record : survey.records) {
-    const std::string name = fileNameOf(record->file);
+    const std::string name = lastPart(record->file);
     for (std::size_t at = text.find(record->file); name != record->file && at != std::string::npos;
          at = text.find(record->file, at + name.size())) {
       text.replace(at, record->file.size(), name);

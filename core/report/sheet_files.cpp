@@ -3,25 +3,18 @@
 #include <filesystem>
 #include <fstream>
 #include <set>
-#include <string_view>
 
 #include <boost/crc.hpp>
 
-#include "core/base/numbers.h"
+#include "core/base/file_names.h"
 #include "core/report/sheet_parts.h"
 
 namespace strikeplate {
 namespace {
 
-constexpr std::string_view kSeparators = "/\\";
 const std::string kTogether = "\xC2\xA0";  // a blank at which no line is broken
 
 }  // namespace
-
-std::string fileNameOf(const std::string& path) {
-  const std::size_t end = path.find_last_of(kSeparators);
-  return end == std::string::npos ? path : path.substr(end + 1);
-}
 
 std::optional<std::string> fileChecksum(const std::string& path) {
   std::error_code none;
@@ -52,7 +45,7 @@ std::vector<SheetFile> sheetFiles(const SheetSource& source) {
   std::set<std::string> known;
   for (const std::string& path : paths) {
     if (known.insert(path).second) {
-      files.push_back({fileNameOf(path), fileChecksum(path).value_or("")});
+      files.push_back({lastPart(path), fileChecksum(path).value_or("")});
     }
   }
   return files;

@@ -34,11 +34,15 @@ std::optional<DepthAlongLine> depthAlongLine(const Survey& survey, const Section
 std::vector<SheetField> sheetHead(const SheetSource& source);
 std::string sheetAnswer(const SheetSource& source);
 SheetTable sheetLayers(const SheetSource& source);
+/// Published materials for the layers' velocities, marked as a hint; empty without a section.
+std::string sheetMaterials(const SheetSource& source);
 std::vector<std::string> sheetBoreholeMarks(const SheetSource& source);
 SheetTable sheetBoreholes(const SheetSource& source);
 SheetTable sheetOpinions(const SheetSource& source);
 SheetTable sheetReciprocals(const SheetSource& source);
 SheetTable sheetShots(const SheetSource& source);
+SheetTable sheetGeophonePlaces(const SheetSource& source);
+SheetTable sheetShotPlaces(const SheetSource& source);
 std::vector<SheetDoubtKind> sheetDoubts(const SheetSource& source);
 std::vector<std::string> sheetWarnings(const SheetSource& source);
 std::string sheetQuestion(const SheetSource& source);
@@ -49,9 +53,6 @@ std::vector<std::string> sheetLimitations(const SheetSource& source);
 std::vector<std::string> sheetMethods(const SheetSource& source);
 std::vector<std::string> sheetReach(const SheetSource& source);
 std::vector<SheetFile> sheetFiles(const SheetSource& source);
-
-/// The path without its folders; both kinds of separator end a folder, since a path may come from another system.
-std::string fileNameOf(const std::string& path);
 
 /// CRC-32 (IEEE 802.3) of a file's bytes as 8 hex digits; nothing when it cannot be read to its end.
 std::optional<std::string> fileChecksum(const std::string& path);

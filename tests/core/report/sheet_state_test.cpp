@@ -94,6 +94,21 @@ TEST(SheetState, ThereIsNoReachWithoutRisingVelocitiesOrAnOffset) {
   EXPECT_FALSE(unseenBelow({}, {}, 40.0, 500.0));
 }
 
+TEST(SheetState, MaterialsAreAHintWithRangesAndSource) {
+  auto sample = testing::sheetSample();
+  sample.interpretation.section.velocities[0] = Estimate::normal(420.0, 5.0);
+  const std::string hint = contentOf(sample).materials;
+  // Both ranges as core/methods/material_hint.h gives them.
+  EXPECT_TRUE(contains(hint, "layer 1: vegetal soil (300 to 700), dry sand (400 to 1200)")) << hint;
+  EXPECT_TRUE(contains(hint, "a hint and not a finding")) << hint;
+  EXPECT_TRUE(contains(hint, "Source: GeoSci.xyz")) << hint;
+  sample.survey.settings.feet = true;
+  EXPECT_TRUE(contains(contentOf(sample).materials, "vegetal soil (984 to 2300)")) << "300 and 700 over 0.3048";
+  sample.interpretation.section.velocities[0] = Estimate::none("no picks");
+  EXPECT_TRUE(contains(contentOf(sample).materials, "layer 1: not determined"));
+  EXPECT_EQ(contentOf(testing::emptySheetSample()).materials, "");
+}
+
 TEST(SheetFiles, TheChecksumIsTheCommonCrc32) {
   // The check value of CRC-32 (IEEE 802.3) for the nine digits is cbf43926 in every catalogue of such codes.
   const std::string path = (std::filesystem::path(::testing::TempDir()) / "sheet checksum.dat").string();
