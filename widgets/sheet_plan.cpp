@@ -102,7 +102,7 @@ void paintRecordsPage(SheetPaper& paper, const QRectF& room, const SheetFigures&
   const QString words = QStringLiteral(
       "Stack of the blows named, each trace to its own largest swing; no filter. Symbols: first breaks by layer, "
       "bars "
-      "95 %; star: the shot; grey line: dead trace.");
+      "95 %; star: the shot; dashes: dead trace.");
   const double foot = measured(paper, [&] { return paper.text({}, room.width(), words, style); });
   const double each = (room.bottom() - foot - kSheetSpace - y) / kRecordsOnAPage;
   for (int i = 0; i < page.shots; ++i) {

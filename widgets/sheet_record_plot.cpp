@@ -1,8 +1,6 @@
 #include <algorithm>
 #include <cmath>
 
-#include <QPainterPath>
-
 #include "core/base/file_names.h"
 #include "core/base/units.h"
 #include "core/survey/gathers.h"
@@ -13,10 +11,10 @@ namespace strikeplate {
 namespace {
 
 constexpr double kTitleRoom = 4.6;    // mm
-constexpr double kPointSpace = 0.15;  // mm along time between the points that a trace is drawn with
+constexpr double kPointSpace = 0.25;  // mm along time between the points that a trace is drawn with
 constexpr double kSwing = 0.95;       // of the trace spacing, at most
 
-// Time after the blow that is shown, s: noise before, and as much behind the latest pick as before it.
+// Time after the blow that is shown, s: a little noise before it, and half as much again as the latest pick.
 struct Window {
   double from = 0.0, to = 0.1;
 };
@@ -28,7 +26,7 @@ Window windowOf(const Gather& gather, const Shot& shot) {
   for (const ShotTrace& trace : shot.traces) {
     latest = std::max(latest, trace.pick ? trace.pick->time + shot.triggerCorrection : 0.0);
   }
-  const double to = latest > 0.0 ? std::min(end, 1.8 * latest) : end;
+  const double to = latest > 0.0 ? std::min(end, 1.5 * latest) : end;
   return {std::max(start, -0.08 * to), to};
 }
 
@@ -57,6 +55,18 @@ double spacingOf(const SheetFrame& frame, const Gather& gather) {
   return least;
 }
 
+// A point in the middle of an upright stretch is left out: quiet traces need few.
+void addPoint(QPolygonF& points, const QPointF& point) {
+  constexpr double kSame = 0.01;  // mm
+  const qsizetype n = points.size();
+  const auto same = [&](const QPointF& other) { return std::abs(other.x() - point.x()) < kSame; };
+  if (n >= 2 && same(points[n - 1]) && same(points[n - 2])) {
+    points[n - 1] = point;
+  } else {
+    points << point;
+  }
+}
+
 // A trace as points on paper: where samples are closer than the points, the largest swing among them stands for all.
 QPolygonF pointsOf(const SheetFrame& frame, std::span<const float> samples, double start, double interval,
                    double rest, double swing, float unit) {
@@ -75,7 +85,7 @@ QPolygonF pointsOf(const SheetFrame& frame, std::span<const float> samples, doub
       value = std::abs(samples[k]) > std::abs(value) ? samples[k] : value;
     }
     const double size = unit > 0.0F ? std::clamp(static_cast<double>(value / unit), -1.0, 1.0) : 0.0;
-    points << QPointF(rest + swing * size, frame.y(time));
+    addPoint(points, {rest + swing * size, frame.y(time)});
   }
   return points;
 }
@@ -162,7 +172,8 @@ void paintRecord(SheetPaper& paper, const QRectF& area, const SheetFigures& figu
     const double rest = frame.x(gather.geophones[t].x);
     const bool dead = shot.traces[t].state == TraceState::Dead;
     if (dead) {
-      paper.line({rest, frame.area.top()}, {rest, frame.area.bottom()}, look.grid, 0.2);
+      painter.setPen(QPen(look.faint, 0.2, Qt::DashLine));
+      painter.drawLine(QPointF(rest, frame.area.top()), QPointF(rest, frame.area.bottom()));
       continue;
     }
     paintTrace(paper,
