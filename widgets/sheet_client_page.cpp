@@ -65,6 +65,7 @@ double paintClientEnd(SheetPaper& paper, const QPointF& corner, double width, co
   SheetTableStyle style;
   style.points = limits.points;
   style.layerSymbols = true;
+  style.restFollows = sheet.tablePages;
   double y = paintTable(paper, corner, width, sheet.layers, style) + kSheetSpace;
   if (!sheet.materials.empty()) {
     y += paper.text(corner + QPointF(0, y), width, words(sheet.materials),

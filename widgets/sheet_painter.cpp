@@ -41,6 +41,27 @@ QRectF roomOf(const QSizeF& size) {
   return {kMargin, kMargin - 2.0, size.width() - 2.0 * kMargin, size.height() - 2.0 * kMargin - kFooterRoom + 4.0};
 }
 
+void paintPlanned(SheetPaper& paper, const QRectF& room, const SheetFigures& figures,
+                  const std::vector<SheetPage>& pages, int page) {
+  const SheetPage& shown = pages[static_cast<std::size_t>(page) - 1];
+  switch (shown.kind) {
+    case SheetPage::Kind::Client:
+      paintClientPage(paper, room, figures);
+      break;
+    case SheetPage::Kind::Reviewer:
+      paintReviewerPage(paper, room, figures);
+      break;
+    case SheetPage::Kind::Records:
+      paintRecordsPage(paper, room, figures, shown);
+      break;
+    case SheetPage::Kind::Places:
+    case SheetPage::Kind::Tables:
+      paintTablesPage(paper, room, figures, shown);
+      break;
+  }
+  paintFooter(paper, room, figures.sheet, page, static_cast<int>(pages.size()));
+}
+
 Outcome paintContent(QPagedPaintDevice& device, const Survey& survey, const Interpretation& interpretation,
                      const SheetContent& sheet) {
   QPainter painter;
@@ -53,12 +74,19 @@ Outcome paintContent(QPagedPaintDevice& device, const Survey& survey, const Inte
     painter.translate(-layout.paintRect(QPageLayout::Millimeter).topLeft() * perMillimetre);
   }
   const QSizeF size = layout.fullRect(QPageLayout::Millimeter).size();
-  const int pages = sheetPageCount(painter, perMillimetre, size, survey, interpretation, sheet);
-  for (int page = 1; page <= pages; ++page) {
-    if (page > 1 && !device.newPage()) {
-      return Failure{"The printer did not take page " + std::to_string(page) + " of the sheet; print it again."};
+  const SheetFigures figures{survey, interpretation, sheet};
+  {
+    SheetPaper paper(painter, perMillimetre);
+    if (sheet.blackAndWhite) {
+      paper.setBlackAndWhite();
     }
-    paintSheetPage(painter, perMillimetre, size, page, survey, interpretation, sheet);
+    const std::vector<SheetPage> pages = sheetPages(paper, roomOf(size), figures);
+    for (int page = 1; page <= static_cast<int>(pages.size()); ++page) {
+      if (page > 1 && !device.newPage()) {
+        return Failure{"The printer did not take page " + std::to_string(page) + " of the sheet; print it again."};
+      }
+      paintPlanned(paper, roomOf(size), figures, pages, page);
+    }
   }
   if (!painter.end()) {
     return Failure{"The printer did not finish the sheet; print it again."};
@@ -83,23 +111,7 @@ void paintSheetPage(QPainter& painter, double perMillimetre, const QSizeF& size,
   }
   const QRectF room = roomOf(size);
   const SheetFigures figures{survey, interpretation, sheet};
-  const std::vector<SheetPage> pages = sheetPages(paper, room, figures);
-  const SheetPage& shown = pages[static_cast<std::size_t>(page) - 1];
-  switch (shown.kind) {
-    case SheetPage::Kind::Client:
-      paintClientPage(paper, room, figures);
-      break;
-    case SheetPage::Kind::Reviewer:
-      paintReviewerPage(paper, room, figures);
-      break;
-    case SheetPage::Kind::Records:
-      paintRecordsPage(paper, room, figures, shown);
-      break;
-    case SheetPage::Kind::Places:
-      paintPlacesPage(paper, room, figures, shown);
-      break;
-  }
-  paintFooter(paper, room, sheet, page, static_cast<int>(pages.size()));
+  paintPlanned(paper, room, figures, sheetPages(paper, room, figures), page);
 }
 
 Outcome paintSheet(QPagedPaintDevice& device, const Survey& survey, const Interpretation& interpretation,

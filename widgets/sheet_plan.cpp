@@ -10,87 +10,120 @@ namespace strikeplate {
 namespace {
 
 constexpr int kRecordsOnAPage = 2;
-constexpr int kColumns = 3;              // of geophones
 constexpr double kBetweenColumns = 8.0;  // mm
-constexpr double kLeastTable = 30.0;     // mm; less room than that is not begun on
+constexpr double kLeastTable = 30.0;     // mm; in less room than that a table is not begun
 
-SheetTableStyle placesStyle() {
+SheetTableStyle fullStyle() {
   SheetTableStyle style;
   style.mostLines = 1000;
   return style;
 }
 
-SheetTable partOf(const SheetTable& table, int first, int count) {
+SheetTable rowsOf(const SheetTable& table, int first, int count) {
   SheetTable part = table;
   part.rows.assign(table.rows.begin() + first, table.rows.begin() + first + count);
   return part;
 }
 
+double columnWidth(double width, int columns) {
+  return (width - (columns - 1) * kBetweenColumns) / columns;
+}
+
 double heightOf(SheetPaper& paper, double width, const SheetTable& table) {
-  return measured(paper, [&] { return paintTable(paper, {}, width, table, placesStyle()); });
+  return measured(paper, [&] { return paintTable(paper, {}, width, table, fullStyle()); });
 }
 
-// As many rows from `first` on as fit into the height, at least one.
+// As many rows from `first` on as fit into the height, at least one if there is any, by halving.
 int rowsThatFit(SheetPaper& paper, double width, double height, const SheetTable& table, int first) {
-  const int all = static_cast<int>(table.rows.size()) - first;
-  int count = std::min(1, all);
-  while (count < all && heightOf(paper, width, partOf(table, first, count + 1)) <= height) {
-    ++count;
+  int low = std::min(1, static_cast<int>(table.rows.size()) - first);
+  int high = static_cast<int>(table.rows.size()) - first;
+  while (low < high) {
+    const int middle = (low + high + 1) / 2;
+    const bool fits = heightOf(paper, width, rowsOf(table, first, middle)) <= height;
+    (fits ? low : high) = fits ? middle : middle - 1;
   }
-  return count;
+  return low;
 }
 
-double columnWidth(const QRectF& room) {
-  return (room.width() - (kColumns - 1) * kBetweenColumns) / kColumns;
-}
-
-// Rows of one column of geophones in this height; all rows are one line high.
-int geophoneRows(SheetPaper& paper, const QRectF& room, double height, const SheetTable& table) {
-  const double one = heightOf(paper, columnWidth(room), partOf(table, 0, 1));
-  const double row = table.rows.size() > 1 ? heightOf(paper, columnWidth(room), partOf(table, 0, 2)) - one : one;
+// Rows of one of several columns; there a row is one line high.
+int rowsOfAColumn(SheetPaper& paper, double width, double height, const SheetTable& table) {
+  const double one = heightOf(paper, width, rowsOf(table, 0, 1));
+  const double row = table.rows.size() > 1 ? heightOf(paper, width, rowsOf(table, 0, 2)) - one : one;
   return std::max(1, 1 + static_cast<int>(std::floor((height - one) / row)));
+}
+
+// Part of a table in this width and height.
+SheetPart partThatFits(SheetPaper& paper, double width, double height, const SheetPart& rest) {
+  SheetPart part = rest;
+  if (rest.columns > 1 && !rest.table->rows.empty()) {
+    const double column = columnWidth(width, rest.columns);
+    part.count = std::min(rest.count, rest.columns * rowsOfAColumn(paper, column, height, *rest.table));
+  } else {
+    part.count = rowsThatFit(paper, width, height, *rest.table, rest.first);
+  }
+  return part;
+}
+
+double paintPart(SheetPaper& paper, const QPointF& corner, double width, const SheetPart& part) {
+  const double column = columnWidth(width, part.columns);
+  const int rows = std::max(1, (part.count + part.columns - 1) / part.columns);
+  double height = 0.0;
+  for (int c = 0; c == 0 || c * rows < part.count; ++c) {
+    const SheetTable table = rowsOf(*part.table, part.first + c * rows, std::min(rows, part.count - c * rows));
+    const QPointF at = corner + QPointF(c * (column + kBetweenColumns), 0.0);
+    height = std::max(height, paintTable(paper, at, column, table, fullStyle()));
+  }
+  return height;
+}
+
+QString titleOf(SheetPage::Kind kind) {
+  return kind == SheetPage::Kind::Places ? QStringLiteral("Geometry") : QStringLiteral("Tables in full");
 }
 
 double titleHeight(SheetPaper& paper, const QRectF& room, const SheetContent& sheet, const QString& kind) {
   return measured(paper, [&] { return paintTitle(paper, room, QString::fromStdString(sheet.title), kind); });
 }
 
-QString placesKind() {
-  return QStringLiteral("Geometry");
-}
-
-void addPlaces(SheetPaper& paper, const QRectF& room, const SheetContent& sheet, std::vector<SheetPage>& pages) {
-  const double full = room.height() - titleHeight(paper, room, sheet, placesKind());
-  const int shots = static_cast<int>(sheet.shotPlaces.rows.size());
-  const int geophones = static_cast<int>(sheet.geophonePlaces.rows.size());
-  int shot = 0, geophone = 0;
-  do {
-    SheetPage page{SheetPage::Kind::Places, shot, 0, geophone, 0};
-    double left = full;
-    if (shot < shots) {
-      page.shots = rowsThatFit(paper, room.width(), full, sheet.shotPlaces, shot);
-      left -= heightOf(paper, room.width(), partOf(sheet.shotPlaces, shot, page.shots)) + kSheetSpace;
-      shot += page.shots;
-    }
-    if (shot == shots && geophone < geophones && left >= kLeastTable) {
-      page.geophones =
-          std::min(geophones - geophone, kColumns * geophoneRows(paper, room, left, sheet.geophonePlaces));
-      geophone += page.geophones;
-    }
-    pages.push_back(page);
-  } while (shot < shots || geophone < geophones);
+// One table behind the other, over as many pages as they need.
+void addTables(SheetPaper& paper, const QRectF& room, const SheetContent& sheet, SheetPage::Kind kind,
+               const std::vector<SheetPart>& tables, std::vector<SheetPage>& pages) {
+  const double full = room.height() - titleHeight(paper, room, sheet, titleOf(kind));
+  double left = 0.0;
+  for (SheetPart rest : tables) {
+    rest.count = static_cast<int>(rest.table->rows.size());
+    do {
+      if (left < kLeastTable) {
+        pages.push_back({kind, 0, 0, {}});
+        left = full;
+      }
+      const SheetPart part = partThatFits(paper, room.width(), left, rest);
+      pages.back().parts.push_back(part);
+      left -= measured(paper, [&] { return paintPart(paper, {}, room.width(), part); }) + kSheetSpace;
+      rest.first += part.count;
+      rest.count -= part.count;
+    } while (rest.count > 0);
+  }
 }
 
 }  // namespace
 
 std::vector<SheetPage> sheetPages(SheetPaper& paper, const QRectF& room, const SheetFigures& figures) {
-  std::vector<SheetPage> pages = {{SheetPage::Kind::Client, 0, 0, 0, 0}, {SheetPage::Kind::Reviewer, 0, 0, 0, 0}};
+  std::vector<SheetPage> pages = {{SheetPage::Kind::Client, 0, 0, {}}, {SheetPage::Kind::Reviewer, 0, 0, {}}};
+  const SheetContent& sheet = figures.sheet;
   const int shots = static_cast<int>(figures.survey.shots.size());
-  for (int first = 0; figures.sheet.recordPages && first < shots; first += kRecordsOnAPage) {
-    pages.push_back({SheetPage::Kind::Records, first, std::min(kRecordsOnAPage, shots - first), 0, 0});
+  for (int first = 0; sheet.recordPages && first < shots; first += kRecordsOnAPage) {
+    pages.push_back({SheetPage::Kind::Records, first, std::min(kRecordsOnAPage, shots - first), {}});
   }
-  if (figures.sheet.placePages) {
-    addPlaces(paper, room, figures.sheet, pages);
+  const auto whole = [](const SheetTable& table, int columns) { return SheetPart{&table, 0, 0, columns}; };
+  if (sheet.tablePages) {
+    addTables(paper, room, sheet, SheetPage::Kind::Tables,
+              {whole(sheet.boreholes, 1), whole(sheet.opinions, 1), whole(sheet.reciprocals, 2),
+               whole(sheet.shots, 1), whole(sheet.allDoubts, 1), whole(sheet.allFiles, 1)},
+              pages);
+  }
+  if (sheet.placePages) {
+    addTables(paper, room, sheet, SheetPage::Kind::Places,
+              {whole(sheet.shotPlaces, 1), whole(sheet.geophonePlaces, 3)}, pages);
   }
   return pages;
 }
@@ -111,23 +144,11 @@ void paintRecordsPage(SheetPaper& paper, const QRectF& room, const SheetFigures&
   paper.text({room.left(), room.bottom() - foot}, room.width(), words, style);
 }
 
-void paintPlacesPage(SheetPaper& paper, const QRectF& room, const SheetFigures& figures, const SheetPage& page) {
-  const SheetContent& sheet = figures.sheet;
-  double y = room.top() + paintTitle(paper, room, QString::fromStdString(sheet.title), placesKind());
-  if (page.shots > 0) {
-    const SheetTable shots = partOf(sheet.shotPlaces, page.firstShot, page.shots);
-    y += paintTable(paper, {room.left(), y}, room.width(), shots, placesStyle()) + kSheetSpace;
-  }
-  if (page.geophones == 0) {
-    return;
-  }
-  const int rows = std::min(geophoneRows(paper, room, room.bottom() - y, sheet.geophonePlaces),
-                            (page.geophones + kColumns - 1) / kColumns);
-  for (int c = 0; c * rows < page.geophones; ++c) {
-    const SheetTable part =
-        partOf(sheet.geophonePlaces, page.firstGeophone + c * rows, std::min(rows, page.geophones - c * rows));
-    paintTable(paper, {room.left() + c * (columnWidth(room) + kBetweenColumns), y}, columnWidth(room), part,
-               placesStyle());
+void paintTablesPage(SheetPaper& paper, const QRectF& room, const SheetFigures& figures, const SheetPage& page) {
+  const QString title = QString::fromStdString(figures.sheet.title);
+  double y = room.top() + paintTitle(paper, room, title, titleOf(page.kind));
+  for (const SheetPart& part : page.parts) {
+    y += paintPart(paper, {room.left(), y}, room.width(), part) + kSheetSpace;
   }
 }
 

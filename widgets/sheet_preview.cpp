@@ -94,17 +94,21 @@ QWidget* SheetPreview::makeChoices() {
   colours_->setCurrentIndex(given_.blackAndWhite ? 1 : 0);
   records_ = new QCheckBox(tr("Each record with its picks"));
   records_->setChecked(given_.records);
+  tables_ = new QCheckBox(tr("All tables in full"));
+  tables_->setChecked(given_.tables);
   places_ = new QCheckBox(tr("Places of geophones and shots"));
   places_->setChecked(given_.places);
   form->addRow(tr("Paper"), paper_);
   form->addRow(tr("Lengths"), unit_);
   form->addRow(tr("Print in"), colours_);
   form->addRow(tr("Further pages"), records_);
+  form->addRow(QString(), tables_);
   form->addRow(QString(), places_);
   connect(paper_, &QComboBox::currentIndexChanged, this, &SheetPreview::refresh);
   connect(unit_, &QComboBox::currentIndexChanged, this, &SheetPreview::changeUnit);
   connect(colours_, &QComboBox::currentIndexChanged, this, &SheetPreview::refresh);
   connect(records_, &QCheckBox::toggled, this, &SheetPreview::refresh);
+  connect(tables_, &QCheckBox::toggled, this, &SheetPreview::refresh);
   connect(places_, &QCheckBox::toggled, this, &SheetPreview::refresh);
   return box;
 }
@@ -179,6 +183,7 @@ SheetOptions SheetPreview::options() const {
   options.signatory = signatory_->text().trimmed().toStdString();
   options.blackAndWhite = colours_->currentIndex() == 1;
   options.records = records_->isChecked();
+  options.tables = tables_->isChecked();
   options.places = places_->isChecked();
   return options;
 }

@@ -68,6 +68,7 @@ class SheetPreview : public QDialog {
   QComboBox* unit_ = nullptr;
   QComboBox* colours_ = nullptr;
   QCheckBox* records_ = nullptr;
+  QCheckBox* tables_ = nullptr;
   QCheckBox* places_ = nullptr;
   QLineEdit* question_ = nullptr;
   QPlainTextEdit* answer_ = nullptr;

@@ -27,6 +27,7 @@ double paintReviewerTables(SheetPaper& paper, const QPointF& corner, double widt
   SheetTableStyle style;
   style.points = limits.points;
   style.mostLines = 3;
+  style.restFollows = sheet.tablePages;
   style.mostRows = limits.opinions;
   double y = paintTable(paper, corner, width, sheet.opinions, style) + kSheetSpace;
   style.mostRows = limits.reciprocals;

@@ -94,7 +94,9 @@ double paintRows(SheetPaper& paper, const QPointF& corner, double width, const S
     paper.line(corner + QPointF(0, y), corner + QPointF(width, y), look.grid, 0.12);
   }
   if (shown < table.rows.size()) {
-    const QString more = QStringLiteral("%1 more in the program").arg(table.rows.size() - shown);
+    const QString where =
+        style.restFollows ? QStringLiteral("in the tables behind") : QStringLiteral("in the program");
+    const QString more = QStringLiteral("%1 more %2").arg(table.rows.size() - shown).arg(where);
     y += kRowSpace + paper.text(corner + QPointF(0, y + kRowSpace), width, more, {style.points, false, look.faint});
   }
   return y;

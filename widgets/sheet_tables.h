@@ -13,6 +13,7 @@ struct SheetTableStyle {
   int mostLines = 2;          ///< in one cell
   bool layerSymbols = false;  ///< the first column is a layer's number and gets its symbol
   bool note = true;
+  bool restFollows = false;  ///< what is left out stands in full on a further page
 };
 
 /// Title, header, rows, note, summary; returns the height, mm.

@@ -63,6 +63,7 @@ SheetContent sheetContent(const Survey& survey, const Interpretation& interpreta
   sheet.opinions = sheetOpinions(source);
   sheet.reciprocals = sheetReciprocals(source);
   sheet.shots = sheetShots(source);
+  sheet.allDoubts = sheetDoubtTable(sheetDoubts(source));
   sheet.geophonePlaces = sheetGeophonePlaces(source);
   sheet.shotPlaces = sheetShotPlaces(source);
   sheet.doubts = sheetDoubts(source);
@@ -78,7 +79,9 @@ SheetContent sheetContent(const Survey& survey, const Interpretation& interpreta
   sheet.program = "Strikeplate " STRIKEPLATE_VERSION;
   sheet.builtOn = options.builtOn;
   sheet.files = sheetFiles(source);
+  sheet.allFiles = sheetFileTable(sheet.files);
   sheet.blackAndWhite = options.blackAndWhite;
+  sheet.tablePages = options.tables;
   sheet.recordPages = options.records;
   sheet.placePages = options.places;
   sheet.feet = survey.settings.feet;

@@ -16,6 +16,7 @@ struct SheetOptions {
   std::vector<std::string> builtOn;     ///< names and versions of what the program is built on
   bool blackAndWhite = false;           ///< layers told apart by symbol, dashes and grey alone
   bool records = false;                 ///< further pages: each shot's record with its picks
+  bool tables = false;                  ///< further pages: every table in full
   bool places = false;                  ///< further pages: where every geophone and shot stood
   std::vector<std::string> inputFiles;  ///< besides the records' own files, such as a geometry table
 };
@@ -64,16 +65,16 @@ struct SheetContent {
   std::vector<std::string>
       boreholeMarks;  ///< what stands above each borehole in the section and before it in its table
   SheetTable layers, boreholes, opinions, reciprocals, shots;
-  std::string materials;                  ///< published materials of such velocities, marked as a hint
-  SheetTable geophonePlaces, shotPlaces;  ///< for the optional page; always there
-  std::vector<SheetDoubtKind> doubts;     ///< the gravest kind first
-  std::vector<std::string> picks;         ///< how they came about
-  std::vector<std::string> triggers;      ///< corrections by the user and by the section itself
-  std::vector<std::string> fit;           ///< how well the section explains them
-  std::vector<std::string> limitations;   ///< what the line cannot see
-  std::vector<std::string> methods;       ///< by published name, with sources
-  std::string cautionShort;               ///< for page 1
-  std::vector<std::string> cautions;      ///< in full
+  std::string materials;  ///< published materials of such velocities, marked as a hint
+  SheetTable allDoubts, allFiles, geophonePlaces, shotPlaces;  ///< for the optional pages; always there
+  std::vector<SheetDoubtKind> doubts;                          ///< the gravest kind first
+  std::vector<std::string> picks;                              ///< how they came about
+  std::vector<std::string> triggers;                           ///< corrections by the user and by the section itself
+  std::vector<std::string> fit;                                ///< how well the section explains them
+  std::vector<std::string> limitations;                        ///< what the line cannot see
+  std::vector<std::string> methods;                            ///< by published name, with sources
+  std::string cautionShort;                                    ///< for page 1
+  std::vector<std::string> cautions;                           ///< in full
   std::string signatory;
   std::string program;               ///< name and version
   std::vector<std::string> builtOn;  ///< names and versions of what it is built on
@@ -81,6 +82,7 @@ struct SheetContent {
   bool feet = false;
   bool blackAndWhite = false;
   bool recordPages = false;
+  bool tablePages = false;
   bool placePages = false;
 };
 

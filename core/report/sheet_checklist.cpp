@@ -13,7 +13,7 @@ namespace {
 
 using Field = std::pair<const char*, const std::string&>;
 
-// "Not given: client, site; type them under Survey, Details."
+// "Not given: client, site (Edit, Job, client and crew)."
 std::string notGiven(const std::vector<Field>& fields) {
   std::string names;
   for (const auto& [name, value] : fields) {
@@ -21,7 +21,7 @@ std::string notGiven(const std::vector<Field>& fields) {
       names += (names.empty() ? "" : ", ") + std::string(name);
     }
   }
-  return names.empty() ? "" : "Not given: " + names + ". Type it into the survey's details.";
+  return names.empty() ? "" : "Not given: " + names + " (Edit, Job, client and crew).";
 }
 
 std::string positions(const Survey& survey) {

@@ -60,6 +60,19 @@ std::vector<SheetDoubtKind> sheetDoubts(const SheetSource& source) {
   return sorted;
 }
 
+SheetTable sheetDoubtTable(const std::vector<SheetDoubtKind>& kinds) {
+  SheetTable table;
+  table.title = "Doubts";
+  table.columns = {"Kind", "Doubt", "Rests on", "What would settle it"};
+  for (const SheetDoubtKind& kind : kinds) {
+    for (const SheetDoubt& doubt : kind.doubts) {
+      table.rows.push_back({kind.kind, doubt.says, doubt.restsOn, doubt.settles});
+    }
+  }
+  table.summary = table.rows.empty() ? "The program's checks found nothing to doubt." : "";
+  return table;
+}
+
 std::vector<std::string> doubtLines(const SheetContent& sheet, int mostOfAKind, bool reasons) {
   std::vector<std::string> lines;
   for (const SheetDoubtKind& kind : sheet.doubts) {

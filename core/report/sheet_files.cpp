@@ -51,6 +51,17 @@ std::vector<SheetFile> sheetFiles(const SheetSource& source) {
   return files;
 }
 
+SheetTable sheetFileTable(const std::vector<SheetFile>& files) {
+  SheetTable table;
+  table.title = "Input files";
+  table.columns = {"File", "CRC-32 (IEEE 802.3)"};
+  for (const SheetFile& file : files) {
+    table.rows.push_back({file.name, file.checksum.empty() ? "not at hand" : file.checksum});
+  }
+  table.summary = table.rows.empty() ? "No input file." : "";
+  return table;
+}
+
 std::string filesLine(const std::vector<SheetFile>& files, int most) {
   const std::size_t shown = std::min(files.size(), static_cast<std::size_t>(std::max(0, most)));
   std::string line;

@@ -53,6 +53,9 @@ std::vector<std::string> sheetLimitations(const SheetSource& source);
 std::vector<std::string> sheetMethods(const SheetSource& source);
 std::vector<std::string> sheetReach(const SheetSource& source);
 std::vector<SheetFile> sheetFiles(const SheetSource& source);
+/// Every one of them, a row each.
+SheetTable sheetFileTable(const std::vector<SheetFile>& files);
+SheetTable sheetDoubtTable(const std::vector<SheetDoubtKind>& kinds);
 
 /// CRC-32 (IEEE 802.3) of a file's bytes as 8 hex digits; nothing when it cannot be read to its end.
 std::optional<std::string> fileChecksum(const std::string& path);

@@ -133,17 +133,21 @@ TEST(SheetLayout, NoTextLiesOverAnotherBeyondTheMarginsOrIsCut) {
 
 TEST(SheetLayout, FurtherPagesHoldEveryShotAndGeophoneAndNothingIsCut) {
   constexpr double kPerMillimetre = 12.0;
-  const auto sample = testing::sheetSample({120, 31, 6, 10});
+  const auto sample = testing::fullSheetSample();
   SheetOptions options;
-  options.records = options.places = true;
+  options.records = options.places = options.tables = true;
   const SheetContent sheet = sheetContent(sample.survey, sample.interpretation, options);
   for (const QSizeF& paper : {kA4, kLetter}) {
     QImage image((paper * kPerMillimetre).toSize(), QImage::Format_RGB32);
     QPainter painter(&image);
     const int pages = sheetPageCount(painter, kPerMillimetre, paper, sample.survey, sample.interpretation, sheet);
-    EXPECT_GE(pages, 2 + 16 + 2);
+    EXPECT_GE(pages, 2 + 16 + 3 + 2);
     QStringList titles, numbers;
-    for (const int page : {3, pages - 1, pages}) {
+    std::vector<int> looked = {3};
+    for (int page = 2 + 16 + 1; page <= pages; ++page) {
+      looked.push_back(page);
+    }
+    for (const int page : looked) {
       std::vector<SheetMark> marks;
       paintSheetPage(painter, kPerMillimetre, paper, page, sample.survey, sample.interpretation, sheet, &marks);
       EXPECT_EQ(faults(marks, paper), "") << "page " << page;
@@ -153,6 +157,9 @@ TEST(SheetLayout, FurtherPagesHoldEveryShotAndGeophoneAndNothingIsCut) {
     }
     EXPECT_TRUE(titles.contains("Shot 1 at -4.0 m: line7_1.dat + line7_2.dat"));
     EXPECT_TRUE(titles.contains("line7_61.dat, line7_62.dat")) << "the last shot's place";
+    EXPECT_TRUE(titles.contains("No. 10: Observation well BH-10 by the mill"));
+    EXPECT_TRUE(titles.contains("line7_62.dat")) << "the last file";
+    EXPECT_TRUE(titles.contains("1 and 2")) << "a pair of shots";
     for (int g = 1; g <= 120; ++g) {
       EXPECT_TRUE(titles.contains(QString::number(g))) << g;
     }

@@ -57,6 +57,9 @@ TEST_F(SheetPreviewTest, ShowsTwoPagesUntilMoreAreAskedFor) {
   EXPECT_EQ(pages()->pageCount(), 6) << "seven shots, two on a page";
   check("Places")->setChecked(true);
   EXPECT_EQ(pages()->pageCount(), 7);
+  check("tables")->setChecked(true);
+  EXPECT_GT(pages()->pageCount(), 7);
+  EXPECT_TRUE(preview_.options().tables);
   EXPECT_TRUE(preview_.options().records);
   EXPECT_TRUE(preview_.options().places);
 }

@@ -24,7 +24,7 @@ TEST(SheetChecklist, NamesTheFieldsThatAreNotGiven) {
   sample.survey.info.client = "  ";
   sample.survey.info.date = "";
   EXPECT_EQ(missing(sample, "Client, site, line, date"),
-            "Not given: client, date. Type it into the survey's details.");
+            "Not given: client, date (Edit, Job, client and crew).");
 }
 
 TEST(SheetChecklist, WantsTheClientsQuestionAndAName) {
