@@ -5,7 +5,7 @@ set -eu
 packages="g++ cmake ninja-build pkg-config ccache
   qt6-base-dev qt6-svg-dev libqcustomplot-dev libqcustomplot2.1-qt6 qt6-qpa-plugins
   libeigen3-dev libboost-dev libsegyio-dev libsqlite3-dev nlohmann-json3-dev
-  libdxflib-dev python3-ezdxf
+  libdxflib-dev python3-ezdxf libxlsxwriter-dev
   libgtest-dev libbenchmark-dev libgsl-dev
   xvfb xauth poppler-utils python3 binutils fonts-dejavu-core"
 

@@ -1,12 +1,11 @@
 #include "widgets/sheet_painter.h"
 
 #include <QBuffer>
-#include <QFileInfo>
 #include <QMarginsF>
 #include <QPainter>
 #include <QPdfWriter>
-#include <QSaveFile>
 
+#include "widgets/sheet_files.h"
 #include "widgets/sheet_pages.h"
 #include "widgets/sheet_plan.h"
 
@@ -17,25 +16,6 @@ constexpr double kMargin = 13.0;     // mm
 constexpr double kFooterRoom = 5.0;  // mm
 constexpr double kInch = 25.4;       // mm
 constexpr int kResolution = 1200;    // dots per inch of the PDF's own units
-
-Failure notWritten(const QString& path, const QString& reason) {
-  return Failure{path.toStdString() + " could not be written (" + reason.toStdString() +
-                 "); check its folder, your right to write there, and the room left."};
-}
-
-/// Writes all or nothing; a device, such as a printer's or the null one, is written to and not replaced.
-Outcome writeBytes(const QString& path, const QByteArray& bytes) {
-  const auto written = [&](QFileDevice& file, bool opened) {
-    return opened && file.write(bytes) == bytes.size() && file.flush();
-  };
-  if (const QFileInfo info(path); info.exists() && !info.isFile()) {
-    QFile file(path);
-    return written(file, file.open(QIODevice::WriteOnly)) ? Outcome(Done{}) : notWritten(path, file.errorString());
-  }
-  QSaveFile file(path);
-  const bool good = written(file, file.open(QIODevice::WriteOnly)) && file.commit();
-  return good ? Outcome(Done{}) : notWritten(path, file.errorString());
-}
 
 QRectF roomOf(const QSizeF& size) {
   return {kMargin, kMargin - 2.0, size.width() - 2.0 * kMargin, size.height() - 2.0 * kMargin - kFooterRoom + 4.0};
@@ -134,7 +114,7 @@ Outcome writeSheetPdf(const QString& path, const Survey& survey, const Interpret
   if (Outcome painted = paintContent(writer, survey, interpretation, sheet); !painted) {
     return painted;
   }
-  return writeBytes(path, bytes);
+  return writeWhole(path, bytes);
 }
 
 }  // namespace strikeplate
