@@ -30,6 +30,39 @@ SheetTicks sheetTicks(double low, double high, int most) {
   return ticks;
 }
 
+std::vector<QPolygonF> lineWithin(const QPolygonF& points, const QRectF& area) {
+  std::vector<QPolygonF> parts;
+  bool open = false;  // the last part ends where the next step begins
+  for (qsizetype i = 0; i + 1 < points.size(); ++i) {
+    const QPointF from = points[i];
+    const QPointF step = points[i + 1] - from;
+    double enter = 0.0, leave = 1.0;
+    const auto cut = [&](double towards, double room) {
+      if (towards == 0.0) {
+        leave = room < 0.0 ? -1.0 : leave;
+      } else {
+        const double at = room / towards;
+        (towards < 0.0 ? enter : leave) = towards < 0.0 ? std::max(enter, at) : std::min(leave, at);
+      }
+    };
+    cut(-step.x(), from.x() - area.left());
+    cut(step.x(), area.right() - from.x());
+    cut(-step.y(), from.y() - area.top());
+    cut(step.y(), area.bottom() - from.y());
+    if (enter > leave) {
+      open = false;
+      continue;
+    }
+    if (!open || enter > 0.0) {
+      parts.push_back({});
+      parts.back() << from + enter * step;
+    }
+    parts.back() << from + leave * step;
+    open = leave == 1.0;
+  }
+  return parts;
+}
+
 void paintAxes(SheetPaper& paper, const SheetFrame& frame, const SheetAxes& axes) {
   const Look& look = paper.look();
   const SheetText number{6.5, false, look.ink, Qt::AlignHCenter};

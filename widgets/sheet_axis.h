@@ -2,6 +2,8 @@
 
 #include <vector>
 
+#include <QPolygonF>
+
 #include "widgets/sheet_paper.h"
 
 namespace strikeplate {
@@ -26,6 +28,10 @@ struct SheetFrame {
   }
   [[nodiscard]] QPointF at(double valueX, double valueY) const { return {x(valueX), y(valueY)}; }
 };
+
+/// The parts of a line through these points that lie within the area, each from edge to edge: not every device that
+/// is painted on can clip. Source: Liang and Barsky, ACM Transactions on Graphics 3 (1984) 1-22.
+std::vector<QPolygonF> lineWithin(const QPolygonF& points, const QRectF& area);
 
 /// Room that the axes need beside the area, mm.
 inline constexpr double kAxisLeft = 13.0;

@@ -73,7 +73,7 @@ QPolygonF pointsOf(const SheetFrame& frame, std::span<const float> samples, doub
   QPolygonF points;
   const double perPoint = std::max(1.0, kPointSpace / (std::abs(frame.y(interval) - frame.y(0.0)) + 1e-12));
   const auto count = static_cast<double>(samples.size());
-  for (double i = std::max(0.0, std::floor((frame.top - start) / interval)); i + 1.0 <= count; i += perPoint) {
+  for (double i = std::max(0.0, std::ceil((frame.top - start) / interval - 1e-9)); i + 1.0 <= count; i += perPoint) {
     const double time = start + i * interval;
     if (time > frame.bottom) {
       break;

@@ -89,7 +89,7 @@ std::vector<Run> runsOf(const SheetFrame& frame, const Section& section, const S
   return runs;
 }
 
-void paintBand(SheetPaper& paper, const Run& run, const QColor& colour) {
+void paintBand(SheetPaper& paper, const QRectF& area, const Run& run, const QColor& colour) {
   QPolygonF outline = run.upper;
   for (auto point = run.lower.crbegin(); point != run.lower.crend(); ++point) {
     outline << *point;
@@ -99,23 +99,28 @@ void paintBand(SheetPaper& paper, const Run& run, const QColor& colour) {
   light.setAlphaF(0.22);
   painter.setPen(Qt::NoPen);
   painter.setBrush(light);
-  painter.drawPolygon(outline);
+  painter.drawPolygon(outline.intersected(QPolygonF(area)));
   painter.setBrush(Qt::NoBrush);
   painter.setPen(QPen(colour.darker(120), 0.18, Qt::DashLine));
-  painter.drawPolyline(run.upper);
-  painter.drawPolyline(run.lower);
+  for (const QPolygonF& edge : {run.upper, run.lower}) {
+    for (const QPolygonF& part : lineWithin(edge, area)) {
+      painter.drawPolyline(part);
+    }
+  }
 }
 
-void paintInterfaceLine(SheetPaper& paper, const Run& run, int layer) {
+void paintInterfaceLine(SheetPaper& paper, const QRectF& area, const Run& run, int layer) {
   QPainter& painter = paper.painter();
   const QColor colour = paper.layerColour(layer).darker(115);
   painter.setPen(paper.layerPen(layer, colour, 0.55));
-  painter.drawPolyline(run.middle);
+  for (const QPolygonF& part : lineWithin(run.middle, area)) {
+    painter.drawPolyline(part);
+  }
   painter.setPen(QPen(colour.darker(130), 0.2));
   painter.setBrush(Qt::white);
   double next = run.middle.isEmpty() ? 0.0 : run.middle.front().x() + 8.0;
   for (const QPointF& point : run.middle) {
-    if (point.x() >= next) {
+    if (point.x() >= next && area.contains(point)) {
       paintLayerSymbol(painter, layer, point, 1.8);
       next = point.x() + 24.0;
     }
@@ -126,12 +131,12 @@ void paintInterfaceLine(SheetPaper& paper, const Run& run, int layer) {
 void paintInterfaces(SheetPaper& paper, const SheetFrame& frame, const Section& section) {
   for (const SectionInterface& interface : section.interfaces) {
     for (const Run& run : runsOf(frame, section, interface)) {
-      paintBand(paper, run, paper.layerColour(interface.layer));
+      paintBand(paper, frame.area, run, paper.layerColour(interface.layer));
     }
   }
   for (const SectionInterface& interface : section.interfaces) {
     for (const Run& run : runsOf(frame, section, interface)) {
-      paintInterfaceLine(paper, run, interface.layer);
+      paintInterfaceLine(paper, frame.area, run, interface.layer);
     }
   }
 }

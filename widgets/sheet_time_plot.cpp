@@ -47,9 +47,12 @@ void paintFits(SheetPaper& paper, const SheetFrame& frame, const Interpretation&
     const double shot = times.shots[static_cast<std::size_t>(branch.shot)].x;
     const double first = times.offset(times.arrivals[static_cast<std::size_t>(branch.arrivals.front())]);
     const double last = times.offset(times.arrivals[static_cast<std::size_t>(branch.arrivals.back())]);
-    paper.line(frame.at(shot + branch.side * first, branch.fit.at(first)),
-               frame.at(shot + branch.side * last, branch.fit.at(last)), paper.layerColour(branch.layer).darker(125),
-               0.3);
+    QPolygonF fit;
+    fit << frame.at(shot + branch.side * first, branch.fit.at(first))
+        << frame.at(shot + branch.side * last, branch.fit.at(last));
+    for (const QPolygonF& part : lineWithin(fit, frame.area)) {
+      paper.line(part.front(), part.back(), paper.layerColour(branch.layer).darker(125), 0.3);
+    }
   }
 }
 

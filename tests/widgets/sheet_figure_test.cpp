@@ -1,10 +1,13 @@
 // The sheet's plots as files of their own.
 #include "widgets/sheet_figure.h"
 
+#include <cmath>
 #include <filesystem>
+#include <limits>
 
 #include <QFile>
 #include <QImage>
+#include <QPainter>
 #include <QSvgRenderer>
 #include <gtest/gtest.h>
 
@@ -35,6 +38,37 @@ TEST_F(SheetFigureTest, AnSvgIsVectorWithItsTextAsText) {
   EXPECT_TRUE(bytes().contains("top of layer 3"));
   EXPECT_FALSE(bytes().contains("<image")) << "no picture made of dots";
   EXPECT_TRUE(QSvgRenderer(QString::fromStdString(path_)).isValid()) << "another reader takes it";
+}
+
+TEST_F(SheetFigureTest, AnSvgLooksLikeThePngAlsoWhereABoundHasNoEnd) {
+  auto& depths = sample_.interpretation.section.interfaces[1].depth;
+  depths[10].high95 = std::numeric_limits<double>::infinity();
+  depths[40].high95 = 1e6;
+  for (const auto kind : {SheetFigure::Kind::Section, SheetFigure::Kind::TravelTimes}) {
+    const SheetFigure figure{kind, 0, {150.0, 90.0}};
+    ASSERT_TRUE(write("same.png", figure).ok());
+    const QImage png =
+        QImage(QString::fromStdString(path_)).scaled(750, 450, Qt::IgnoreAspectRatio, Qt::SmoothTransformation);
+    std::filesystem::remove(path_);
+    ASSERT_TRUE(write("same.svg", figure).ok());
+    QSvgRenderer renderer(QString::fromStdString(path_));
+    QImage svg(png.size(), QImage::Format_RGB32);
+    svg.fill(Qt::white);
+    QPainter painter(&svg);
+    renderer.render(&painter);
+    painter.end();
+    std::filesystem::remove(path_);
+    int different = 0;
+    for (int y = 0; y < png.height(); ++y) {
+      for (int x = 0; x < png.width(); ++x) {
+        different += std::abs(qGray(png.pixel(x, y)) - qGray(svg.pixel(x, y))) > 60 ? 1 : 0;
+      }
+    }
+    EXPECT_LT(different, png.width() * png.height() / 50) << "letters and thin lines may differ, areas may not";
+    for (int x = 0; x < svg.width(); ++x) {
+      EXPECT_EQ(svg.pixelColor(x, svg.height() - 3), QColor(Qt::white)) << "below the legend, at " << x;
+    }
+  }
 }
 
 TEST_F(SheetFigureTest, APngHas300DotsToTheInch) {

@@ -24,6 +24,21 @@ TEST(SheetLayout, TicksAreRoundAndWithinTheSpan) {
   EXPECT_TRUE(sheetTicks(0.0, std::nan(""), 5).at.empty());
 }
 
+TEST(SheetLayout, LinesAreCutAtTheEdgeOfTheirPlot) {
+  const QRectF area(0.0, 0.0, 10.0, 10.0);
+  const auto line = [](std::initializer_list<QPointF> points) { return QPolygonF(QList<QPointF>(points)); };
+  const QPolygonF inside = line({{1.0, 1.0}, {5.0, 5.0}, {9.0, 1.0}});
+  ASSERT_EQ(lineWithin(inside, area).size(), 1U);
+  EXPECT_EQ(lineWithin(inside, area)[0], inside);
+  // Down through the lower edge at x = 3 and up again at x = 7.
+  const auto parts = lineWithin(line({{1.0, 8.0}, {5.0, 12.0}, {9.0, 8.0}}), area);
+  ASSERT_EQ(parts.size(), 2U);
+  EXPECT_EQ(parts[0], line({{1.0, 8.0}, {3.0, 10.0}}));
+  EXPECT_EQ(parts[1], line({{7.0, 10.0}, {9.0, 8.0}}));
+  EXPECT_TRUE(lineWithin(line({{1.0, 12.0}, {9.0, 12.0}}), area).empty());
+  EXPECT_EQ(lineWithin(line({{-1.0, 5.0}, {11.0, 5.0}}), area).size(), 1U);
+}
+
 TEST(SheetLayout, ColumnsFillTheWidthAndTheWidestAreNarrowed) {
   const std::vector<double> roomy = columnWidths({{10.0, 5.0}, {20.0, 5.0}}, 60.0);
   EXPECT_NEAR(std::accumulate(roomy.begin(), roomy.end(), 0.0), 60.0, 1e-9);
