@@ -3,7 +3,6 @@
 #include <vector>
 
 #include <QMainWindow>
-#include <QPageSize>
 #include <QStringList>
 
 #include "app/desk.h"
@@ -70,8 +69,6 @@ class MainWindow : public QMainWindow {
   void loadGeometry();
   void exportCsv();
   void makeSheet();
-  void printSheet(const SheetOptions& options, QPageSize::PageSizeId paper);
-  void saveSheet(const SheetOptions& options, QPageSize::PageSizeId paper);
   void editInfo();
   void editBoreholes();
   void editGeometry();
@@ -91,6 +88,7 @@ class MainWindow : public QMainWindow {
   [[nodiscard]] QString newSurveyPath() const;
 
   Desk desk_;
+  SheetOptions sheet_;  // choices for the sheet, kept while the program runs
   Job job_;
   std::vector<View*> views_;
   LineStrip* lineStrip_ = nullptr;

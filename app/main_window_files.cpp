@@ -1,20 +1,18 @@
 // What the window opens, saves, prints and writes.
 #include <QFileDialog>
 #include <QFileInfo>
-#include <QPageLayout>
-#include <QPrintPreviewDialog>
-#include <QPrinter>
 #include <QSettings>
 
 #include "app/answer_line.h"
 #include "app/main_window.h"
-#include "app/sheet_dialog.h"
 #include "app/versions.h"
 #include "core/report/csv_out.h"
 #include "core/report/section_dxf.h"
+#include "core/report/tables_xlsx.h"
 #include "core/survey/geometry_edit.h"
 #include "core/survey/picks_in.h"
-#include "widgets/sheet_painter.h"
+#include "widgets/sheet_figure.h"
+#include "widgets/sheet_preview.h"
 
 namespace strikeplate {
 
@@ -99,13 +97,17 @@ void MainWindow::exportCsv() {
                                  writeTextFile(base + "layers.csv", layersCsv(interpretation)),
                                  writeTextFile(base + "opinions.csv", opinionsCsv(interpretation)),
                                  writeTextFile(base + "doubts.csv", doubtsCsv(interpretation)),
-                                 writeSectionDxf(base + "section.dxf", survey, interpretation)}) {
+                                 writeTablesXlsx(base + "tables.xlsx", survey, interpretation),
+                                 writeSectionDxf(base + "section.dxf", survey, interpretation),
+                                 writeSheetFigure(folder + "/section.svg", {}, survey, interpretation, {}),
+                                 writeSheetFigure(folder + "/travel_times.svg", {SheetFigure::Kind::TravelTimes},
+                                                  survey, interpretation, {})}) {
     if (!outcome) {
       problems << QString::fromStdString(outcome.message());
     }
   }
   if (problems.isEmpty()) {
-    answerLine_->setHint(tr("Tables and section written to %1").arg(folder));
+    answerLine_->setHint(tr("Tables and plots written to %1").arg(folder));
   } else {
     say(tr("Not everything could be written"), problems.join("\n"));
   }
@@ -116,50 +118,20 @@ void MainWindow::makeSheet() {
     say(tr("Nothing to print"), tr("There is no interpretation yet; open records and pick them first."));
     return;
   }
-  SheetOptions options;
-  options.edits = desk_.editCount();
-  options.builtOn = libraryVersions();
-  SheetDialog dialog(sheetContent(desk_.survey(), *desk_.scene().interpretation, options), this);
-  const int way = dialog.exec();
-  dialog.addTo(options);
-  if (way == SheetDialog::Print) {
-    printSheet(options, dialog.paper());
-  } else if (way == SheetDialog::Pdf) {
-    saveSheet(options, dialog.paper());
+  sheet_.edits = desk_.editCount();
+  sheet_.builtOn = libraryVersions();
+  sheet_.blackAndWhite = QSettings().value("blackAndWhite").toBool();
+  SheetPreview preview(desk_.survey(), *desk_.scene().interpretation, sheet_, this);
+  preview.setFolder(QSettings().value("folder").toString());
+  if (QSettings().contains("letter")) {
+    preview.setPaper(QSettings().value("letter").toBool() ? QPageSize::Letter : QPageSize::A4);
   }
-}
-
-void MainWindow::printSheet(const SheetOptions& options, QPageSize::PageSizeId paper) {
-  QPrinter printer(QPrinter::HighResolution);
-  printer.setDocName(tr("Refraction interpretation"));
-  printer.setPageSize(QPageSize(paper));
-  printer.setPageMargins(QMarginsF(0, 0, 0, 0), QPageLayout::Millimeter);
-  QPrintPreviewDialog preview(&printer, this);
-  Outcome printed = Done{};
-  connect(&preview, &QPrintPreviewDialog::paintRequested, this, [&](QPrinter* device) {
-    printed = paintSheet(*device, desk_.survey(), *desk_.scene().interpretation, options);
-  });
+  connect(&preview, &SheetPreview::written, answerLine_, &AnswerLine::setHint);
   preview.exec();
-  if (!printed) {
-    say(tr("Not printed"), QString::fromStdString(printed.message()));
-  }
-}
-
-void MainWindow::saveSheet(const SheetOptions& options, QPageSize::PageSizeId paper) {
-  QString path = QFileDialog::getSaveFileName(this, tr("Save the sheet as PDF"),
-                                              QSettings().value("folder").toString(), tr("PDF (*.pdf)"));
-  if (path.isEmpty()) {
-    return;
-  }
-  if (!path.endsWith(".pdf", Qt::CaseInsensitive)) {
-    path += ".pdf";
-  }
-  if (const Outcome written = writeSheetPdf(path, desk_.survey(), *desk_.scene().interpretation, options, paper);
-      !written) {
-    say(tr("Not written"), QString::fromStdString(written.message()));
-  } else {
-    answerLine_->setHint(tr("Sheet written to %1").arg(path));
-  }
+  sheet_ = preview.options();
+  sheet_.answer.clear();  // it was about the interpretation as it is now
+  QSettings().setValue("letter", preview.paper() == QPageSize::Letter);
+  QSettings().setValue("blackAndWhite", sheet_.blackAndWhite);
 }
 
 }  // namespace strikeplate

@@ -41,7 +41,7 @@ void MainWindow::buildFileMenu() {
   add(menu, tr("Read &picks from a table..."), {}, this, &MainWindow::importPicks);
   menu->addSeparator();
   add(menu, tr("&Print the sheet, or save it as PDF..."), QKeySequence::Print, this, &MainWindow::makeSheet);
-  add(menu, tr("Write &tables and section (CSV, DXF)..."), {}, this, &MainWindow::exportCsv);
+  add(menu, tr("Write &tables and plots (CSV, XLSX, DXF, SVG)..."), {}, this, &MainWindow::exportCsv);
   menu->addSeparator();
   add(menu, tr("Open the &demo line"), {}, this, &MainWindow::openDemo);
   add(menu, tr("&Quit"), QKeySequence::Quit, this, &QWidget::close);

@@ -192,6 +192,14 @@ QPageSize::PageSizeId SheetPreview::paper() const {
   return static_cast<QPageSize::PageSizeId>(paper_->currentData().toInt());
 }
 
+void SheetPreview::setPaper(QPageSize::PageSizeId paper) {
+  paper_->setCurrentIndex(paper_->findData(paper));
+}
+
+void SheetPreview::setFolder(const QString& folder) {
+  folder_ = folder;
+}
+
 bool SheetPreview::inFeet() const {
   return survey_.settings.feet;
 }
@@ -265,7 +273,7 @@ void SheetPreview::askAndPrint() {
 }
 
 void SheetPreview::askAndSave() {
-  QString path = QFileDialog::getSaveFileName(this, tr("Save the sheet as PDF"), QString(), tr("PDF (*.pdf)"));
+  QString path = QFileDialog::getSaveFileName(this, tr("Save the sheet as PDF"), folder_, tr("PDF (*.pdf)"));
   if (path.isEmpty()) {
     return;
   }

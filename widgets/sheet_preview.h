@@ -34,6 +34,9 @@ class SheetPreview : public QDialog {
   /// What the choices come to. The answer is empty as long as the user has not changed the drafted one.
   [[nodiscard]] SheetOptions options() const;
   [[nodiscard]] QPageSize::PageSizeId paper() const;
+  void setPaper(QPageSize::PageSizeId paper);
+  /// Where saving begins to look.
+  void setFolder(const QString& folder);
   [[nodiscard]] bool inFeet() const;
   /// The words that the preview shows.
   [[nodiscard]] SheetContent content() const;
@@ -62,6 +65,7 @@ class SheetPreview : public QDialog {
   Survey survey_;                  // in the unit chosen
   Interpretation interpretation_;  // with doubts worded in that unit
   SheetOptions given_;
+  QString folder_;
   std::unique_ptr<QPrinter> printer_;
   QPrintPreviewWidget* preview_ = nullptr;
   QComboBox* paper_ = nullptr;

@@ -55,19 +55,20 @@ std::string layout(const Survey& survey) {
 }
 
 std::string picked(const Survey& survey) {
-  int live = 0, picks = 0, hand = 0;
+  int live = 0, picks = 0, automatic = 0;
   for (const Shot& shot : survey.shots) {
     for (const ShotTrace& trace : shot.traces) {
       live += trace.state != TraceState::Dead ? 1 : 0;
       picks += trace.state != TraceState::Dead && trace.pick ? 1 : 0;
-      hand += trace.pick && trace.pick->origin == PickOrigin::Hand ? 1 : 0;
+      automatic +=
+          trace.state != TraceState::Dead && trace.pick && trace.pick->origin == PickOrigin::Automatic ? 1 : 0;
     }
   }
   if (picks < live || live == 0) {
     return counted(live - picks, "live trace has", "live traces have") +
            " no first break; pick them or set their state.";
   }
-  return hand == 0 ? "No pick was set by hand; look at the records before the sheet leaves." : "";
+  return automatic == picks ? "Every pick is the program's own; look at the records before the sheet leaves." : "";
 }
 
 std::string reciprocity(const Interpretation& interpretation) {

@@ -13,6 +13,7 @@
 #include "app/main_window.h"
 #include "widgets/record_view.h"
 #include "widgets/sheet_painter.h"
+#include "widgets/sheet_preview.h"
 #include "widgets/travel_time_plot.h"
 
 namespace strikeplate {
@@ -154,6 +155,23 @@ TEST_F(Window, TheSurveyIsOnDiskAfterEveryEditAndOpensWithItsHistory) {
   EXPECT_EQ(window->desk().editCount(), edits);
   EXPECT_EQ(window->desk().survey().shots, before.shots);
   EXPECT_TRUE(window->desk().canUndo());
+}
+
+TEST_F(Window, TheSheetIsPreviewedWithTheAnswerOfTheLine) {
+  QString answer;
+  QTimer::singleShot(0, window.get(), [&answer] {
+    auto* preview = qobject_cast<SheetPreview*>(QApplication::activeModalWidget());
+    ASSERT_NE(preview, nullptr);
+    answer = QString::fromStdString(preview->content().answer);
+    preview->reject();
+  });
+  for (QAction* action : window->findChildren<QAction*>()) {
+    if (action->text().contains("sheet")) {
+      action->trigger();
+      break;
+    }
+  }
+  EXPECT_TRUE(answer.contains("the top of layer 2 lies")) << answer.toStdString();
 }
 
 TEST_F(Window, TheSheetOfWhatIsShownIsPrinted) {

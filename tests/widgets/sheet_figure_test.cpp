@@ -20,7 +20,9 @@ class SheetFigureTest : public ::testing::Test {
  protected:
   void TearDown() override { std::filesystem::remove(path_); }
   Outcome write(const std::string& name, const SheetFigure& figure, const SheetOptions& options = {}) {
-    path_ = (std::filesystem::path(::testing::TempDir()) / name).string();
+    path_ = (std::filesystem::path(::testing::TempDir()) /
+             (::testing::UnitTest::GetInstance()->current_test_info()->name() + name))
+                .string();
     return writeSheetFigure(QString::fromStdString(path_), figure, sample_.survey, sample_.interpretation, options);
   }
   [[nodiscard]] QByteArray bytes() const {

@@ -23,8 +23,7 @@ TEST(SheetChecklist, NamesTheFieldsThatAreNotGiven) {
   EXPECT_EQ(missing(sample, "Client, site, line, date"), "");
   sample.survey.info.client = "  ";
   sample.survey.info.date = "";
-  EXPECT_EQ(missing(sample, "Client, site, line, date"),
-            "Not given: client, date (Edit, Job, client and crew).");
+  EXPECT_EQ(missing(sample, "Client, site, line, date"), "Not given: client, date (Edit, Job, client and crew).");
 }
 
 TEST(SheetChecklist, WantsTheClientsQuestionAndAName) {
@@ -51,6 +50,15 @@ TEST(SheetChecklist, CountsLiveTracesWithoutAFirstBreak) {
   auto sample = testing::sheetSample();
   // The sample leaves out every seventeenth geophone from the fourth on: 3 of 48 on each of 7 shots.
   EXPECT_EQ(missing(sample, "First breaks"), "21 live traces have no first break; pick them or set their state.");
+  for (Shot& shot : sample.survey.shots) {
+    for (ShotTrace& trace : shot.traces) {
+      trace.pick = Pick{0.01, 1e-3, 0, PickOrigin::Automatic};
+    }
+  }
+  EXPECT_EQ(missing(sample, "First breaks"),
+            "Every pick is the program's own; look at the records before the sheet leaves.");
+  sample.survey.shots[0].traces[0].pick->origin = PickOrigin::Imported;
+  EXPECT_EQ(missing(sample, "First breaks"), "");
 }
 
 TEST(SheetChecklist, CountsPairsBeyondTheirTolerance) {

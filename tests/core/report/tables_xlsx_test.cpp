@@ -76,9 +76,15 @@ class TablesXlsx : public ::testing::Test {
     }
   }
 
+  // Tests run side by side, each with files of its own.
+  static std::string pathOf(const std::string& ending) {
+    const std::string test = ::testing::UnitTest::GetInstance()->current_test_info()->name();
+    return (std::filesystem::path(::testing::TempDir()) / (test + ending)).string();
+  }
+
   const testing::SheetSample sample_ = testing::sheetSample();
-  const std::string path_ = (std::filesystem::path(::testing::TempDir()) / "strikeplate tables.xlsx").string();
-  const std::string script_ = (std::filesystem::path(::testing::TempDir()) / "strikeplate_read_xlsx.py").string();
+  const std::string path_ = pathOf(" tables.xlsx");
+  const std::string script_ = pathOf(".py");
 };
 
 TEST_F(TablesXlsx, EveryTableIsThatOfTheCsvFile) {
