@@ -54,7 +54,11 @@ double paintSignature(SheetPaper& paper, const QPointF& corner, double width, co
   const double each = (width - kSeal - 12.0) / 2.0;
   const auto signLine = [&](double x, double y, const QString& caption, const QString& name) {
     paper.line(corner + QPointF(x, y), corner + QPointF(x + each, y), look.ink, 0.2);
-    paper.label(corner + QPointF(x, y - 1.0), name, {8.0, false, look.ink});
+    SheetText style{8.0, false, look.ink};
+    while (style.points > style.leastPoints && paper.width(name, style) > each) {
+      style.points -= 0.25;
+    }
+    paper.label(corner + QPointF(x, y - 1.0), name, style);
     paper.label(corner + QPointF(x, y + 2.8), caption, small);
   };
   signLine(0.0, 8.5, QStringLiteral("Licensed professional, name"), words(sheet.signatory));

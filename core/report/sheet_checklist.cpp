@@ -11,6 +11,8 @@
 namespace strikeplate {
 namespace {
 
+constexpr std::size_t kLongestAnswer = 1400;  // letters: what page 1 holds for certain
+
 using Field = std::pair<const char*, const std::string&>;
 
 // "Not given: client, site (Edit, Job, client and crew)."
@@ -140,6 +142,10 @@ std::vector<SheetCheck> sheetChecklist(const Survey& survey, const Interpretatio
       {"Purpose: the client's question", trimmed(options.question).empty()
                                              ? "Only the general question would be printed; write the client's own."
                                              : ""},
+      {"An answer that fits the page",
+       options.answer.size() > kLongestAnswer
+           ? "The answer is longer than page 1 holds and would be cut; two sentences do."
+           : ""},
       {"Client, site, line, date",
        notGiven({{"client", info.client}, {"site", info.site}, {"line", info.line}, {"date", info.date}})},
       {"Crew, observer, weather and ground",

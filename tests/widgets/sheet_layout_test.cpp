@@ -85,7 +85,7 @@ std::vector<SheetMark> marksOf(const testing::SheetSample& sample, const QSizeF&
   SheetOptions options;
   options.edits = 12;
   options.blackAndWhite = grey;
-  options.signatory = "Dr. Agnieszka Featherstonehaugh-Grzegorzewska";
+  options.signatory = "Dr. Agnieszka Featherstonehaugh-Grzegorzewska, Chartered and European Geologist";
   options.builtOn = {"Qt 6.4.2", "Eigen 3.4.0", "SQLite 3.45.1"};
   QImage image((paper * kPerMillimetre).toSize(), QImage::Format_RGB32);
   image.fill(Qt::white);
@@ -144,6 +144,21 @@ TEST(SheetLayout, NoTextLiesOverAnotherBeyondTheMarginsOrIsCut) {
       }
     }
   }
+}
+
+TEST(SheetLayout, AnAnswerAsLongAsTheChecklistAllowsIsNotCut) {
+  constexpr double kPerMillimetre = 12.0;
+  const auto sample = testing::fullSheetSample();
+  SheetOptions options;
+  while (options.answer.size() < 1380) {
+    options.answer += "Rock lies deep here. ";
+  }
+  QImage image((kLetter * kPerMillimetre).toSize(), QImage::Format_RGB32);
+  QPainter painter(&image);
+  std::vector<SheetMark> marks;
+  paintSheetPage(painter, kPerMillimetre, kLetter, 1, sample.survey, sample.interpretation,
+                 sheetContent(sample.survey, sample.interpretation, options), &marks);
+  EXPECT_EQ(faults(marks, kLetter), "");
 }
 
 TEST(SheetLayout, FurtherPagesHoldEveryShotAndGeophoneAndNothingIsCut) {

@@ -39,6 +39,15 @@ TEST(SheetChecklist, WantsTheClientsQuestionAndAName) {
   EXPECT_EQ(missing(sample, "Records with picks shown", options), "");
 }
 
+TEST(SheetChecklist, SaysWhenTheUsersAnswerIsTooLongForThePage) {
+  const auto sample = testing::sheetSample();
+  SheetOptions options;
+  options.answer = "Rock at 5 m.";
+  EXPECT_EQ(missing(sample, "An answer that fits the page", options), "");
+  options.answer.assign(2000, 'x');
+  EXPECT_NE(missing(sample, "An answer that fits the page", options), "");
+}
+
 TEST(SheetChecklist, WantsShotsAtBothEnds) {
   auto sample = testing::sheetSample();
   EXPECT_EQ(missing(sample, "Shots at both ends"), "");
@@ -85,7 +94,7 @@ TEST(SheetChecklist, AnEmptySurveyLacksNearlyAllAndCrashesNothing) {
   for (const SheetCheck& check : sheetChecklist(sample.survey, sample.interpretation, {})) {
     there += check.missing.empty() ? 1 : 0;
   }
-  EXPECT_EQ(there, 1) << "no correction needs no reason";
+  EXPECT_EQ(there, 2) << "no correction needs no reason, and the draft fits";
 }
 
 }  // namespace
