@@ -166,17 +166,26 @@ void SheetPaper::label(const QPointF& base, const QString& words, const SheetTex
     return;
   }
   const QFont face = font(style);
-  const double advance = QFontMetricsF(face).horizontalAdvance(words);
+  const QFontMetricsF metrics(face);
+  // Drawn by a layout, as texts are: a painter on a printer would take the printer's own, wider letters.
+  QTextLayout layout(words, face);
+  layout.setTextOption(QTextOption(Qt::AlignLeft | Qt::AlignAbsolute));
+  layout.beginLayout();
+  QTextLine only = layout.createLine();
+  if (only.isValid()) {
+    only.setNumColumns(static_cast<int>(words.size()));
+    only.setPosition({0.0, 0.0});
+  }
+  layout.endLayout();
+  const double advance = metrics.horizontalAdvance(words);
   const double shift = style.align.testFlag(Qt::AlignRight)     ? advance
                        : style.align.testFlag(Qt::AlignHCenter) ? advance / 2
                                                                 : 0;
   painter_.save();
   painter_.scale(1.0 / scale_, 1.0 / scale_);
   painter_.setPen(style.colour);
-  painter_.setFont(face);
-  painter_.drawText(base * scale_ - QPointF(shift, 0.0), words);
+  layout.draw(&painter_, base * scale_ - QPointF(shift, only.isValid() ? only.ascent() : 0.0));
   painter_.restore();
-  const QFontMetricsF metrics(face);
   addMark(
       {base.x() - shift / scale_, base.y() - metrics.ascent() / scale_, advance / scale_, metrics.height() / scale_},
       words, false);

@@ -76,7 +76,8 @@ void paintResiduals(SheetPaper& paper, const QRectF& area, const SheetFigures& f
   painter.setBrush(Qt::NoBrush);
   painter.setPen(QPen(paper.look().ink, 0.2));
   painter.drawRect(frame.area);
-  QString title = QStringLiteral("Residuals along the line, picked minus predicted (ms)");
+  QString title = QStringLiteral("Residuals, picked minus predicted (ms), along the line (%1)")
+                      .arg(QString::fromStdString(units.lengthUnit()));
   if (beyond > 0) {
     title += QStringLiteral("; %1 off the scale").arg(beyond);
   }
