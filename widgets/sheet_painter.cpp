@@ -1,6 +1,7 @@
 #include "widgets/sheet_painter.h"
 
 #include <QBuffer>
+#include <QImage>
 #include <QMarginsF>
 #include <QPainter>
 #include <QPdfWriter>
@@ -92,6 +93,20 @@ void paintSheetPage(QPainter& painter, double perMillimetre, const QSizeF& size,
   const QRectF room = roomOf(size);
   const SheetFigures figures{survey, interpretation, sheet};
   paintPlanned(paper, room, figures, sheetPages(paper, room, figures), page);
+}
+
+QStringList sheetLeftOut(const QSizeF& size, const Survey& survey, const Interpretation& interpretation,
+                         const SheetContent& sheet) {
+  constexpr double kPerMillimetre = kResolution / kInch;
+  QImage nowhere(1, 1, QImage::Format_RGB32);
+  QPainter painter(&nowhere);
+  SheetPaper paper(painter, kPerMillimetre);
+  QStringList leftOut;
+  paper.noteLeftOut(&leftOut);
+  const SheetFigures figures{survey, interpretation, sheet};
+  paintClientPage(paper, roomOf(size), figures);
+  paintReviewerPage(paper, roomOf(size), figures);
+  return leftOut;
 }
 
 Outcome paintSheet(QPagedPaintDevice& device, const Survey& survey, const Interpretation& interpretation,

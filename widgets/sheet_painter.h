@@ -20,6 +20,11 @@ void paintSheetPage(QPainter& painter, double perMillimetre, const QSizeF& paper
                     const Interpretation& interpretation, const SheetContent& sheet,
                     std::vector<SheetMark>* marks = nullptr);
 
+/// What the first two pages have no room for on a paper of this size (mm), such as "6 of boreholes"; the further
+/// pages with the tables hold it. Empty when everything is there.
+QStringList sheetLeftOut(const QSizeF& paper, const Survey& survey, const Interpretation& interpretation,
+                         const SheetContent& sheet);
+
 /// Paints every page on a printer, a preview's device or a PDF writer; the paper's size and margins are the device's
 /// own. Fails when the device cannot be painted on.
 Outcome paintSheet(QPagedPaintDevice& device, const Survey& survey, const Interpretation& interpretation,

@@ -112,6 +112,12 @@ void SheetPaper::addMark(const QRectF& box, const QString& words, bool cut) {
   }
 }
 
+void SheetPaper::leaveOut(const QString& words) {
+  if (leftOut_ != nullptr && !dry_) {
+    *leftOut_ << words;
+  }
+}
+
 // In device units, which are fine enough for whole pixels; a font of a few millimetres' units would be rounded.
 QFont SheetPaper::font(const SheetText& style) const {
   QFont font(QStringLiteral("Sans Serif"));

@@ -6,6 +6,7 @@
 #include <QPainter>
 #include <QRectF>
 #include <QString>
+#include <QStringList>
 #include <QTransform>
 
 #include "widgets/look.h"
@@ -52,6 +53,10 @@ class SheetPaper {
   /// Every text painted from now on is added to `marks`, which has to outlive the paper.
   void note(std::vector<SheetMark>* marks) { marks_ = marks; }
 
+  /// What has no room on the page, such as "6 of Boreholes", is added to `words`, which has to outlive the paper.
+  void noteLeftOut(QStringList* words) { leftOut_ = words; }
+  void leaveOut(const QString& words);
+
   /// For lines and areas, in mm.
   [[nodiscard]] QPainter& painter() { return painter_; }
 
@@ -78,6 +83,7 @@ class SheetPaper {
   bool blackAndWhite_ = false;
   QTransform page_;  // from mm to the device
   std::vector<SheetMark>* marks_ = nullptr;
+  QStringList* leftOut_ = nullptr;
 };
 
 }  // namespace strikeplate

@@ -209,7 +209,19 @@ SheetContent SheetPreview::content() const {
 }
 
 std::vector<SheetCheck> SheetPreview::checklist() const {
-  return sheetChecklist(survey_, interpretation_, options());
+  std::vector<SheetCheck> checks = sheetChecklist(survey_, interpretation_, options());
+  SheetCheck room{"Everything on the pages", ""};
+  const SheetContent sheet = content();
+  if (!sheet.tablePages) {
+    const QSizeF size = QPageSize(paper()).size(QPageSize::Millimeter);
+    const QStringList leftOut = sheetLeftOut(size, survey_, interpretation_, sheet);
+    if (!leftOut.isEmpty()) {
+      room.missing = "Two pages leave out " + leftOut.join(QStringLiteral(", ")).toStdString() +
+                     "; tick the tables in full to print them.";
+    }
+  }
+  checks.push_back(room);
+  return checks;
 }
 
 Outcome SheetPreview::print(QPrinter& printer) const {

@@ -62,7 +62,9 @@ void paintResiduals(SheetPaper& paper, const QRectF& area, const SheetFigures& f
   frame.bottom = -span;
   frame.top = span;
   const Units units{figures.sheet.feet};
-  paintAxes(paper, frame, {QString(), QString(), units.fromMetres(1.0), 1e3, 3.6});
+  constexpr double kTicks = 5.0;  // fewer may leave the zero alone with a number, and the plot without a scale
+  const double tickHeight = std::min(3.6, frame.area.height() / kTicks);
+  paintAxes(paper, frame, {QString(), QString(), units.fromMetres(1.0), 1e3, tickHeight});
   paper.line(frame.at(frame.left, 0.0), frame.at(frame.right, 0.0), paper.look().ink, 0.2);
   QPainter& painter = paper.painter();
   const double size = residuals.size() < 400 ? 1.3 : 0.8;

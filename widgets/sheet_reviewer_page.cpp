@@ -15,11 +15,30 @@ struct ReviewerLimits {
   int reciprocals = 10;
   int shots = 31;
   int doubtsOfAKind = 3;
-  double residuals = 26.0;  ///< mm for their plot
+  double residuals = 26.0;  ///< mm for their plot, 0 for none
   bool doubtReasons = true;
   int files = 64;
   double points = 6.6;
 };
+
+// Besides the tables, which note their own rows.
+void noteLeftOut(SheetPaper& paper, const SheetContent& sheet, const ReviewerLimits& limits) {
+  std::size_t doubts = 0;
+  for (const SheetDoubtKind& kind : sheet.doubts) {
+    const auto most = static_cast<std::size_t>(limits.doubtsOfAKind);
+    doubts += kind.doubts.size() > most ? kind.doubts.size() - most : 0;
+  }
+  if (doubts > 0) {
+    paper.leaveOut(QStringLiteral("%1 of doubts").arg(doubts));
+  }
+  if (!limits.doubtReasons) {
+    paper.leaveOut(QStringLiteral("what the doubts rest on"));
+  }
+  if (static_cast<std::size_t>(limits.files) < sheet.files.size()) {
+    paper.leaveOut(
+        QStringLiteral("%1 of input files").arg(sheet.files.size() - static_cast<std::size_t>(limits.files)));
+  }
+}
 
 double paintReviewerTables(SheetPaper& paper, const QPointF& corner, double width, const SheetFigures& figures,
                            const ReviewerLimits& limits) {
@@ -38,6 +57,7 @@ double paintReviewerTables(SheetPaper& paper, const QPointF& corner, double widt
     paintResiduals(paper, {corner.x(), corner.y() + y, width, limits.residuals}, figures);
     y += limits.residuals + kSheetSpace;
   }
+  noteLeftOut(paper, sheet, limits);
   return y + paintList(paper, corner + QPointF(0, y), width,
                        QStringLiteral("Doubts, the gravest and strongest first"),
                        doubtLines(sheet, limits.doubtsOfAKind, limits.doubtReasons), limits.points);
@@ -88,14 +108,15 @@ double paintReviewerEnd(SheetPaper& paper, const QPointF& corner, double width, 
 bool shortenTables(ReviewerLimits& limits) {
   constexpr double kSmall = 5.4;
   constexpr double kSmallest = 4.6;
+  constexpr double kLeastResiduals = 20.0;
   if (limits.shots > 12) {
     limits.shots = std::max(12, limits.shots - 2);
   } else if (limits.reciprocals > 6) {
     limits.reciprocals -= 2;
   } else if (limits.doubtsOfAKind > 2) {
     --limits.doubtsOfAKind;
-  } else if (limits.residuals > 0.0) {
-    limits.residuals = 0.0;
+  } else if (limits.residuals > kLeastResiduals) {
+    limits.residuals -= 3.0;
   } else if (limits.reciprocals > 4) {
     limits.reciprocals -= 2;
   } else if (limits.doubtsOfAKind > 1) {
@@ -120,6 +141,7 @@ bool shortenTables(ReviewerLimits& limits) {
 ReviewerLimits limitsFor(SheetPaper& paper, double width, double height, const SheetFigures& figures) {
   const SheetContent& sheet = figures.sheet;
   constexpr double kLeastPoints = 4.6;
+  constexpr double kSmall = 5.2;  // in which a list is still read rather than cut
   constexpr int kLeastFiles = 12;
   ReviewerLimits limits;
   limits.residuals = hasResiduals(figures.interpretation) ? limits.residuals : 0.0;
@@ -129,7 +151,7 @@ ReviewerLimits limitsFor(SheetPaper& paper, double width, double height, const S
   const auto tables = [&] { return paintReviewerTables(paper, {}, column, figures, limits); };
   const auto lists = [&] { return paintReviewerWords(paper, {}, column, sheet, limits); };
   while (measured(paper, lists) > height && limits.points > kLeastPoints) {
-    limits.points > 5.6 || limits.files <= kLeastFiles ? limits.points -= 0.2 : limits.files -= 4;
+    limits.points > kSmall || limits.files <= kLeastFiles ? limits.points -= 0.2 : limits.files -= 2;
   }
   while (measured(paper, tables) > height && shortenTables(limits)) {
   }

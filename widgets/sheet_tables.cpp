@@ -96,6 +96,7 @@ double paintRows(SheetPaper& paper, const QPointF& corner, double width, const S
   if (shown < table.rows.size()) {
     const QString where =
         style.restFollows ? QStringLiteral("in the tables behind") : QStringLiteral("in the program");
+    paper.leaveOut(QStringLiteral("%1 of %2").arg(table.rows.size() - shown).arg(words(table.title).toLower()));
     const QString more = QStringLiteral("%1 more %2").arg(table.rows.size() - shown).arg(where);
     y += kRowSpace + paper.text(corner + QPointF(0, y + kRowSpace), width, more, {style.points, false, look.faint});
   }

@@ -63,7 +63,8 @@ SheetContent sheetContent(const Survey& survey, const Interpretation& interpreta
   sheet.opinions = sheetOpinions(source);
   sheet.reciprocals = sheetReciprocals(source);
   sheet.shots = sheetShots(source);
-  sheet.allDoubts = sheetDoubtTable(sheetDoubts(source));
+  sheet.noDoubts = noDoubts(interpretation.section);
+  sheet.allDoubts = sheetDoubtTable(sheetDoubts(source), sheet.noDoubts);
   sheet.geophonePlaces = sheetGeophonePlaces(source);
   sheet.shotPlaces = sheetShotPlaces(source);
   sheet.doubts = sheetDoubts(source);

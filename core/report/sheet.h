@@ -68,6 +68,7 @@ struct SheetContent {
   std::string materials;  ///< published materials of such velocities, marked as a hint
   SheetTable allDoubts, allFiles, geophonePlaces, shotPlaces;  ///< for the optional pages; always there
   std::vector<SheetDoubtKind> doubts;                          ///< the gravest kind first
+  std::string noDoubts;                                        ///< stands in their place when there are none
   std::vector<std::string> picks;                              ///< how they came about
   std::vector<std::string> triggers;                           ///< corrections by the user and by the section itself
   std::vector<std::string> fit;                                ///< how well the section explains them

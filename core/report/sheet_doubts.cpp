@@ -60,7 +60,12 @@ std::vector<SheetDoubtKind> sheetDoubts(const SheetSource& source) {
   return sorted;
 }
 
-SheetTable sheetDoubtTable(const std::vector<SheetDoubtKind>& kinds) {
+std::string noDoubts(const Section& section) {
+  return section.determined ? "The program's checks found nothing to doubt."
+                            : "There is no section whose doubts could be listed.";
+}
+
+SheetTable sheetDoubtTable(const std::vector<SheetDoubtKind>& kinds, const std::string& none) {
   SheetTable table;
   table.title = "Doubts";
   table.columns = {"Kind", "Doubt", "Rests on", "What would settle it"};
@@ -69,7 +74,7 @@ SheetTable sheetDoubtTable(const std::vector<SheetDoubtKind>& kinds) {
       table.rows.push_back({kind.kind, doubt.says, doubt.restsOn, doubt.settles});
     }
   }
-  table.summary = table.rows.empty() ? "The program's checks found nothing to doubt." : "";
+  table.summary = table.rows.empty() ? none : "";
   return table;
 }
 
@@ -89,7 +94,7 @@ std::vector<std::string> doubtLines(const SheetContent& sheet, int mostOfAKind, 
     }
   }
   if (lines.empty()) {
-    lines.emplace_back("The program's checks found nothing to doubt.");
+    lines.push_back(sheet.noDoubts);
   }
   return lines;
 }

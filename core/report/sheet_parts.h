@@ -55,7 +55,10 @@ std::vector<std::string> sheetReach(const SheetSource& source);
 std::vector<SheetFile> sheetFiles(const SheetSource& source);
 /// Every one of them, a row each.
 SheetTable sheetFileTable(const std::vector<SheetFile>& files);
-SheetTable sheetDoubtTable(const std::vector<SheetDoubtKind>& kinds);
+SheetTable sheetDoubtTable(const std::vector<SheetDoubtKind>& kinds, const std::string& none);
+
+/// What stands in the place of doubts when there are none: without a section that is no praise.
+std::string noDoubts(const Section& section);
 
 /// CRC-32 (IEEE 802.3) of a file's bytes as 8 hex digits; nothing when it cannot be read to its end.
 std::optional<std::string> fileChecksum(const std::string& path);

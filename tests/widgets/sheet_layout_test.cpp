@@ -1,4 +1,5 @@
 // The sheet's geometry: plain functions of numbers, and where every text of a whole page comes to stand.
+#include <algorithm>
 #include <numeric>
 
 #include <QImage>
@@ -142,6 +143,27 @@ TEST(SheetLayout, NoTextLiesOverAnotherBeyondTheMarginsOrIsCut) {
               << "sample " << s << ", page " << page << ", width " << paper.width() << (feet ? " ft" : " m");
         }
       }
+    }
+  }
+}
+
+TEST(SheetLayout, ResidualsHaveAScaleAlsoWhereThereIsLittleRoom) {
+  for (const testing::SheetSample& sample : {testing::sheetSample(), testing::fullSheetSample()}) {
+    for (const QSizeF& paper : {kA4, kLetter}) {
+      const std::vector<SheetMark> marks = marksOf(sample, paper, 2);
+      const auto title = std::find_if(marks.begin(), marks.end(), [](const SheetMark& mark) {
+        return mark.words.startsWith("Residuals, picked minus predicted (ms), along the line (m)");
+      });
+      ASSERT_NE(title, marks.end());
+      // The numbers at its left: below the title, within the plot's height, at least one above and one below zero.
+      int numbers = 0;
+      for (const SheetMark& mark : marks) {
+        const double down = mark.box.center().y() - title->box.bottom();
+        bool number = false;
+        mark.words.toDouble(&number);
+        numbers += number && mark.box.right() < title->box.left() + 12.0 && down > 0.0 && down < 22.0 ? 1 : 0;
+      }
+      EXPECT_GE(numbers, 3) << "width " << paper.width();
     }
   }
 }

@@ -127,6 +127,20 @@ TEST_F(SheetPreviewTest, WhatIsMissingStandsFirstAndGoesWhenItIsGiven) {
   EXPECT_EQ(preview_.content().question, "A. Vance.");
 }
 
+TEST(SheetPreviewOfALongLine, WhatTwoPagesLeaveOutIsListedBeforePrinting) {
+  const auto sample = testing::fullSheetSample();
+  const auto room = [&](bool tables) {
+    SheetOptions options;
+    options.tables = tables;
+    return SheetPreview(sample.survey, sample.interpretation, options).checklist().back();
+  };
+  EXPECT_EQ(room(false).item, "Everything on the pages");
+  for (const char* left : {" of boreholes", " of reciprocal times", " of shots", "35 of doubts", " of input files"}) {
+    EXPECT_NE(room(false).missing.find(left), std::string::npos) << left << " in: " << room(false).missing;
+  }
+  EXPECT_EQ(room(true).missing, "") << "then they have pages of their own";
+}
+
 TEST_F(SheetPreviewTest, SavesWhatItShows) {
   const std::string path = (std::filesystem::path(::testing::TempDir()) / "sheet preview.pdf").string();
   check("record")->setChecked(true);

@@ -52,11 +52,20 @@ TEST(SheetDoubts, TheStrongestComesWithWhatItRestsOnAndHowManyOthersThereAre) {
 }
 
 TEST(SheetDoubts, NoDoubtIsSaidToo) {
-  const testing::SheetSample sample;
+  auto sample = testing::sheetSample();
+  sample.interpretation.doubts.clear();
   const SheetContent sheet = sheetContent(sample.survey, sample.interpretation, {});
   EXPECT_TRUE(sheet.strongestDoubt.empty());
   ASSERT_EQ(doubtLines(sheet, 2, true).size(), 1U);
   EXPECT_EQ(doubtLines(sheet, 2, true)[0], "The program's checks found nothing to doubt.");
+}
+
+TEST(SheetDoubts, WithoutASectionNoDoubtIsNoPraise) {
+  const auto sample = testing::emptySheetSample();
+  const SheetContent sheet = sheetContent(sample.survey, sample.interpretation, {});
+  ASSERT_EQ(doubtLines(sheet, 2, true).size(), 1U);
+  EXPECT_EQ(doubtLines(sheet, 2, true)[0], "There is no section whose doubts could be listed.");
+  EXPECT_EQ(sheet.allDoubts.summary, doubtLines(sheet, 2, true)[0]);
 }
 
 TEST(SheetDoubts, AFileIsNamedWithoutItsFolders) {
