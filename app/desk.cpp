@@ -107,8 +107,20 @@ void Desk::redo() {
 
 void Desk::afterHistoryMoved(const Outcome& written) {
   report(written);
+  const bool sameLine = committed_->lineAtHand == file_->survey().lineAtHand &&
+                        committed_->otherLines.size() == file_->survey().otherLines.size();
   committed_ = std::make_shared<Survey>(file_->survey());
+  if (!sameLine) {
+    scene_.interpretation.reset();
+    scene_.selection = {committed_->shots.empty() ? -1 : 0, -1, 0};
+    scene_.gathers = std::make_shared<std::vector<Gather>>();
+    scene_.survey = std::make_shared<Survey>();
+    emit lineChanged();
+  }
   showSurvey(committed_, Interpreter::Kind::Full);
+  if (!sameLine) {
+    emit selectionChanged();
+  }
   emit historyChanged();
 }
 
@@ -173,7 +185,8 @@ void Desk::refreshGathers(const Survey& survey) {
 
 void Desk::takeInterpretation(const SurveyPtr& survey, const InterpretationPtr& interpretation, bool full) {
   // An answer about other records or shots than those shown now would not fit the views' indices.
-  if (survey->records != scene_.survey->records || survey->shots.size() != scene_.survey->shots.size() ||
+  if (survey->lineAtHand != scene_.survey->lineAtHand || survey->records != scene_.survey->records ||
+      survey->shots.size() != scene_.survey->shots.size() ||
       survey->geophones.size() != scene_.survey->geophones.size()) {
     return;
   }

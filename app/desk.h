@@ -53,6 +53,8 @@ class Desk : public QObject {
  signals:
   void sceneChanged();  ///< survey, gathers or interpretation
   void selectionChanged();
+  /// Another line of the job came to hand; sceneChanged() follows.
+  void lineChanged();
   void plumbLineChanged(double x);  ///< m; NaN when the pointer has left
   void historyChanged();
   void interpretationProgressed(double fraction);

@@ -24,12 +24,14 @@ KeyList::KeyList(QWidget* parent) : QDialog(parent), list_(new QTreeWidget(this)
   layout->addWidget(list_);
   layout->addWidget(buttons);
 
-  addPane(tr("Everywhere"), {{tr("Escape"), tr("abandons the gesture")},
-                             {tr("Ctrl+Z, Ctrl+Shift+Z"), tr("undo, redo")},
-                             {tr("F5, Shift+F5"), tr("picks the line, or this shot, automatically")},
-                             {tr("Ctrl+G"), tr("puts the geometry right in a table")},
-                             {tr("Ctrl+P"), tr("prints the sheet")},
-                             {tr("Page up, Page down"), tr("shot before, next shot")}});
+  addPane(tr("Everywhere"),
+          {{tr("Escape"), tr("abandons the gesture")},
+           {tr("Ctrl+Z, Ctrl+Shift+Z"), tr("undo, redo")},
+           {tr("Ctrl+Page up, Ctrl+Page down"), tr("the line before, the line after, of a job with several")},
+           {tr("F5, Shift+F5"), tr("picks the line, or this shot, automatically")},
+           {tr("Ctrl+G"), tr("puts the geometry right in a table")},
+           {tr("Ctrl+P"), tr("prints the sheet")},
+           {tr("Page up, Page down"), tr("shot before, next shot")}});
   QList<std::pair<QString, QString>> record = {
       {tr("Click"), tr("sets the first break at the onset nearby; Alt: exactly there")},
       {tr("Drag a pick"), tr("moves it")},

@@ -23,8 +23,10 @@
 #include "app/files.h"
 #include "core/survey/autopick.h"
 #include "core/survey/gathers.h"
+#include "core/survey/lines.h"
 #include "core/survey/merge.h"
 #include "widgets/line_strip.h"
+#include "widgets/line_tabs.h"
 #include "widgets/record_view.h"
 #include "widgets/section_panel.h"
 #include "widgets/travel_time_plot.h"
@@ -43,6 +45,7 @@ MainWindow::MainWindow(QWidget* parent) : QMainWindow(parent) {
   buildPanes();
   buildMenus();
   connect(&desk_, &Desk::sceneChanged, this, &MainWindow::showScene);
+  connect(&desk_, &Desk::lineChanged, this, [this] { rangeSet_ = false; });
   connect(&desk_, &Desk::selectionChanged, this, &MainWindow::showSelection);
   connect(&desk_, &Desk::historyChanged, this, &MainWindow::showHistory);
   connect(&desk_, &Desk::plumbLineChanged, this, [this](double x) {
@@ -71,6 +74,7 @@ MainWindow::MainWindow(QWidget* parent) : QMainWindow(parent) {
 MainWindow::~MainWindow() = default;
 
 void MainWindow::buildPanes() {
+  lineTabs_ = new LineTabs(this);
   lineStrip_ = new LineStrip(this);
   recordView_ = new RecordView(this);
   travelTimePlot_ = new TravelTimePlot(this);
@@ -91,6 +95,7 @@ void MainWindow::buildPanes() {
   auto* rightLayout = new QVBoxLayout(right);
   rightLayout->setContentsMargins(0, 0, 0, 0);
   rightLayout->setSpacing(0);
+  rightLayout->addWidget(lineTabs_);
   rightLayout->addWidget(lineStrip_);
   rightLayout->addWidget(rows_, 1);
   columns_ = new QSplitter(Qt::Horizontal, this);
@@ -118,7 +123,7 @@ void MainWindow::buildPanes() {
   layout->addWidget(bottom);
   setCentralWidget(all);
 
-  views_ = {lineStrip_, recordView_, travelTimePlot_, sectionPanel_};
+  views_ = {lineTabs_, lineStrip_, recordView_, travelTimePlot_, sectionPanel_};
   for (View* view : views_) {
     connectView(view);
   }
@@ -171,6 +176,9 @@ void MainWindow::showHistory() {
   const SurveySettings& settings = desk_.survey().settings;
   feet_->setChecked(settings.feet);
   solveTriggers_->setChecked(settings.solveTriggerDelays);
+  for (QAction* action : severalLinesActions_) {
+    action->setEnabled(lineCount(desk_.survey()) > 1);
+  }
   for (QAction* action : layerActions_) {
     action->setChecked(action->data().toInt() == settings.layers);
   }
@@ -189,7 +197,7 @@ void MainWindow::showAnswer() {
   }
 }
 
-void MainWindow::openRecords(const QStringList& paths, bool addToLine) {
+void MainWindow::openRecords(const QStringList& paths, Into into) {
   const std::vector<std::string> files = recordFiles(paths);
   if (files.empty()) {
     say(tr("Nothing to open"), tr("There is no file in what was chosen; choose SEG-2 or SEG-Y records."));
@@ -198,7 +206,7 @@ void MainWindow::openRecords(const QStringList& paths, bool addToLine) {
   progress_->setValue(0);
   progress_->show();
   job_.start([files](const Progress& progress) { return loadLine(files, {}, progress); },
-             [this, addToLine](LoadedLine line) { takeLine(line, addToLine, false); });
+             [this, into](LoadedLine line) { takeLine(line, into, false); });
 }
 
 void MainWindow::openDemo() {
@@ -207,10 +215,10 @@ void MainWindow::openDemo() {
     say(tr("No demo line"), tr("The demo line's records were not found beside the program; reinstall Strikeplate."));
     return;
   }
-  takeLine(loadLine(recordFiles({folder}), demoGeometry(folder).toStdString()), false, true);
+  takeLine(loadLine(recordFiles({folder}), demoGeometry(folder).toStdString()), Into::NewSurvey, true);
 }
 
-void MainWindow::takeLine(const LoadedLine& line, bool addToLine, bool pickAfterwards) {
+void MainWindow::takeLine(const LoadedLine& line, Into into, bool pickAfterwards) {
   if (line.filesRead == 0 || line.survey.shots.empty()) {
     QStringList problems;
     for (const std::string& problem : line.problems) {
@@ -220,7 +228,9 @@ void MainWindow::takeLine(const LoadedLine& line, bool addToLine, bool pickAfter
     return;
   }
   rangeSet_ = false;
-  if (addToLine && !desk_.survey().shots.empty()) {
+  if (into == Into::AnotherLine && !desk_.survey().shots.empty()) {
+    desk_.commit(edits::addLine(desk_.survey(), line.survey));
+  } else if (into == Into::LineAtHand && !desk_.survey().shots.empty()) {
     ContentChange change{desk_.survey(), merged(desk_.survey(), line.survey)};
     desk_.commit({tr("Add %n record(s)", "", line.filesRead).toStdString(), {std::move(change)}});
   } else if (const Outcome begun = desk_.begin(line.survey, newSurveyPath()); !begun) {
@@ -313,7 +323,7 @@ void MainWindow::dropEvent(QDropEvent* event) {
   if (paths.size() == 1 && paths.front().endsWith(".splate", Qt::CaseInsensitive)) {
     openSurvey(paths.front());
   } else if (!paths.isEmpty()) {
-    openRecords(paths, event->modifiers().testFlag(Qt::ShiftModifier));
+    openRecords(paths, event->modifiers().testFlag(Qt::ShiftModifier) ? Into::LineAtHand : Into::NewSurvey);
   }
 }
 

@@ -21,6 +21,7 @@ namespace strikeplate {
 
 class AnswerLine;
 class LineStrip;
+class LineTabs;
 class RecordView;
 class SectionPanel;
 class TravelTimePlot;
@@ -29,11 +30,14 @@ class TravelTimePlot;
 class MainWindow : public QMainWindow {
   Q_OBJECT
  public:
+  /// Where records that are opened belong.
+  enum class Into { NewSurvey, LineAtHand, AnotherLine };
+
   explicit MainWindow(QWidget* parent = nullptr);
   ~MainWindow() override;
 
-  /// Reads records (files or folders) as a new line, or adds them to the present one. Runs in the background.
-  void openRecords(const QStringList& paths, bool addToLine);
+  /// Reads records (files or folders). Runs in the background.
+  void openRecords(const QStringList& paths, Into into);
   /// Opens the demo line and picks it.
   void openDemo();
   void openSurvey(const QString& path);
@@ -52,6 +56,8 @@ class MainWindow : public QMainWindow {
 
  private:
   void buildPanes();
+  void buildLinesMenu(QMenu* menu);
+  void removeLine();
   void buildMenus();
   void buildFileMenu();
   void buildEditMenu();
@@ -62,7 +68,7 @@ class MainWindow : public QMainWindow {
   void buildTravelTimeMenu(QMenu* menu);
   void askReduction();
   void connectView(View* view);
-  void chooseRecords(bool addToLine);
+  void chooseRecords(Into into);
   void chooseSurvey();
   void saveSurveyAs();
   void importPicks();
@@ -79,7 +85,7 @@ class MainWindow : public QMainWindow {
   void showSelection();
   void showHistory();
   void showAnswer();
-  void takeLine(const LoadedLine& line, bool addToLine, bool pickAfterwards);
+  void takeLine(const LoadedLine& line, Into into, bool pickAfterwards);
   void startPicking(int shot);
   void setLookKind(LookKind kind);
   void setLayers(int layers);
@@ -91,6 +97,7 @@ class MainWindow : public QMainWindow {
   SheetOptions sheet_;  // choices for the sheet, kept while the program runs
   Job job_;
   std::vector<View*> views_;
+  LineTabs* lineTabs_ = nullptr;
   LineStrip* lineStrip_ = nullptr;
   RecordView* recordView_ = nullptr;
   TravelTimePlot* travelTimePlot_ = nullptr;
@@ -104,6 +111,7 @@ class MainWindow : public QMainWindow {
   QAction* redo_ = nullptr;
   QAction* feet_ = nullptr;
   QAction* solveTriggers_ = nullptr;
+  std::vector<QAction*> severalLinesActions_;  // make sense only with several lines
   std::vector<QAction*> layerActions_;
   double plumbLine_ = Estimate::kNaN;
   double rangeLeft_ = 0.0, rangeRight_ = 0.0;

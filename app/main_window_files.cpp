@@ -16,13 +16,13 @@
 
 namespace strikeplate {
 
-void MainWindow::chooseRecords(bool addToLine) {
+void MainWindow::chooseRecords(Into into) {
   const QStringList paths = QFileDialog::getOpenFileNames(
       this, tr("Open shot records"), QSettings().value("folder").toString(),
       tr("Shot records (*.sg2 *.seg2 *.dat *.sgy *.segy *.SG2 *.SEG2 *.DAT *.SGY *.SEGY);;All files (*)"));
   if (!paths.isEmpty()) {
     QSettings().setValue("folder", QFileInfo(paths.front()).path());
-    openRecords(paths, addToLine);
+    openRecords(paths, into);
   }
 }
 

@@ -32,8 +32,10 @@ void MainWindow::buildMenus() {
 
 void MainWindow::buildFileMenu() {
   QMenu* menu = menuBar()->addMenu(tr("&File"));
-  add(menu, tr("Open &records..."), QKeySequence::Open, this, [this] { chooseRecords(false); });
-  add(menu, tr("&Add records to this line..."), {}, this, [this] { chooseRecords(true); });
+  add(menu, tr("Open &records..."), QKeySequence::Open, this, [this] { chooseRecords(Into::NewSurvey); });
+  add(menu, tr("&Add records to this line..."), {}, this, [this] { chooseRecords(Into::LineAtHand); });
+  add(menu, tr("Open records as another &line of this job..."), {}, this,
+      [this] { chooseRecords(Into::AnotherLine); });
   add(menu, tr("Open &survey..."), QKeySequence(tr("Ctrl+Shift+O")), this, &MainWindow::chooseSurvey);
   add(menu, tr("Save survey &as..."), QKeySequence::SaveAs, this, &MainWindow::saveSurveyAs);
   menu->addSeparator();
@@ -55,6 +57,8 @@ void MainWindow::buildEditMenu() {
   add(menu, tr("&Job, client and crew..."), {}, this, &MainWindow::editInfo);
   add(menu, tr("&Geometry..."), QKeySequence(tr("Ctrl+G")), this, &MainWindow::editGeometry);
   add(menu, tr("&Boreholes..."), {}, this, &MainWindow::editBoreholes);
+  menu->addSeparator();
+  buildLinesMenu(menu);
 }
 
 void MainWindow::buildPicksMenu() {

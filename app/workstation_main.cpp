@@ -40,7 +40,7 @@ int main(int argc, char** argv) {
     } else if (files.size() == 1 && files.front().endsWith(".splate", Qt::CaseInsensitive)) {
       window.openSurvey(files.front());
     } else {
-      window.openRecords(files, false);
+      window.openRecords(files, strikeplate::MainWindow::Into::NewSurvey);
     }
   });
   return QApplication::exec();

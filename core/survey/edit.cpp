@@ -6,6 +6,8 @@
 #include <type_traits>
 #include <utility>
 
+#include "core/survey/lines.h"
+
 namespace strikeplate {
 namespace {
 
@@ -57,6 +59,10 @@ void carryOut(Survey& survey, const BoreholesChange& change) {
 
 void carryOut(Survey& survey, const ContentChange& change) {
   survey = change.after;
+}
+
+void carryOut(Survey& survey, const LineChange& change) {
+  survey = withLineAtHand(std::move(survey), change.after);
 }
 
 }  // namespace

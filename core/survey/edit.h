@@ -35,9 +35,13 @@ struct BoreholesChange {
 struct ContentChange {
   Survey before, after;
 };
+/// Another line of the job comes to hand.
+struct LineChange {
+  int before = 0, after = 0;  ///< Survey::lineAtHand
+};
 
-using Change =
-    std::variant<PickChange, ShotChange, GeophonesChange, InfoChange, SettingsChange, BoreholesChange, ContentChange>;
+using Change = std::variant<PickChange, ShotChange, GeophonesChange, InfoChange, SettingsChange, BoreholesChange,
+                            ContentChange, LineChange>;
 
 /// One step of the history: what undo and redo name, and one transaction of the survey file.
 struct Edit {

@@ -83,6 +83,18 @@ bool fits(const Survey& /*survey*/, const ContentChange& change) {
   return surveyIsSound(change.before) && surveyIsSound(change.after);
 }
 
+bool fits(const Survey& survey, const LineChange& change) {
+  const std::size_t count = survey.otherLines.size() + 1;
+  return within(change.before, count) && within(change.after, count);
+}
+
+bool otherLinesSound(const Survey& survey) {
+  return within(survey.lineAtHand, survey.otherLines.size() + 1) &&
+         std::all_of(survey.otherLines.begin(), survey.otherLines.end(), [](const OtherLine& other) {
+           return other.line && other.line->otherLines.empty() && surveyIsSound(*other.line);
+         });
+}
+
 }  // namespace
 
 bool surveyIsSound(const Survey& survey) {
@@ -91,11 +103,12 @@ bool surveyIsSound(const Survey& survey) {
     return sound(shot, survey.records.size(), survey.geophones.size());
   };
   return std::all_of(survey.records.begin(), survey.records.end(), recordSound) && allSound(survey.geophones) &&
-         std::all_of(survey.shots.begin(), survey.shots.end(), shotSound) && allSound(survey.boreholes);
+         std::all_of(survey.shots.begin(), survey.shots.end(), shotSound) && allSound(survey.boreholes) &&
+         otherLinesSound(survey);
 }
 
 bool editFits(const Survey& survey, const Edit& edit) {
-  // A change of content alters what the later changes of the same edit are measured against.
+  // A change of content or line alters what the later changes of the same edit are measured against.
   if (edit.changes.size() == 1) {
     return std::visit([&survey](const auto& change) { return fits(survey, change); }, edit.changes.front());
   }
@@ -104,8 +117,8 @@ bool editFits(const Survey& survey, const Edit& edit) {
     if (!std::visit([&now](const auto& one) { return fits(now, one); }, change)) {
       return false;
     }
-    if (const auto* content = std::get_if<ContentChange>(&change)) {
-      now = content->after;
+    if (std::holds_alternative<ContentChange>(change) || std::holds_alternative<LineChange>(change)) {
+      apply(now, {"", {change}});
     }
   }
   return true;

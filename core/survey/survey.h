@@ -1,5 +1,6 @@
 #pragma once
 
+#include <memory>
 #include <optional>
 #include <string>
 #include <vector>
@@ -50,7 +51,16 @@ struct SurveySettings {
   bool operator==(const SurveySettings&) const = default;
 };
 
-/// The document: plain data with value semantics. Records are shared and immutable, so a copy is cheap.
+struct Survey;
+
+/// Another line of the same job. Shared and immutable, so a copy is cheap; equal when the lines are.
+struct OtherLine {
+  std::shared_ptr<const Survey> line;  ///< never null; has no other lines of its own
+  bool operator==(const OtherLine& other) const;
+};
+
+/// The document: the line at hand as plain data with value semantics, and the job's other lines (see lines.h).
+/// Records are shared and immutable, so a copy is cheap.
 struct Survey {
   SurveyInfo info;
   SurveySettings settings;
@@ -59,6 +69,8 @@ struct Survey {
   std::vector<Shot> shots;          ///< rising x
   std::vector<Borehole> boreholes;
   std::vector<std::string> remarks;                ///< what was odd on loading, one sentence each
+  std::vector<OtherLine> otherLines;               ///< in their order, without this one
+  int lineAtHand = 0;                              ///< place of this line among all of them, from 0
   bool operator==(const Survey&) const = default;  ///< records are the same when they are the same objects
 };
 

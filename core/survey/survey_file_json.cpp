@@ -101,11 +101,19 @@ class Writer {
   json operator()(const std::string& text) const { return textToJson(text); }
   json operator()(const RecordPtr& record) const { return idOf_(record); }
 
+  json operator()(int number) const { return number; }
+  json operator()(const OtherLine& other) const { return (*this)(*other.line); }
+
   json operator()(const Survey& survey) const {
-    return {{"info", (*this)(survey.info)},       {"settings", (*this)(survey.settings)},
-            {"records", (*this)(survey.records)}, {"geophones", (*this)(survey.geophones)},
-            {"shots", (*this)(survey.shots)},     {"boreholes", (*this)(survey.boreholes)},
-            {"remarks", (*this)(survey.remarks)}};
+    json object = {{"info", (*this)(survey.info)},       {"settings", (*this)(survey.settings)},
+                   {"records", (*this)(survey.records)}, {"geophones", (*this)(survey.geophones)},
+                   {"shots", (*this)(survey.shots)},     {"boreholes", (*this)(survey.boreholes)},
+                   {"remarks", (*this)(survey.remarks)}};
+    if (!survey.otherLines.empty()) {
+      object["otherLines"] = (*this)(survey.otherLines);
+      object["lineAtHand"] = survey.lineAtHand;
+    }
+    return object;
   }
 
   template <class Item>
@@ -188,7 +196,22 @@ class Reader {
     read(from.at("shots"), survey.shots);
     read(from.at("boreholes"), survey.boreholes);
     read(from.at("remarks"), survey.remarks);
+    if (from.contains("otherLines")) {
+      read(from.at("otherLines"), survey.otherLines);
+      read(from.at("lineAtHand"), survey.lineAtHand);
+    }
   }
+
+  void read(const json& from, OtherLine& other) const {
+    auto line = std::make_shared<Survey>();
+    if (from.contains("otherLines")) {
+      throw json::other_error::create(501, "lines within a line", nullptr);
+    }
+    read(from, *line);
+    other.line = std::move(line);
+  }
+
+  void read(const json& from, int& number) const { number = from.get<int>(); }
 
   template <class Item>
   void read(const json& from, std::vector<Item>& items) const {
@@ -203,8 +226,8 @@ class Reader {
 };
 
 // Names of the kinds of change, in the order of the variant.
-constexpr std::array<const char*, 7> kKinds = {"pick",     "shot",      "geophones", "info",
-                                               "settings", "boreholes", "content"};
+constexpr std::array<const char*, 8> kKinds = {"pick",     "shot",      "geophones", "info",
+                                               "settings", "boreholes", "content",   "line"};
 static_assert(std::variant_size_v<Change> == kKinds.size());
 
 template <class T>

@@ -32,8 +32,11 @@ CREATE TABLE edit (
   changes TEXT NOT NULL,
   digest  INTEGER NOT NULL);
 PRAGMA application_id = 0x53504C54;
-PRAGMA user_version = 1;
+PRAGMA user_version = 2;
 )";
+
+// What an older program wrote is written on as this one's format.
+constexpr const char* kRaiseFormat = "PRAGMA user_version = 2";
 
 constexpr std::array<const char*, 3> kStates = {"done", "undone", "abandoned"};
 
@@ -143,7 +146,7 @@ Outcome SurveyStore::writeNew(Database& database, const History& history) {
 Outcome SurveyStore::write(Database& database, const History& history, const std::vector<std::size_t>& entries) {
   const std::size_t knownBefore = known_.size();
   Transaction transaction(database);
-  bool good = transaction.begun();
+  bool good = transaction.begun() && database.run(kRaiseFormat);
   for (std::size_t i = 0; good && i < entries.size(); ++i) {
     good = writeEntry(database, history.entries()[entries[i]], entries[i]);
   }

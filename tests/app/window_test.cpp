@@ -5,11 +5,13 @@
 #include <QDir>
 #include <QElapsedTimer>
 #include <QSettings>
+#include <QTabBar>
 #include <QTemporaryDir>
 #include <QTest>
 #include <gtest/gtest.h>
 #include <qcustomplot.h>
 
+#include "app/files.h"
 #include "app/main_window.h"
 #include "widgets/record_view.h"
 #include "widgets/sheet_painter.h"
@@ -141,6 +143,33 @@ TEST_F(Window, APickDeletedAndBroughtBackByUndo) {
   window->desk().undo();
   settle();
   EXPECT_TRUE(window->desk().survey().shots[2].traces[20].pick);
+}
+
+TEST_F(Window, AnotherLineOfTheJobHasATabAndKeepsItsOwnPicks) {
+  auto* tabs = window->findChild<QTabBar*>();
+  ASSERT_NE(tabs, nullptr);
+  EXPECT_FALSE(tabs->isVisible());
+  const std::vector<Shot> first = window->desk().survey().shots;
+  const double depth = depthAt(47.0);
+  window->openRecords({demoFolder() + "/1001.sg2"}, MainWindow::Into::AnotherLine);
+  settle();
+  ASSERT_EQ(tabs->count(), 2);
+  EXPECT_TRUE(tabs->isVisible());
+  EXPECT_EQ(tabs->currentIndex(), 1);
+  ASSERT_EQ(window->desk().survey().shots.size(), 1U);
+
+  QTest::mouseClick(tabs, Qt::LeftButton, {}, tabs->tabRect(0).center());
+  settle();
+  EXPECT_EQ(window->desk().survey().shots, first);
+  EXPECT_NEAR(depthAt(47.0), depth, 1e-9) << "the same survey, the same answer";
+  EXPECT_TRUE(window->desk().undoText().startsWith("Show ")) << window->desk().undoText().toStdString();
+  window->desk().undo();
+  settle();
+  EXPECT_EQ(tabs->currentIndex(), 1);
+  window->desk().undo();
+  settle();
+  EXPECT_FALSE(tabs->isVisible());
+  EXPECT_EQ(window->desk().survey().shots, first);
 }
 
 TEST_F(Window, TheSurveyIsOnDiskAfterEveryEditAndOpensWithItsHistory) {

@@ -135,8 +135,24 @@ TEST_F(SurveyFileFaults, ASecondProgramIsRefusedAndTheFirstGoesOn) {
 
 TEST_F(SurveyFileFaults, ANewerFileIsRefusedUnchanged) {
   ASSERT_TRUE(SurveyFile::create(path(), surveyOf(4)).ok());
-  runSql("PRAGMA user_version = 2");
+  runSql("PRAGMA user_version = 3");
   expectRefused("newer program");
+}
+
+TEST_F(SurveyFileFaults, AFileOfTheFirstFormatOpensAndIsWrittenOnInTheNewest) {
+  const Survey survey = surveyOf(4);
+  ASSERT_TRUE(SurveyFile::create(path(), survey).ok());
+  runSql("PRAGMA user_version = 1");
+  {
+    auto file = SurveyFile::open(path());
+    ASSERT_TRUE(file.ok()) << file.message();
+    EXPECT_TRUE(sameContent(file->survey(), survey));
+    ASSERT_TRUE(file->append(edits::setTriggerCorrection(file->survey(), 0, 0.001)).ok());
+  }
+  EXPECT_TRUE(SurveyFile::open(path()).ok());
+  std::ifstream file(path(), std::ios::binary);
+  file.seekg(63);
+  EXPECT_EQ(file.get(), 2);
 }
 
 TEST_F(SurveyFileFaults, WhatIsNoSurveyFileIsRefusedInWords) {
