@@ -99,7 +99,8 @@ Result<BatchOptions> parseBatchOptions(const std::vector<std::string>& arguments
 std::string batchHelp() {
   std::string text =
       "Usage: strikeplate-batch RECORD... [options]\n\n"
-      "Interprets the records of one refraction line. RECORD is a SEG-2 or SEG-Y file or a survey file (.splate);\n"
+      "Interprets the records of one refraction line. RECORD is a SEG-2 or SEG-Y file, a table of travel times\n"
+      "(.csv with columns of shot, geophone and time) or a survey file (.splate);\n"
       "together they are one line. What is not given is found: blows at one shot point are stacked, first breaks "
       "are\n"
       "picked automatically, the number of layers follows the evidence. CSV files are in m and s.\n\n";

@@ -203,6 +203,10 @@ void MainWindow::openRecords(const QStringList& paths, Into into) {
     say(tr("Nothing to open"), tr("There is no file in what was chosen; choose SEG-2 or SEG-Y records."));
     return;
   }
+  if (files.size() == 1 && isTimesTable(files.front())) {
+    openTimes(QString::fromStdString(files.front()), into);
+    return;
+  }
   progress_->setValue(0);
   progress_->show();
   job_.start([files](const Progress& progress) { return loadLine(files, {}, progress); },

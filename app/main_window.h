@@ -69,6 +69,7 @@ class MainWindow : public QMainWindow {
   void askReduction();
   void connectView(View* view);
   void chooseRecords(Into into);
+  void openTimes(const QString& path, Into into);
   void chooseSurvey();
   void saveSurveyAs();
   void importPicks();

@@ -5,6 +5,7 @@
 
 #include "app/answer_line.h"
 #include "app/main_window.h"
+#include "app/times_dialog.h"
 #include "app/versions.h"
 #include "core/report/csv_out.h"
 #include "core/report/section_dxf.h"
@@ -18,11 +19,29 @@ namespace strikeplate {
 
 void MainWindow::chooseRecords(Into into) {
   const QStringList paths = QFileDialog::getOpenFileNames(
-      this, tr("Open shot records"), QSettings().value("folder").toString(),
-      tr("Shot records (*.sg2 *.seg2 *.dat *.sgy *.segy *.SG2 *.SEG2 *.DAT *.SGY *.SEGY);;All files (*)"));
+      this, tr("Open shot records, or a table of travel times"), QSettings().value("folder").toString(),
+      tr("Shot records (*.sg2 *.seg2 *.dat *.sgy *.segy *.SG2 *.SEG2 *.DAT *.SGY *.SEGY);;"
+         "Tables of travel times (*.csv *.txt *.tsv);;All files (*)"));
   if (!paths.isEmpty()) {
     QSettings().setValue("folder", QFileInfo(paths.front()).path());
     openRecords(paths, into);
+  }
+}
+
+// First breaks that were read elsewhere, without their records.
+void MainWindow::openTimes(const QString& path, Into into) {
+  const auto table = readTimesTable(path.toStdString());
+  if (!table) {
+    say(tr("Nothing could be read"), QString::fromStdString(table.message()));
+    return;
+  }
+  TimesDialog dialog(*table, this);
+  if (dialog.exec() == QDialog::Accepted) {
+    const Result<Survey> survey = dialog.survey();
+    LoadedLine line;
+    line.survey = *survey;
+    line.filesRead = 1;
+    takeLine(line, into, false);
   }
 }
 

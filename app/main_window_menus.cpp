@@ -32,7 +32,8 @@ void MainWindow::buildMenus() {
 
 void MainWindow::buildFileMenu() {
   QMenu* menu = menuBar()->addMenu(tr("&File"));
-  add(menu, tr("Open &records..."), QKeySequence::Open, this, [this] { chooseRecords(Into::NewSurvey); });
+  add(menu, tr("Open &records or a table of travel times..."), QKeySequence::Open, this,
+      [this] { chooseRecords(Into::NewSurvey); });
   add(menu, tr("&Add records to this line..."), {}, this, [this] { chooseRecords(Into::LineAtHand); });
   add(menu, tr("Open records as another &line of this job..."), {}, this,
       [this] { chooseRecords(Into::AnotherLine); });

@@ -4,18 +4,23 @@
 #include <optional>
 #include <utility>
 
+#include "core/base/numbers.h"
 #include "core/line/geometry_table.h"
 #include "core/record/read_files.h"
 #include "core/survey/assemble.h"
 #include "core/survey/merge.h"
 #include "core/survey/survey_file.h"
+#include "core/survey/times_table.h"
 
 namespace strikeplate {
 namespace {
 
+bool endsWith(const std::string& path, std::string_view ending) {
+  return path.size() > ending.size() && path.compare(path.size() - ending.size(), ending.size(), ending) == 0;
+}
+
 bool isSurveyFile(const std::string& path) {
-  constexpr std::string_view kEnding = ".splate";
-  return path.size() > kEnding.size() && path.compare(path.size() - kEnding.size(), kEnding.size(), kEnding) == 0;
+  return endsWith(path, ".splate");
 }
 
 /// What the first lines of the records say of the job, where the survey does not say it yet.
@@ -63,6 +68,17 @@ class Loading {
       ++line_.filesRead;
     } else {
       line_.problems.push_back(file.message());
+    }
+  }
+
+  void readTimes(const std::string& path) {
+    const auto table = readTimesTable(path);
+    auto survey = table ? surveyFromTimes(*table, guessTimesColumns(*table)) : Result<Survey>(table.failure());
+    if (survey) {
+      surveys_.push_back(std::move(*survey));
+      ++line_.filesRead;
+    } else {
+      line_.problems.push_back(survey.message());
     }
   }
 
@@ -121,6 +137,11 @@ class Loading {
 
 }  // namespace
 
+bool isTimesTable(const std::string& path) {
+  const std::string name = lowered(path);
+  return endsWith(name, ".csv") || endsWith(name, ".txt") || endsWith(name, ".tsv");
+}
+
 LoadedLine loadLine(const std::vector<std::string>& paths, const std::string& geometryTable,
                     const Progress& progress) {
   LoadedLine line;
@@ -132,6 +153,8 @@ LoadedLine loadLine(const std::vector<std::string>& paths, const std::string& ge
   for (const std::string& path : paths) {
     if (isSurveyFile(path)) {
       loading.readSurvey(path);
+    } else if (isTimesTable(path)) {
+      loading.readTimes(path);
     } else {
       recordPaths.push_back(path);
     }

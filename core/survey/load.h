@@ -16,9 +16,13 @@ struct LoadedLine {
   bool finished = true;  ///< false when it was asked to stop early
 };
 
-/// Reads SEG-2, SEG-Y and survey files, in any mix, into one line: geometry table (may be empty) laid over the
-/// headers, blows at one shot point put together and aligned, dead traces found. Nothing is picked. A file that
-/// cannot be read adds a problem and the others are still used.
+/// Whether a path names a table of travel times (.csv, .txt, .tsv in any case).
+bool isTimesTable(const std::string& path);
+
+/// Reads SEG-2, SEG-Y, tables of travel times (their columns by name, see times_table.h) and survey files, in any
+/// mix, into one line: geometry table (may be empty) laid over the headers, blows at one shot point put together and
+/// aligned, dead traces found. Nothing is picked. A file that cannot be read adds a problem and the others are still
+/// used.
 LoadedLine loadLine(const std::vector<std::string>& paths, const std::string& geometryTable,
                     const Progress& progress = {});
 
