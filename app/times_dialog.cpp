@@ -171,10 +171,15 @@ void TimesDialog::showOutcome() {
       last = std::max(last, trace.pick ? trace.pick->time : 0.0);
     }
   }
-  outcome_->setText(tr("%n first break(s)", "", picks) +
-                    tr(" of %n shot(s)", "", static_cast<int>(read->shots.size())) +
-                    tr(" at %n geophone(s)", "", static_cast<int>(read->geophones.size())) +
-                    tr(" from %1 to %2 m, the latest %3 ms.")
+  const auto counted = [](int count, const QString& one, const QString& many) {
+    return QString::number(count) + " " + (count == 1 ? one : many);
+  };
+  const int shots = static_cast<int>(read->shots.size());
+  const int geophones = static_cast<int>(read->geophones.size());
+  outcome_->setText(tr("%1 of %2 at %3, from %4 to %5 m, the latest %6 ms.")
+                        .arg(counted(picks, tr("first break"), tr("first breaks")),
+                             counted(shots, tr("shot"), tr("shots")),
+                             counted(geophones, tr("geophone"), tr("geophones")))
                         .arg(read->geophones.front().x, 0, 'f', 1)
                         .arg(read->geophones.back().x, 0, 'f', 1)
                         .arg(1e3 * last, 0, 'f', 1) +
