@@ -79,6 +79,7 @@ class MainWindow : public QMainWindow {
   void editInfo();
   void editBoreholes();
   void editGeometry();
+  void editBlows();
   void showKeys();
   void showAbout();
   void askTriggerCorrections();

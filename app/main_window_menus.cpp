@@ -57,6 +57,7 @@ void MainWindow::buildEditMenu() {
   menu->addSeparator();
   add(menu, tr("&Job, client and crew..."), {}, this, &MainWindow::editInfo);
   add(menu, tr("&Geometry..."), QKeySequence(tr("Ctrl+G")), this, &MainWindow::editGeometry);
+  add(menu, tr("Blows and &stack..."), {}, this, &MainWindow::editBlows);
   add(menu, tr("&Boreholes..."), {}, this, &MainWindow::editBoreholes);
   menu->addSeparator();
   buildLinesMenu(menu);

@@ -5,6 +5,7 @@
 #include <QSettings>
 
 #include "app/answer_line.h"
+#include "app/blows_dialog.h"
 #include "app/borehole_dialog.h"
 #include "app/info_dialog.h"
 #include "app/key_list.h"
@@ -28,6 +29,17 @@ void MainWindow::editBoreholes() {
   BoreholeDialog dialog(desk_.survey(), this);
   if (dialog.exec() == QDialog::Accepted && dialog.boreholes() != desk_.survey().boreholes) {
     desk_.commit(edits::setBoreholes(desk_.survey(), dialog.boreholes(), "Change boreholes"));
+  }
+}
+
+void MainWindow::editBlows() {
+  if (desk_.survey().records.empty()) {
+    say(tr("No blows yet"), tr("Open shot records first; blows at one shot point are then listed here."));
+    return;
+  }
+  BlowsDialog dialog(desk_.survey(), this);
+  if (dialog.exec() == QDialog::Accepted && !dialog.edit().changes.empty()) {
+    desk_.commit(dialog.edit());
   }
 }
 

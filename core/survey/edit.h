@@ -68,6 +68,9 @@ Edit assignLayer(const Survey& survey, int shot, const std::vector<int>& traces,
 Edit setTriggerCorrection(const Survey& survey, int shot, double correction);
 Edit setShotPoint(const Survey& survey, int shot, const ShotPoint& point);
 Edit setTraceState(const Survey& survey, int shot, int trace, TraceState state);
+/// Which blows of each shot are part of its stack; names the one that was left out or taken back when it is one.
+/// Needs a row for each shot with a value for each of its blows. Without changes when nothing changes.
+Edit useBlows(const Survey& survey, const std::vector<std::vector<bool>>& used);
 Edit setInfo(const Survey& survey, const SurveyInfo& info);
 Edit setSettings(const Survey& survey, const SurveySettings& settings, std::string text);
 Edit setBoreholes(const Survey& survey, const std::vector<Borehole>& boreholes, std::string text);

@@ -4,6 +4,7 @@
 #include <numeric>
 #include <utility>
 
+#include "core/base/file_names.h"
 #include "core/base/numbers.h"
 #include "core/base/units.h"
 #include "core/survey/edit.h"
@@ -133,6 +134,30 @@ Edit setTraceState(const Survey& survey, int shot, int trace, TraceState state) 
   after.traces[at(trace)].stateReason = state == TraceState::Live ? "" : "set by hand";
   return {"Mark " + shotName(shot) + ", trace " + std::to_string(trace + 1) + " as " + stateName(state),
           {shotChange(survey, shot, std::move(after))}};
+}
+
+Edit useBlows(const Survey& survey, const std::vector<std::vector<bool>>& used) {
+  assert(used.size() == survey.shots.size());
+  Edit edit;
+  int changed = 0;
+  std::string last;
+  for (int s = 0; s < static_cast<int>(survey.shots.size()); ++s) {
+    Shot after = shotOf(survey, s);
+    assert(used[at(s)].size() == after.blows.size());
+    for (std::size_t b = 0; b < after.blows.size(); ++b) {
+      Blow& blow = after.blows[b];
+      if (blow.used != used[at(s)][b]) {
+        blow.used = used[at(s)][b];
+        ++changed;
+        last = (blow.used ? "Stack blow " : "Leave out blow ") + lastPart(survey.records[at(blow.record)]->file);
+      }
+    }
+    if (after.blows != survey.shots[at(s)].blows) {
+      edit.changes.emplace_back(shotChange(survey, s, std::move(after)));
+    }
+  }
+  edit.text = changed == 1 ? last : "Choose the blows of the stacks, " + std::to_string(changed) + " changed";
+  return edit;
 }
 
 Edit setInfo(const Survey& survey, const SurveyInfo& info) {

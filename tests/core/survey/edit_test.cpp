@@ -84,6 +84,21 @@ TEST(Edit, AShotThatPassesItsNeighbourKeepsShotsInOrder) {
   EXPECT_TRUE(applied(after, inverted(edit)) == survey);
 }
 
+TEST(Edit, LeavingABlowOutOfAStackIsNamedAndTakenBack) {
+  std::mt19937 random(9);
+  const Survey survey = testing::randomSurvey(random);
+  std::vector<std::vector<bool>> used(survey.shots.size(), {true, false});
+  EXPECT_TRUE(edits::useBlows(survey, used).changes.empty());
+  used[1] = {true, true};
+  const Edit edit = edits::useBlows(survey, used);
+  EXPECT_EQ(edit.text, "Stack blow " + survey.records[1]->file);
+  const Survey after = applied(survey, edit);
+  EXPECT_TRUE(after.shots[1].blows[1].used);
+  EXPECT_EQ(applied(after, inverted(edit)), survey);
+  used[0] = {false, true};
+  EXPECT_EQ(edits::useBlows(survey, used).text, "Choose the blows of the stacks, 3 changed");
+}
+
 TEST(Edit, TextsCountShotsAndTracesFromOneAndUseTheUsersUnit) {
   std::mt19937 random(13);
   Survey survey = testing::randomSurvey(random);
