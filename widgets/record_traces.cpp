@@ -43,7 +43,7 @@ ShownTraces::ShownTraces(const Gather& gather, const Shot& shot, const RecordDis
   settings.gainPower = display.gainPower;
   settings.agcWindow = display.agcWindow;
   for (std::size_t t = 0; t < gather.traces.size(); ++t) {
-    std::vector<float> samples = gather.traces[t];
+    std::vector<float> samples = gather.traces[t].values();
     std::replace_if(
         samples.begin(), samples.end(), [](float x) { return !std::isfinite(x); }, 0.0F);
     settings.noiseUntil = quietUntil(gather, shot, t);

@@ -1,5 +1,6 @@
 #pragma once
 
+#include <optional>
 #include <vector>
 
 #include "core/base/result.h"
@@ -14,5 +15,10 @@ namespace strikeplate {
 /// Fails as stackBlows does. Needs at least one blow, one lag for each, and one geophone for each trace.
 Result<Gather> makeGather(const std::vector<const ShotRecord*>& blows, const std::vector<double>& lags,
                           const ShotPoint& shot, const std::vector<Geophone>& geophones);
+
+/// The same for a single blow, whose samples are shared and not copied; nothing when its traces have to be brought to
+/// one time axis first, or one of them is dead. Needs one geophone for each trace, and a trace.
+std::optional<Gather> gatherOfOneBlow(const RecordPtr& blow, const ShotPoint& shot,
+                                      const std::vector<Geophone>& geophones);
 
 }  // namespace strikeplate

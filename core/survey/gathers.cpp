@@ -23,8 +23,10 @@ Gather gatherOf(const Survey& survey, int shotIndex) {
   const Shot& shot = survey.shots[static_cast<std::size_t>(shotIndex)];
   std::vector<const ShotRecord*> blows;
   std::vector<double> lags;
+  RecordPtr last;
   for (const Blow& blow : shot.blows) {
     if (blow.used) {
+      last = survey.records[static_cast<std::size_t>(blow.record)];
       blows.push_back(survey.records[static_cast<std::size_t>(blow.record)].get());
       lags.push_back(blow.lag);
     }
@@ -37,7 +39,10 @@ Gather gatherOf(const Survey& survey, int shotIndex) {
   if (blows.empty()) {
     return gather;
   }
-  if (auto stacked = makeGather(blows, lags, shot.point, geophones)) {
+  if (auto single =
+          blows.size() == 1 && lags.front() == 0.0 ? gatherOfOneBlow(last, shot.point, geophones) : std::nullopt) {
+    gather = std::move(*single);
+  } else if (auto stacked = makeGather(blows, lags, shot.point, geophones)) {
     gather = std::move(*stacked);
   } else if (auto first = makeGather({blows.front()}, {0.0}, shot.point, geophones)) {
     // Blows that cannot be summed leave the first one to be picked.

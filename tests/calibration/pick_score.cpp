@@ -63,7 +63,7 @@ std::vector<ShotPointBlows> readAll(const std::vector<std::string>& files) {
     }
     shot.gather.sampleInterval = stack->sampleInterval;
     shot.gather.start = stack->start;
-    shot.gather.traces = std::move(stack->traces);
+    shot.gather.traces.assign(stack->traces.begin(), stack->traces.end());
     for (std::size_t i = 0; i < records.size(); ++i)
       shot.blows.push_back({records[i].first, lags[i]});
     all.push_back(std::move(shot));

@@ -158,9 +158,11 @@ TEST(RecordWindow, ReducedTimesGetAWindowOfTheirOwn) {
 TEST(RecordTraces, RestAtZeroBeforeTheFirstBreakWhateverFollows) {
   Survey survey = sharpLine(3);
   Gather gather = gatherOf(survey, 0);
-  for (float& sample : gather.traces[1]) {
+  std::vector<float> raised = gather.traces[1].values();
+  for (float& sample : raised) {
     sample += 7.0F;
   }
+  gather.traces[1] = std::move(raised);
   const ShownTraces traces(gather, survey.shots[0], {});
   double mean = 0.0;
   for (std::size_t i = 0; i < 80; ++i) {
@@ -172,7 +174,9 @@ TEST(RecordTraces, RestAtZeroBeforeTheFirstBreakWhateverFollows) {
 TEST(RecordTraces, ReversedTracesAreTurnedOverAndBadValuesAreNothing) {
   Survey survey = sharpLine(3);
   Gather gather = gatherOf(survey, 0);
-  gather.traces[0][5] = std::numeric_limits<float>::quiet_NaN();
+  std::vector<float> bad = gather.traces[0].values();
+  bad[5] = std::numeric_limits<float>::quiet_NaN();
+  gather.traces[0] = std::move(bad);
   survey.shots[0].traces[2].state = TraceState::Reversed;
   const ShownTraces traces(gather, survey.shots[0], {});
   EXPECT_TRUE(std::isfinite(traces.trace(0)[5]));

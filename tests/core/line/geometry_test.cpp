@@ -140,9 +140,26 @@ TEST(MakeGather, OneBlowGivesItsOwnSamples) {
   const ShotRecord record = recordOf("a.sg2", 1, 3);
   const auto gather = makeGather({&record}, {0.0}, {-2.0, 0.0, 0.0}, spread(3, 2.0));
   ASSERT_TRUE(gather) << gather.message();
-  EXPECT_EQ(gather->traces[2], record.traces[2].samples);
+  EXPECT_EQ(gather->traces[2].values(), record.traces[2].samples);
   EXPECT_EQ(gather->offset(2), 6.0);
   EXPECT_EQ(gather->states[0], TraceState::Live);
+}
+
+TEST(MakeGather, OneBlowOnOneTimeAxisIsSharedWithItsRecordAndOtherwiseTheSame) {
+  const auto record = std::make_shared<const ShotRecord>(recordOf("a.sg2", 1, 3));
+  const auto shared = gatherOfOneBlow(record, {-2.0, 0.0, 0.0}, spread(3, 2.0));
+  const auto made = makeGather({record.get()}, {0.0}, {-2.0, 0.0, 0.0}, spread(3, 2.0));
+  ASSERT_TRUE(shared && made);
+  EXPECT_EQ(shared->start, made->start);
+  EXPECT_EQ(shared->sampleInterval, made->sampleInterval);
+  EXPECT_EQ(shared->states, made->states);
+  for (std::size_t t = 0; t < 3; ++t) {
+    EXPECT_EQ(shared->traces[t].values(), made->traces[t].values());
+    EXPECT_TRUE(shared->traces[t].sharedWith(record->traces[t].samples));
+  }
+  ShotRecord other = *record;
+  other.traces[1].delay += 0.001;
+  EXPECT_FALSE(gatherOfOneBlow(std::make_shared<const ShotRecord>(other), {}, spread(3, 2.0)));
 }
 
 }  // namespace

@@ -118,8 +118,10 @@ TEST(LinePicker, TheGainOfATraceChangesNothing) {
   const std::vector<double> before = timesOf(pickLine(gathers));
   for (Gather& gather : gathers) {
     for (auto& trace : gather.traces) {
-      for (float& x : trace)
+      std::vector<float> louder = trace.values();
+      for (float& x : louder)
         x *= 1024.0F;
+      trace = std::move(louder);
     }
   }
   const std::vector<double> after = timesOf(pickLine(gathers));
@@ -154,10 +156,13 @@ TEST(LinePicker, ADeadChannelGetsNoPickAndAReversedOneIsNamed) {
   for (Gather& gather : gathers) {
     std::mt19937 random(seed++);
     std::normal_distribution<float> normal(0.0F, 1e-4F);
-    for (float& x : gather.traces[5])
+    std::vector<float> dead = gather.traces[5].values(), reversed = gather.traces[8].values();
+    for (float& x : dead)
       x = normal(random);
-    for (float& x : gather.traces[8])
+    for (float& x : reversed)
       x = -x;
+    gather.traces[5] = std::move(dead);
+    gather.traces[8] = std::move(reversed);
   }
   const LinePicks picks = pickLine(gathers);
   for (std::size_t g = 0; g < gathers.size(); ++g) {

@@ -37,7 +37,7 @@ Gather gatherOf(std::vector<std::vector<float>> traces, double interval, double 
   for (std::size_t i = 0; i < traces.size(); ++i)
     gather.geophones.push_back({5.0 * static_cast<double>(i + 1), 0.0});
   gather.states.assign(traces.size(), TraceState::Live);
-  gather.traces = std::move(traces);
+  gather.traces.assign(traces.begin(), traces.end());
   return gather;
 }
 
