@@ -17,6 +17,7 @@
 #include <QSplitter>
 #include <QStandardPaths>
 #include <QStatusBar>
+#include <QToolButton>
 #include <QVBoxLayout>
 
 #include "app/answer_line.h"
@@ -59,7 +60,7 @@ MainWindow::MainWindow(QWidget* parent) : QMainWindow(parent) {
   });
   connect(&desk_, &Desk::notSaved, this, [this](const QString& sentence) { say(tr("Not saved"), sentence); });
   connect(&job_, &Job::progressed, this, [this](double f) { progress_->setValue(static_cast<int>(100 * f)); });
-  connect(&job_, &Job::finished, this, [this] { progress_->hide(); });
+  connect(&job_, &Job::finished, this, [this] { work_->hide(); });
   const QSettings settings;
   setLookKind(static_cast<LookKind>(settings.value("look", 0).toInt()));
   resize(1440, 900);
@@ -106,15 +107,24 @@ void MainWindow::buildPanes() {
   columns_->setSizes({560, 880});
   columns_->setChildrenCollapsible(false);
 
-  progress_ = new QProgressBar(this);
+  work_ = new QWidget(this);
+  auto* workLayout = new QHBoxLayout(work_);
+  workLayout->setContentsMargins(0, 0, 0, 0);
+  progress_ = new QProgressBar(work_);
   progress_->setMaximumWidth(160);
   progress_->setAccessibleName(tr("Progress"));
-  progress_->hide();
+  auto* stop = new QToolButton(work_);
+  stop->setText(tr("Stop"));
+  stop->setToolTip(tr("Leaves what was begun; the survey stays as it is (Ctrl+.)"));
+  connect(stop, &QToolButton::clicked, this, [this] { job_.cancel(); });
+  workLayout->addWidget(progress_);
+  workLayout->addWidget(stop);
+  work_->hide();
   auto* bottom = new QWidget(this);
   auto* bottomLayout = new QHBoxLayout(bottom);
   bottomLayout->setContentsMargins(0, 0, 8, 0);
   bottomLayout->addWidget(answerLine_, 1);
-  bottomLayout->addWidget(progress_);
+  bottomLayout->addWidget(work_);
   auto* all = new QWidget(this);
   auto* layout = new QVBoxLayout(all);
   layout->setContentsMargins(0, 0, 0, 0);
@@ -208,7 +218,7 @@ void MainWindow::openRecords(const QStringList& paths, Into into) {
     return;
   }
   progress_->setValue(0);
-  progress_->show();
+  work_->show();
   job_.start([files](const Progress& progress) { return loadLine(files, {}, progress); },
              [this, into](LoadedLine line) { takeLine(line, into, false); });
 }
@@ -275,7 +285,7 @@ void MainWindow::startPicking(int shot) {
     return;
   }
   progress_->setValue(0);
-  progress_->show();
+  work_->show();
   auto survey = std::make_shared<const Survey>(desk_.survey());
   auto gathers = desk_.scene().gathers;
   job_.start(

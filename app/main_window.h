@@ -74,6 +74,7 @@ class MainWindow : public QMainWindow {
   void saveSurveyAs();
   void importPicks();
   void loadGeometry();
+  void saveGeometryTable();
   void exportCsv();
   void makeSheet();
   void editInfo();
@@ -108,6 +109,7 @@ class MainWindow : public QMainWindow {
   QSplitter* columns_ = nullptr;
   QSplitter* rows_ = nullptr;
   QProgressBar* progress_ = nullptr;
+  QWidget* work_ = nullptr;  ///< progress and the button that stops it
   QLabel* hint_ = nullptr;
   QAction* undo_ = nullptr;
   QAction* redo_ = nullptr;

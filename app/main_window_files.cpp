@@ -102,6 +102,25 @@ void MainWindow::loadGeometry() {
   }
 }
 
+void MainWindow::saveGeometryTable() {
+  const auto table = geometryTableOf(desk_.survey());
+  if (!table) {
+    say(tr("No table written"), QString::fromStdString(table.message()));
+    return;
+  }
+  const QString path =
+      QFileDialog::getSaveFileName(this, tr("Write the geometry as a table"),
+                                   QSettings().value("folder").toString() + "/geometry.csv", tr("Tables (*.csv)"));
+  if (path.isEmpty()) {
+    return;
+  }
+  if (const Outcome written = writeTextFile(path.toStdString(), geometryCsv(*table)); !written) {
+    say(tr("No table written"), QString::fromStdString(written.message()));
+  } else {
+    answerLine_->setHint(tr("Geometry written to %1").arg(path));
+  }
+}
+
 void MainWindow::exportCsv() {
   const QString folder = QFileDialog::getExistingDirectory(this, tr("Folder for the tables"));
   if (folder.isEmpty() || !desk_.scene().interpretation) {

@@ -41,6 +41,7 @@ void MainWindow::buildFileMenu() {
   add(menu, tr("Save survey &as..."), QKeySequence::SaveAs, this, &MainWindow::saveSurveyAs);
   menu->addSeparator();
   add(menu, tr("Lay a &geometry table over the headers..."), {}, this, &MainWindow::loadGeometry);
+  add(menu, tr("Write the geometry as a ta&ble..."), {}, this, &MainWindow::saveGeometryTable);
   add(menu, tr("Read &picks from a table..."), {}, this, &MainWindow::importPicks);
   menu->addSeparator();
   add(menu, tr("&Print the sheet, or save it as PDF..."), QKeySequence::Print, this, &MainWindow::makeSheet);

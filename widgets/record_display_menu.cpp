@@ -8,6 +8,7 @@
 
 #include "core/base/units.h"
 #include "widgets/record_view.h"
+#include "widgets/record_words.h"
 
 namespace strikeplate {
 namespace {
@@ -59,8 +60,14 @@ void addSwitch(QMenu& menu, RecordView& view, const QString& text, bool RecordDi
                    [&view, action, member] { action->setChecked(view.display().*member); });
 }
 
-Choice<double> hertz(double value) {
-  return {value > 0.0 ? tr("%1 Hz").arg(value) : tr("None"), value};
+/// A corner of the filter, with what it does to a first break that is read off the filtered trace.
+Choice<double> corner(double PassBand::*which, double value) {
+  if (value <= 0.0) {
+    return {tr("None"), value};
+  }
+  PassBand band;
+  band.*which = value;
+  return {tr("%1 Hz (%2)").arg(value).arg(onsetWords(band)), value};
 }
 
 }  // namespace
@@ -86,9 +93,11 @@ void fillDisplayMenu(QMenu& menu, RecordView& view) {
       {{tr("None"), 0.0}, {tr("Over 20 ms"), 0.02}, {tr("Over 50 ms"), 0.05}, {tr("Over 200 ms"), 0.2}});
   menu.addSeparator();
   addChoices<double>(menu, view, tr("Low cut"), &RecordDisplay::lowCut,
-                     {hertz(0), hertz(5), hertz(10), hertz(20), hertz(40)});
+                     {corner(&PassBand::low, 0), corner(&PassBand::low, 5), corner(&PassBand::low, 10),
+                      corner(&PassBand::low, 20), corner(&PassBand::low, 40)});
   addChoices<double>(menu, view, tr("High cut"), &RecordDisplay::highCut,
-                     {hertz(0), hertz(400), hertz(200), hertz(100), hertz(60)});
+                     {corner(&PassBand::high, 0), corner(&PassBand::high, 400), corner(&PassBand::high, 200),
+                      corner(&PassBand::high, 100), corner(&PassBand::high, 60)});
   addChoices<double>(menu, view, tr("Mains hum"), &RecordDisplay::hum,
                      {{tr("Left in"), 0.0}, {tr("50 Hz taken out"), 50.0}, {tr("60 Hz taken out"), 60.0}});
   menu.addSeparator();

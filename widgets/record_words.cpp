@@ -8,6 +8,7 @@
 
 #include "core/base/numbers.h"
 #include "core/base/units.h"
+#include "core/record/onset_shift.h"
 
 namespace strikeplate {
 namespace {
@@ -33,6 +34,12 @@ QString stateWord(TraceState state) {
 }
 
 }  // namespace
+
+QString onsetWords(const PassBand& band) {
+  const double shift = onsetShift(band);
+  const QString size = ms(std::abs(shift), 2);
+  return shift < 0.0 ? tr("first breaks seem %1 early").arg(size) : tr("first breaks seem %1 late").arg(size);
+}
 
 QString hoverWords(const RecordPicture& picture, int trace, double recorderTime) {
   const auto t = static_cast<std::size_t>(trace);

@@ -131,16 +131,16 @@ std::vector<std::string> checkHeaders(const ShotRecord& record) {
   }
   if (!together.empty()) {
     out.push_back(record.file + ": " + tracesListed(together) +
-                  " stand where the trace before stands, according to the header; check the geophones' positions.");
+                  " stand where the trace before stands; check the geophones' positions.");
   }
   if (rising > 0 && falling > 0) {
-    out.push_back(record.file + ": the geophones run back and forth according to the header; check their positions.");
+    out.push_back(record.file + ": the geophones run back and forth; check their positions.");
   }
   if (record.source && x.size() > 1) {
     const auto [low, high] = std::minmax_element(x.begin(), x.end());
     const double beyond = std::max(*low - record.source->x, record.source->x - *high);
     if (*high - *low > kSamePlace && beyond > 10.0 * (*high - *low)) {
-      out.push_back(record.file + ": the header puts the shot " + metres(beyond) +
+      out.push_back(record.file + ": the shot stands " + metres(beyond) +
                     " beyond the geophones, more than ten times the length of the spread; check its position.");
     }
   }

@@ -18,8 +18,8 @@ namespace strikeplate {
 /// the ground between the geophones. Common practice, no source.
 std::vector<std::string> checkGeometry(const std::vector<Geophone>& geophones, const std::vector<ShotPoint>& shots);
 
-/// What is contradictory about a record's header positions: geophones that run back and forth, several traces at one
-/// place, a shot more than ten spread lengths away.
+/// What is contradictory about a record's positions, as its headers or a table give them: geophones that run back and
+/// forth, several traces at one place, a shot more than ten spread lengths away.
 std::vector<std::string> checkHeaders(const ShotRecord& record);
 
 }  // namespace strikeplate

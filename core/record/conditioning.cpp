@@ -82,7 +82,11 @@ std::vector<float> conditioned(std::span<const float> samples, double sampleInte
   }
   if (settings.humFrequency > 0.0) {
     const std::size_t noise = samplesBefore(settings.noiseUntil, start, sampleInterval, out.size());
-    out = withoutHum(out, sampleInterval, fitHum(out, sampleInterval, noise, settings.humFrequency));
+    constexpr double kEnoughPeriods = 2.0;
+    const bool enough = static_cast<double>(noise) * sampleInterval * settings.humFrequency >= kEnoughPeriods;
+    out = withoutHum(out, sampleInterval,
+                     enough ? fitHum(out, sampleInterval, noise, settings.humFrequency)
+                            : fitHumThroughout(out, sampleInterval, settings.humFrequency));
   }
   out = zeroPhase(out, sampleInterval, settings.band);
   if (settings.reversePolarity) {

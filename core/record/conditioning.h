@@ -10,7 +10,8 @@ namespace strikeplate {
 /// What is done to a trace for the eye, in the order of the members; stored samples are never changed.
 struct Conditioning {
   bool removeDc = true;
-  double humFrequency = 0.0;  ///< Hz, 50 or 60; 0 leaves hum in. Fitted on what was recorded before `noiseUntil`
+  double humFrequency = 0.0;  ///< Hz, 50 or 60; 0 leaves hum in. Fitted on what was recorded before `noiseUntil`,
+                              ///< or, where that is less than two periods, on the quiet parts of the whole trace
   double noiseUntil = 0.0;    ///< s, recorder time before which there is noise only
   PassBand band;              ///< Hz, zero-phase
   bool reversePolarity = false;

@@ -21,6 +21,13 @@ struct Hum {
 /// frequency in Hz > 0; sampleInterval in s > 0. Common practice, no source.
 Hum fitHum(std::span<const float> samples, double sampleInterval, std::size_t noiseSamples, double frequency);
 
+/// Fits hum where there is hardly any noise before the first break: to the whole trace, by least squares in which
+/// each sample weighs as little as the trace is loud around it once the hum is gone (within half a period either
+/// side, found by iteration). So the quiet stretches before the break and after the waves decide. All amplitudes are
+/// zero when the trace lasts less than three periods. Where the waves ring at the mains frequency to the end of the
+/// record some of them go with the hum. Common practice (iteratively reweighted least squares), no source.
+Hum fitHumThroughout(std::span<const float> samples, double sampleInterval, double frequency);
+
 /// The trace without the hum; the constant stays.
 std::vector<float> withoutHum(std::span<const float> samples, double sampleInterval, const Hum& hum);
 

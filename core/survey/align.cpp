@@ -46,9 +46,12 @@ void judgeShots(Survey& survey) {
 
 }  // namespace
 
-Survey withBlowsAligned(Survey survey) {
-  for (Shot& shot : survey.shots) {
-    alignShot(survey, shot, survey.remarks);
+std::optional<Survey> withBlowsAligned(Survey survey, const Progress& progress) {
+  for (std::size_t s = 0; s < survey.shots.size(); ++s) {
+    if (!goOn(progress, static_cast<double>(s) / static_cast<double>(survey.shots.size()))) {
+      return std::nullopt;
+    }
+    alignShot(survey, survey.shots[s], survey.remarks);
   }
   judgeShots(survey);
   return survey;

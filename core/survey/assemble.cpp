@@ -5,6 +5,7 @@
 #include <utility>
 
 #include "core/base/numbers.h"
+#include "core/line/geometry_checks.h"
 
 namespace strikeplate {
 namespace {
@@ -86,7 +87,9 @@ std::vector<Geophone> geophonesOf(const std::vector<RecordPlaces>& all, std::vec
       remarks.push_back("The records give elevations from " + fixed(least, 2) + " to " + fixed(most, 2) +
                         " m for the geophone at " + fixed(places[i].x, 2) + " m; their mean is used.");
     }
-    out.push_back({places[i].x, known > 0 ? sum / known : 0.0});
+    // Where all agree their mean would only add rounding.
+    const double elevation = known == 0 ? 0.0 : least == most ? least : sum / known;
+    out.push_back({places[i].x, elevation});
     i = j;
   }
   return out;
@@ -99,11 +102,31 @@ int nearestGeophone(const std::vector<Geophone>& geophones, double x) {
       std::min<std::ptrdiff_t>(right - geophones.begin(), static_cast<std::ptrdiff_t>(geophones.size()) - 1));
 }
 
+// Where the file or a table says the depth outright, the third coordinate is the ground's elevation.
+void placeKnownDepth(ShotPoint& shot, const ShotRecord& record, const std::optional<double>& z,
+                     std::vector<std::string>& remarks) {
+  if (z && *z != 0.0) {
+    shot.elevation = *z;
+  }
+  if (*record.sourceDepth >= 0.0) {
+    shot.depth = *record.sourceDepth;
+  } else {
+    remarks.push_back(record.file + ": its shot depth, " + fixed(*record.sourceDepth, 2) +
+                      " m, is negative and was left out; give depths below the ground as positive numbers.");
+  }
+}
+
 // The third coordinate of a source location is an elevation in some files and a depth below the ground in others: it
 // is taken as whichever agrees with the ground, and said when it could be neither.
-void placeSource(ShotPoint& shot, const std::optional<double>& z, const Ground& ground, const std::string& file,
-                 std::vector<std::string>& remarks) {
+void placeSource(RecordPlaces& places, const Ground& ground, std::vector<std::string>& remarks) {
+  ShotPoint& shot = places.shot;
+  const std::optional<double>& z = places.sourceZ;
+  const std::string& file = places.record->file;
   shot.elevation = ground.at(shot.x);
+  if (places.record->sourceDepth) {
+    placeKnownDepth(shot, *places.record, z, remarks);
+    return;
+  }
   if (!z || *z == 0.0) {
     return;
   }
@@ -124,7 +147,8 @@ void placeSource(ShotPoint& shot, const std::optional<double>& z, const Ground& 
 }
 
 bool sameShot(const RecordPlaces& a, const RecordPlaces& b) {
-  if (std::abs(a.shot.x - b.shot.x) > kSamePlace || a.geophones.size() != b.geophones.size()) {
+  if (std::abs(a.shot.x - b.shot.x) > kSamePlace || std::abs(a.shot.depth - b.shot.depth) > kSamePlace ||
+      a.geophones.size() != b.geophones.size()) {
     return false;
   }
   for (std::size_t i = 0; i < a.geophones.size(); ++i) {
@@ -164,13 +188,15 @@ Survey assemble(std::vector<RecordPtr> records) {
     for (const std::string& oddity : record->oddities) {
       survey.remarks.push_back(record->file + ": " + oddity);
     }
+    const auto contradictions = checkHeaders(*record);
+    survey.remarks.insert(survey.remarks.end(), contradictions.begin(), contradictions.end());
     all.push_back(placesOf(record, static_cast<int>(i), survey.remarks));
   }
   survey.geophones = geophonesOf(all, survey.remarks);
   const Ground ground(survey.geophones, {});
   std::vector<const RecordPlaces*> firsts;
   for (RecordPlaces& record : all) {
-    placeSource(record.shot, record.sourceZ, ground, record.record->file, survey.remarks);
+    placeSource(record, ground, survey.remarks);
     std::size_t s = 0;
     while (s < firsts.size() && !sameShot(*firsts[s], record)) {
       ++s;

@@ -1,7 +1,9 @@
 #pragma once
 
+#include <optional>
 #include <vector>
 
+#include "core/base/progress.h"
 #include "core/survey/survey.h"
 
 namespace strikeplate {
@@ -16,7 +18,8 @@ namespace strikeplate {
 Survey assemble(std::vector<RecordPtr> records);
 
 /// Finds the lag and the similarity of every blow of every shot by cross-correlation, and the states of the traces.
-Survey withBlowsAligned(Survey survey);
+/// Nothing when `progress` asked to stop early.
+std::optional<Survey> withBlowsAligned(Survey survey, const Progress& progress = {});
 
 /// Positions closer than this are one place, m.
 inline constexpr double kSamePlace = 0.01;

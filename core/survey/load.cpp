@@ -95,7 +95,7 @@ class Loading {
     }
   }
 
-  void finish() {
+  void finish(const Progress& progress) {
     if (table_) {
       std::vector<const ShotRecord*> all;
       for (const RecordPtr& record : records_) {
@@ -104,7 +104,12 @@ class Loading {
       const auto unused = unusedRows(*table_, all);
       line_.problems.insert(line_.problems.end(), unused.begin(), unused.end());
     }
-    Survey fresh = withBlowsAligned(assemble(std::move(records_)));
+    auto aligned = withBlowsAligned(assemble(std::move(records_)), progress);
+    if (!aligned) {
+      line_.finished = false;
+      return;
+    }
+    Survey fresh = std::move(*aligned);
     for (const RecordPtr& record : fresh.records) {
       takeHeaderInfo(*record, fresh.info);
     }
@@ -159,11 +164,14 @@ LoadedLine loadLine(const std::vector<std::string>& paths, const std::string& ge
       recordPaths.push_back(path);
     }
   }
-  loading.readRecordFiles(recordPaths, progress);
-  if (!line.finished) {
-    return line;
+  // Reading takes about as long as aligning the blows.
+  const auto half = [&progress](double from) -> Progress {
+    return [&progress, from](double fraction) { return goOn(progress, from + 0.5 * fraction); };
+  };
+  loading.readRecordFiles(recordPaths, half(0.0));
+  if (line.finished) {
+    loading.finish(half(0.5));
   }
-  loading.finish();
   return line;
 }
 

@@ -4,10 +4,12 @@
 
 #include <QDir>
 #include <QElapsedTimer>
+#include <QProgressBar>
 #include <QSettings>
 #include <QTabBar>
 #include <QTemporaryDir>
 #include <QTest>
+#include <QToolButton>
 #include <gtest/gtest.h>
 #include <qcustomplot.h>
 
@@ -170,6 +172,23 @@ TEST_F(Window, AnotherLineOfTheJobHasATabAndKeepsItsOwnPicks) {
   settle();
   EXPECT_FALSE(tabs->isVisible());
   EXPECT_EQ(window->desk().survey().shots, first);
+}
+
+TEST_F(Window, ReadingIsStoppedByItsButtonAndTheSurveyStaysAsItIs) {
+  const Survey before = window->desk().survey();
+  auto* stop = window->findChild<QProgressBar*>()->parentWidget()->findChild<QToolButton*>();
+  ASSERT_TRUE(stop);
+  EXPECT_FALSE(stop->isVisible());
+  QStringList many;
+  for (int round = 0; round < 20; ++round) {
+    many << demoFolder();
+  }
+  window->openRecords(many, MainWindow::Into::NewSurvey);
+  EXPECT_TRUE(stop->isVisible());
+  QTest::mouseClick(stop, Qt::LeftButton);
+  settle();
+  EXPECT_FALSE(stop->isVisible());
+  EXPECT_EQ(window->desk().survey(), before);
 }
 
 TEST_F(Window, TheSurveyIsOnDiskAfterEveryEditAndOpensWithItsHistory) {

@@ -145,6 +145,7 @@ TEST(RecordView, TheDisplayMenuSetsAndShowsHowRecordsAreDrawn) {
       EXPECT_TRUE(desk.view.display().timeUp);
     } else if (action->text() == "Low cut") {
       QMenu* cuts = action->menu();
+      EXPECT_EQ(cuts->actions().at(2)->text(), "10 Hz (first breaks seem 0.31 ms late)");
       cuts->actions().at(2)->trigger();
       EXPECT_EQ(desk.view.display().lowCut, 10.0);
       emit cuts->aboutToShow();

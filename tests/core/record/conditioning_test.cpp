@@ -7,6 +7,7 @@
 #include <gtest/gtest.h>
 
 #include "core/record/hum.h"
+#include "core/record/onset_shift.h"
 
 namespace strikeplate {
 namespace {
@@ -66,28 +67,10 @@ TEST(Butterworth, ConstantPassesAHighCutAndNotALowCut) {
   EXPECT_EQ(zeroPhase(level, kInterval, {0.0, 4000.0}), level);
 }
 
-// When a pulse that leaves zero as the square of time passes 5 % of its first peak, s after its start.
-double fivePercentTime(const PassBand& band) {
-  constexpr double kStart = 0.5;
-  std::vector<float> pulse(8000);
-  for (std::size_t i = 0; i < pulse.size(); ++i) {
-    const double u = (static_cast<double>(i) * kInterval - kStart) / 0.004;
-    pulse[i] = static_cast<float>(u <= 0.0 ? 0.0 : u * u * std::exp(2.0 * (1.0 - u)) * std::cos(1.2 * (u - 1.0)));
-  }
-  const auto out = zeroPhase(pulse, kInterval, band);
-  const auto peak = std::max_element(out.begin(), out.end());
-  auto at = peak;
-  while (*at > 0.05F * *peak) {
-    --at;
-  }
-  const double part = static_cast<double>((0.05F * *peak - *at) / (*(at + 1) - *at));
-  return (static_cast<double>(at - out.begin()) + part) * kInterval - kStart;
-}
-
-// The figures stated in butterworth.h.
+// The figures stated in butterworth.h and, in words, in the record view's menu.
 TEST(Butterworth, EffectOnOnsetTimeIsAsStated) {
-  const double unfiltered = fivePercentTime({});
-  const auto moved = [&](double low, double high) { return 1e3 * (fivePercentTime({low, high}) - unfiltered); };
+  const auto moved = [](double low, double high) { return 1e3 * onsetShift({low, high}); };
+  EXPECT_EQ(moved(0.0, 0.0), 0.0);
   EXPECT_NEAR(moved(0.0, 400.0), -0.04, 0.01);
   EXPECT_NEAR(moved(0.0, 200.0), -0.24, 0.01);
   EXPECT_NEAR(moved(0.0, 100.0), -1.31, 0.01);
@@ -133,6 +116,43 @@ TEST(Hum, IsOnlyFoundWhereItIs) {
 TEST(Hum, TooShortANoiseIsLeftAlone) {
   const auto trace = sineWave(50.0, 1000);
   EXPECT_EQ(withoutHum(trace, kInterval, fitHum(trace, kInterval, 100, 50.0)), trace);
+}
+
+// A quarter of a period of noise before the blow and a break 30 ms after it, on a record of 250 ms.
+TEST(Hum, IsTakenOutWhereHardlyAnyNoiseWasRecorded) {
+  std::mt19937 random(5);
+  std::normal_distribution<double> noise(0.0, 0.1);
+  constexpr double kStep = 0.00025;
+  constexpr double kAmplitude = 3.0;
+  for (const double frequency : {50.0, 60.0}) {
+    for (int phase = 0; phase < 8; ++phase) {
+      std::vector<float> clean(1000), humming(1000);
+      for (std::size_t i = 0; i < clean.size(); ++i) {
+        const double after = static_cast<double>(i) * kStep - 0.035;
+        const double wave = after > 0.0 ? 20.0 * (1.0 - std::exp(-after / 0.003)) * std::exp(-after / 0.02) *
+                                              std::sin(kTwoPi * 45.0 * after)
+                                        : 0.0;
+        clean[i] = static_cast<float>(wave + noise(random));
+        humming[i] =
+            clean[i] + static_cast<float>(
+                           kAmplitude * std::sin(kTwoPi * frequency * kStep * static_cast<double>(i) + 0.8 * phase));
+      }
+      Conditioning settings;
+      settings.removeDc = false;
+      settings.humFrequency = frequency;
+      const auto out = conditioned(humming, kStep, -0.005, settings);
+      double left = 0.0;
+      for (std::size_t i = 0; i < out.size(); ++i) {
+        left = std::max(left, std::abs(static_cast<double>(out[i]) - static_cast<double>(clean[i])));
+      }
+      EXPECT_LT(left, 0.05 * kAmplitude) << frequency << " Hz, phase " << phase;
+    }
+  }
+}
+
+TEST(Hum, ATraceOfLessThanThreePeriodsIsLeftAlone) {
+  const auto trace = sineWave(50.0, 400);
+  EXPECT_EQ(withoutHum(trace, kInterval, fitHumThroughout(trace, kInterval, 50.0)), trace);
 }
 
 TEST(Conditioning, StepsDoWhatTheySay) {

@@ -59,6 +59,32 @@ TEST(Assemble, ReceiverElevationsMakeTheGround) {
   EXPECT_DOUBLE_EQ(survey.shots[0].point.elevation, 101.1);
 }
 
+TEST(Assemble, ADepthThatIsSaidOutrightIsTheShotsDepthAndANegativeOneIsSaid) {
+  auto r = std::make_shared<ShotRecord>(*record("deep", 5, 3, 10));
+  r->sourceDepth = 1.2;
+  EXPECT_DOUBLE_EQ(assemble({r}).shots[0].point.depth, 1.2);
+  r = std::make_shared<ShotRecord>(*r);
+  r->sourceDepth = -1.2;
+  const Survey survey = assemble({r});
+  EXPECT_DOUBLE_EQ(survey.shots[0].point.depth, 0.0);
+  ASSERT_EQ(survey.remarks.size(), 1U);
+  EXPECT_NE(survey.remarks[0].find("negative"), std::string::npos);
+}
+
+TEST(Assemble, HeadersThatContradictEachOtherAreSaidWithTheRecord) {
+  auto r = std::make_shared<ShotRecord>(*record("wild.sg2", -2, 12, 2));
+  r->traces[5].receiver->x = 3.0;
+  const Survey survey = assemble({r});
+  ASSERT_EQ(survey.remarks.size(), 1U);
+  EXPECT_EQ(survey.remarks[0], "wild.sg2: the geophones run back and forth; check their positions.");
+}
+
+TEST(WithBlowsAligned, StopsWhenAsked) {
+  const Survey survey = assemble({record("1", -2, 12, 2), record("2", 30, 12, 2)});
+  EXPECT_FALSE(withBlowsAligned(survey, [](double fraction) { return fraction < 0.5; }));
+  EXPECT_TRUE(withBlowsAligned(survey));
+}
+
 TEST(Merge, ShotsOfASecondSpreadJoinTheLineAndPicksStay) {
   Survey survey = assemble({record("1", -2, 12, 2)});
   survey.shots[0].traces[3].pick = Pick{0.01, 0.0005, 1, PickOrigin::Hand};
