@@ -54,6 +54,7 @@ Result<Edit> geometryEdit(const Survey& survey, const std::string& tablePath) {
   after.info = survey.info;
   after.settings = survey.settings;
   after.boreholes = survey.boreholes;
+  after.doubtAnswers = survey.doubtAnswers;
   after.remarks = std::move(remarks);
   return Edit{"Lay a geometry table over the headers", {ContentChange{survey, std::move(after)}}};
 }
