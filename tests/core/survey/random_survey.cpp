@@ -84,12 +84,7 @@ Shot randomShot(std::mt19937& random, double x, int record, int geophones) {
 Edit randomShotEdit(const Survey& survey, std::mt19937& random) {
   const int shot = whole(random, 0, static_cast<int>(survey.shots.size()) - 1);
   const int trace = whole(random, 0, static_cast<int>(survey.geophones.size()) - 1);
-  switch (whole(random, 0, 5)) {
-    case 3:
-      return edits::setMark(survey, shot,
-                            {static_cast<MarkKind>(whole(random, 0, 1)), real(random, 1, 9), real(random, 0.1, 1)});
-    case 4:
-      return edits::removeMark(survey, shot, MarkKind::CriticalDistance);
+  switch (whole(random, 0, 3)) {
     case 0:
       return edits::setTriggerCorrection(survey, shot, real(random, -5e-3, 5e-3));
     case 1:
@@ -134,7 +129,6 @@ Survey randomSurvey(std::mt19937& random) {
   survey.info = randomInfo(random);
   survey.settings = {whole(random, 0, 4), whole(random, 0, 1) == 1, false};
   survey.boreholes = {randomBorehole(random)};
-  survey.doubtAnswers = {{"pick", word(random), "looked at again"}};
   survey.remarks = {word(random)};
   return survey;
 }
@@ -142,7 +136,7 @@ Survey randomSurvey(std::mt19937& random) {
 Edit randomEdit(const Survey& survey, std::mt19937& random) {
   const int shot = whole(random, 0, static_cast<int>(survey.shots.size()) - 1);
   const int trace = whole(random, 0, static_cast<int>(survey.geophones.size()) - 1);
-  switch (whole(random, 0, 10)) {
+  switch (whole(random, 0, 9)) {
     case 0:
       return edits::setInfo(survey, randomInfo(random));
     case 1:
@@ -156,8 +150,6 @@ Edit randomEdit(const Survey& survey, std::mt19937& random) {
     case 5:
       return edits::setPicks(survey, {{shot, 0, {}, maybePick(random)}, {shot, 1, {}, maybePick(random)}},
                              word(random));
-    case 8:
-      return edits::answerDoubt(survey, "pick", word(random), word(random));
     case 6:
     case 7:
       return randomShotEdit(survey, random);
