@@ -26,6 +26,7 @@ KeyList::KeyList(QWidget* parent) : QDialog(parent), list_(new QTreeWidget(this)
 
   addPane(tr("Everywhere"),
           {{tr("Escape"), tr("abandons the gesture")},
+           {tr("F1, Shift+F1"), tr("the handbook, this list")},
            {tr("Ctrl+Z, Ctrl+Shift+Z"), tr("undo, redo")},
            {tr("Ctrl+Page up, Ctrl+Page down"), tr("the line before, the line after, of a job with several")},
            {tr("F5, Shift+F5"), tr("picks the line, or this shot, automatically")},
@@ -47,6 +48,11 @@ KeyList::KeyList(QWidget* parent) : QDialog(parent), list_(new QTreeWidget(this)
            {tr("Click a pick; Left, Right"), tr("selects it; goes along the curve")},
            {tr("Drag over empty ground, Ctrl+click, Shift+Left, Right"), tr("marks many picks")},
            {tr("1 to 6, 0"), tr("gives the marked picks to a layer; 0 leaves them to the program")},
+           {tr("Alt+drag over empty ground"), tr("marks the picks inside the line drawn")},
+           {tr("S, M, D"), tr("splits the branch at the selected pick, merges it with the next, dissolves it")},
+           {tr("Alt+Left, Alt+Right"), tr("slides the far end of the selected pick's branch")},
+           {tr("K, F"), tr("keeps the shot in view; forward or reverse curves stand out")},
+           {tr("Right button, Menu key"), tr("what fits there; also critical distance and reflection time by hand")},
            {tr("Delete"), tr("deletes the marked picks")},
            {tr("Wheel, middle drag, +, -, Home"), tr("zooms and moves along the line; the whole line")}});
   addPane(tr("Line strip"), {{tr("Click; Left, Right"), tr("chooses a shot, or the trace at a geophone")},

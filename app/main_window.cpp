@@ -194,6 +194,7 @@ void MainWindow::showHistory() {
   }
   const QString name = desk_.path().isEmpty() ? QString() : QFileInfo(desk_.path()).completeBaseName() + " - ";
   setWindowTitle(name + "Strikeplate");
+  rememberSurvey();
 }
 
 void MainWindow::showAnswer() {

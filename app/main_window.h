@@ -20,6 +20,7 @@ class QSplitter;
 namespace strikeplate {
 
 class AnswerLine;
+class Handbook;
 class LineStrip;
 class LineTabs;
 class RecordView;
@@ -48,6 +49,7 @@ class MainWindow : public QMainWindow {
  public slots:
   void pickLine();
   void pickShot();
+  void showHandbook(const QString& chapter = {});
 
  protected:
   void dragEnterEvent(QDragEnterEvent* event) override;
@@ -71,6 +73,8 @@ class MainWindow : public QMainWindow {
   void chooseRecords(Into into);
   void openTimes(const QString& path, Into into);
   void chooseSurvey();
+  void fillRecent(QMenu* menu);
+  void rememberSurvey();
   void saveSurveyAs();
   void importPicks();
   void loadGeometry();
@@ -106,6 +110,7 @@ class MainWindow : public QMainWindow {
   TravelTimePlot* travelTimePlot_ = nullptr;
   SectionPanel* sectionPanel_ = nullptr;
   AnswerLine* answerLine_ = nullptr;
+  Handbook* handbook_ = nullptr;
   QSplitter* columns_ = nullptr;
   QSplitter* rows_ = nullptr;
   QProgressBar* progress_ = nullptr;

@@ -1,6 +1,7 @@
 // What the window opens, saves, prints and writes.
 #include <QFileDialog>
 #include <QFileInfo>
+#include <QMenu>
 #include <QSettings>
 
 #include "app/answer_line.h"
@@ -50,6 +51,34 @@ void MainWindow::chooseSurvey() {
                                                     tr("Strikeplate surveys (*.splate)"));
   if (!path.isEmpty()) {
     openSurvey(path);
+  }
+}
+
+void MainWindow::rememberSurvey() {
+  constexpr qsizetype kMost = 9;
+  QSettings settings;
+  QStringList recent = settings.value("recent").toStringList();
+  const QString path = desk_.path();
+  if (path.isEmpty() || (!recent.isEmpty() && recent.front() == path)) {
+    return;
+  }
+  recent.removeAll(path);
+  recent.prepend(path);
+  settings.setValue("recent", recent.mid(0, kMost));
+}
+
+void MainWindow::fillRecent(QMenu* menu) {
+  menu->clear();
+  for (const QString& path : QSettings().value("recent").toStringList()) {
+    if (QFileInfo::exists(path) && path != desk_.path()) {
+      QAction* action = menu->addAction(QFileInfo(path).completeBaseName(), this, [this, path] { openSurvey(path); });
+      action->setToolTip(path);
+      action->setStatusTip(path);
+    }
+  }
+  menu->setToolTipsVisible(true);
+  if (menu->isEmpty()) {
+    menu->addAction(tr("None yet"))->setEnabled(false);
   }
 }
 

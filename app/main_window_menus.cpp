@@ -38,6 +38,8 @@ void MainWindow::buildFileMenu() {
   add(menu, tr("Open records as another &line of this job..."), {}, this,
       [this] { chooseRecords(Into::AnotherLine); });
   add(menu, tr("Open &survey..."), QKeySequence(tr("Ctrl+Shift+O")), this, &MainWindow::chooseSurvey);
+  QMenu* recent = menu->addMenu(tr("Re&cent surveys"));
+  connect(recent, &QMenu::aboutToShow, this, [this, recent] { fillRecent(recent); });
   add(menu, tr("Save survey &as..."), QKeySequence::SaveAs, this, &MainWindow::saveSurveyAs);
   menu->addSeparator();
   add(menu, tr("Lay a &geometry table over the headers..."), {}, this, &MainWindow::loadGeometry);
@@ -76,6 +78,18 @@ void MainWindow::buildPicksMenu() {
   }
   layers->addAction(tr("Let the &program assign (key 0)"), this, [this] { travelTimePlot_->assignChosen(0); });
   menu->addAction(tr("&Delete the marked picks"), this, [this] { travelTimePlot_->deleteChosen(); });
+  QMenu* branch = menu->addMenu(tr("&Branch of the selected pick"));
+  branch->addAction(tr("&Split here (key S on the travel-time plot)"), travelTimePlot_,
+                    &TravelTimePlot::splitBranchHere);
+  branch->addAction(tr("&Merge with the one beyond (key M)"), travelTimePlot_, &TravelTimePlot::mergeBranchHere);
+  branch->addAction(tr("&Dissolve: leave it to the program (key D)"), travelTimePlot_,
+                    &TravelTimePlot::dissolveBranchHere);
+  branch->addAction(tr("End one pick &out (Alt+arrow)"), this, [this] { travelTimePlot_->slideFarEnd(1); });
+  branch->addAction(tr("End one pick &in (Alt+arrow)"), this, [this] { travelTimePlot_->slideFarEnd(-1); });
+  menu->addAction(tr("&Critical distance of this shot..."), this,
+                  [this] { travelTimePlot_->askMark(MarkKind::CriticalDistance, 0.0); });
+  menu->addAction(tr("&Reflection time of this shot..."), this,
+                  [this] { travelTimePlot_->askMark(MarkKind::ReflectionTime, 0.0); });
   menu->addSeparator();
   add(menu, tr("&Trigger corrections..."), {}, this, &MainWindow::askTriggerCorrections);
   add(menu, tr("&Stop"), QKeySequence(tr("Ctrl+.")), this, [this] { job_.cancel(); });
@@ -135,6 +149,8 @@ void MainWindow::buildTravelTimeMenu(QMenu* menu) {
     action->setShortcut(key);
     action->setCheckable(true);
     action->setChecked(travelTimePlot_->display().*what);
+    connect(travelTimePlot_, &TravelTimePlot::displayChanged, action,
+            [this, action, what] { action->setChecked(travelTimePlot_->display().*what); });
     connect(action, &QAction::toggled, this, [this, what](bool on) {
       TravelTimeDisplay display = travelTimePlot_->display();
       display.*what = on;
@@ -145,6 +161,10 @@ void MainWindow::buildTravelTimeMenu(QMenu* menu) {
   addSwitch(tr("&Fitted lines"), QKeySequence(tr("Ctrl+Alt+L")), &TravelTimeDisplay::fittedLines);
   addSwitch(tr("The &section's curves"), QKeySequence(tr("Ctrl+Alt+C")), &TravelTimeDisplay::predicted);
   addSwitch(tr("&Residuals: pick minus section"), QKeySequence(tr("Ctrl+Alt+R")), &TravelTimeDisplay::residuals);
+  addSwitch(tr("&Crossover and critical distances"), QKeySequence(tr("Ctrl+Alt+X")), &TravelTimeDisplay::marks);
+  addSwitch(tr("Reci&procal times of the shot"), QKeySequence(tr("Ctrl+Alt+P")), &TravelTimeDisplay::reciprocals);
+  menu->addAction(tr("&Keep the shot in view (key K)"), travelTimePlot_, &TravelTimePlot::keepShot);
+  menu->addAction(tr("For&ward, reverse or both stand out (key F)"), travelTimePlot_, &TravelTimePlot::nextSide);
   menu->addSeparator();
   QAction* reduced = menu->addAction(tr("Re&duced time..."));
   connect(reduced, &QAction::triggered, this, &MainWindow::askReduction);
@@ -152,7 +172,9 @@ void MainWindow::buildTravelTimeMenu(QMenu* menu) {
 
 void MainWindow::buildHelpMenu() {
   QMenu* menu = menuBar()->addMenu(tr("&Help"));
-  add(menu, tr("&Keys and gestures"), QKeySequence(tr("F1")), this, &MainWindow::showKeys);
+  add(menu, tr("&Handbook"), QKeySequence(tr("F1")), this, [this] { showHandbook(); });
+  add(menu, tr("A short &tour"), {}, this, [this] { showHandbook(tr("A short tour")); });
+  add(menu, tr("&Keys and gestures"), QKeySequence(tr("Shift+F1")), this, &MainWindow::showKeys);
   add(menu, tr("&About Strikeplate"), {}, this, &MainWindow::showAbout);
 }
 

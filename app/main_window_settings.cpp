@@ -1,5 +1,6 @@
 // What the window asks the user, and how it looks.
 #include <QApplication>
+#include <QFile>
 #include <QInputDialog>
 #include <QMessageBox>
 #include <QSettings>
@@ -7,6 +8,7 @@
 #include "app/answer_line.h"
 #include "app/blows_dialog.h"
 #include "app/borehole_dialog.h"
+#include "app/handbook.h"
 #include "app/info_dialog.h"
 #include "app/key_list.h"
 #include "app/main_window.h"
@@ -117,6 +119,23 @@ void MainWindow::setLookKind(LookKind kind) {
     view->setLook(look);
   }
   answerLine_->setLook(look);
+}
+
+void MainWindow::showHandbook(const QString& chapter) {
+  if (handbook_ == nullptr) {
+    QFile file(":/handbook.md");
+    if (!file.open(QIODevice::ReadOnly)) {
+      say(tr("No handbook"), tr("The handbook is missing from this copy of the program; install it again."));
+      return;
+    }
+    handbook_ = new Handbook(QString::fromUtf8(file.readAll()), this);
+  }
+  handbook_->show();
+  handbook_->raise();
+  handbook_->activateWindow();
+  if (!chapter.isEmpty()) {
+    handbook_->showChapter(chapter);
+  }
 }
 
 void MainWindow::showKeys() {

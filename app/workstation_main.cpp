@@ -5,6 +5,7 @@
 #include <QCommandLineParser>
 #include <QFileInfo>
 #include <QIcon>
+#include <QSettings>
 #include <QTimer>
 
 #include "app/main_window.h"
@@ -37,6 +38,11 @@ int main(int argc, char** argv) {
   QTimer::singleShot(0, &window, [&window, files] {
     if (files.isEmpty()) {
       window.openDemo();
+      QSettings settings;
+      if (!settings.value("toured").toBool()) {
+        settings.setValue("toured", true);
+        window.showHandbook(strikeplate::MainWindow::tr("A short tour"));
+      }
     } else if (files.size() == 1 && files.front().endsWith(".splate", Qt::CaseInsensitive)) {
       window.openSurvey(files.front());
     } else {

@@ -3,9 +3,12 @@
 #include <QHBoxLayout>
 #include <QHeaderView>
 #include <QLabel>
+#include <QLineEdit>
 #include <QScrollArea>
 #include <QTreeWidget>
+#include <QVBoxLayout>
 
+#include "core/survey/doubts.h"
 #include "widgets/doubt_groups.h"
 
 namespace strikeplate {
@@ -19,8 +22,9 @@ QString text(const std::string& words) {
   return QString::fromStdString(words);
 }
 
-QTreeWidgetItem* itemOf(const Doubt& doubt, std::size_t index, int height) {
-  auto* item = new QTreeWidgetItem({text(doubt.says)});
+QTreeWidgetItem* itemOf(const Survey& survey, const Doubt& doubt, std::size_t index, int height) {
+  const bool answered = !answerTo(survey, doubt).empty();
+  auto* item = new QTreeWidgetItem({(answered ? QString("\u2713 ") : QString()) + text(doubt.says)});
   item->setSizeHint(0, QSize(0, height));
   item->setData(0, kIndex, static_cast<int>(index));
   item->setToolTip(0, text(doubt.says));
@@ -29,7 +33,8 @@ QTreeWidgetItem* itemOf(const Doubt& doubt, std::size_t index, int height) {
 
 }  // namespace
 
-DoubtsList::DoubtsList(QWidget* parent) : QWidget(parent), tree_(new QTreeWidget(this)), detail_(new QLabel(this)) {
+DoubtsList::DoubtsList(QWidget* parent)
+    : QWidget(parent), tree_(new QTreeWidget(this)), detail_(new QLabel(this)), answer_(new QLineEdit(this)) {
   tree_->setHeaderHidden(true);
   tree_->setFrameShape(QFrame::NoFrame);
   tree_->setIndentation(14);
@@ -51,7 +56,16 @@ DoubtsList::DoubtsList(QWidget* parent) : QWidget(parent), tree_(new QTreeWidget
   layout->setContentsMargins(0, 0, 0, 0);
   layout->setSpacing(1);
   layout->addWidget(tree_, 5);
-  layout->addWidget(scroll, 4);
+  answer_->setPlaceholderText(tr("Your answer, printed on the sheet; Enter keeps it"));
+  answer_->setAccessibleName(tr("Answer to the chosen doubt"));
+  answer_->setEnabled(false);
+  auto* side = new QVBoxLayout;
+  side->setContentsMargins(0, 0, 0, 0);
+  side->setSpacing(2);
+  side->addWidget(scroll, 1);
+  side->addWidget(answer_);
+  layout->addLayout(side, 4);
+  connect(answer_, &QLineEdit::editingFinished, this, &DoubtsList::answer);
   setFocusProxy(tree_);
   connect(tree_, &QTreeWidget::currentItemChanged, this, [this](QTreeWidgetItem* item) { choose(item); });
   // The evidence may have been scrolled away since: a click on the chosen doubt goes there again.
@@ -78,7 +92,7 @@ void DoubtsList::showEvent(QShowEvent* event) {
 
 // While another tab is in front nothing is built, so that a drag pays only for what is seen.
 void DoubtsList::refresh() {
-  if (shown_ == scene_.interpretation || !isVisible()) {
+  if (!isVisible() || (shown_ == scene_.interpretation && shownAnswers_ == scene_.survey->doubtAnswers)) {
     return;
   }
   const Doubt* before = doubtOf(tree_->currentItem());
@@ -90,6 +104,7 @@ void DoubtsList::refresh() {
     }
   }
   shown_ = scene_.interpretation;
+  shownAnswers_ = scene_.survey->doubtAnswers;
   const QSignalBlocker quiet(tree_);
   fill();
   restore(open, chosen);
@@ -122,17 +137,17 @@ void DoubtsList::fill() {
     const std::size_t strongest = group.doubts.front();
     if (group.doubts.size() <= kFewEnough) {
       for (const std::size_t index : group.doubts) {
-        tree_->addTopLevelItem(itemOf(doubts[index], index, height));
+        tree_->addTopLevelItem(itemOf(*scene_.survey, doubts[index], index, height));
       }
       continue;
     }
     // The line stands for the strongest of its kind; opened, it shows the others.
-    QTreeWidgetItem* top = itemOf(doubts[strongest], strongest, height);
+    QTreeWidgetItem* top = itemOf(*scene_.survey, doubts[strongest], strongest, height);
     top->setText(
         0,
         tr("%1 \u00d7 %2, the strongest: %3").arg(group.doubts.size()).arg(group.kind, text(doubts[strongest].says)));
     for (std::size_t i = 1; i < group.doubts.size(); ++i) {
-      top->addChild(itemOf(doubts[group.doubts[i]], group.doubts[i], height));
+      top->addChild(itemOf(*scene_.survey, doubts[group.doubts[i]], group.doubts[i], height));
     }
     tree_->addTopLevelItem(top);
   }
@@ -146,7 +161,20 @@ void DoubtsList::choose(QTreeWidgetItem* item) {
   }
 }
 
+void DoubtsList::answer() {
+  const std::string note = answer_->text().trimmed().toStdString();
+  if (!shownDoubt_.kind.empty() && note != answerTo(*scene_.survey, shownDoubt_)) {
+    emit proposed(edits::answerDoubt(*scene_.survey, shownDoubt_.kind, shownDoubt_.where, note), Phase::Commit);
+  }
+}
+
 void DoubtsList::showDetail(const Doubt* doubt) {
+  const bool same = doubt != nullptr && doubt->kind == shownDoubt_.kind && doubt->where == shownDoubt_.where;
+  shownDoubt_ = doubt != nullptr ? *doubt : Doubt{};
+  answer_->setEnabled(doubt != nullptr);
+  if (!same || !answer_->hasFocus()) {
+    answer_->setText(doubt != nullptr ? text(answerTo(*scene_.survey, *doubt)) : QString());
+  }
   if (doubt == nullptr) {
     const bool none = shown_ && shown_->doubts.empty();
     detail_->setText(none ? tr("Nothing speaks against this interpretation. That is no proof of it: compare with a "

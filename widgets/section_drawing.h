@@ -29,6 +29,8 @@ class SectionDrawing : public QCPAbstractItem {
   explicit SectionDrawing(QCustomPlot* plot);
   void show(const Scene& scene, const Look& look);
   [[nodiscard]] SectionFrame frame() const;
+  /// Where the layer names begin, px from the left: what else is written keeps to the left of it.
+  [[nodiscard]] double namesBegin() const { return namesBegin_; }
   double selectTest(const QPointF&, bool, QVariant*) const override { return -1.0; }
 
  protected:
@@ -48,6 +50,7 @@ class SectionDrawing : public QCPAbstractItem {
   Scene scene_;
   Look look_ = Look::of(LookKind::Light);
   Ground ground_;
+  mutable double namesBegin_ = 1e9;
   std::vector<HiddenAllowance> allowances_;
 };
 

@@ -128,6 +128,7 @@ void SectionDrawing::drawLayerNames(QPainter& painter, const Section& section) c
     tops.push_back(f.y(elevation) + 5.0);
   }
   spreadApart(tops, height, area);
+  namesBegin_ = area.right();
   for (int layer = 1; layer <= section.layers; ++layer) {
     const auto n = static_cast<std::size_t>(layer - 1);
     QFont font = painter.font();
@@ -136,6 +137,7 @@ void SectionDrawing::drawLayerNames(QPainter& painter, const Section& section) c
     const QString words = QString::number(layer) + "   " + velocityShort(f.units, section.velocities[n]);
     const double width = painter.fontMetrics().horizontalAdvance(words) + 1.0;
     const QRectF place(area.right() - width - 8.0, tops[n], width, height);
+    namesBegin_ = std::min(namesBegin_, place.left() - 18.0);
     drawWordsOnPaper(painter, look_, place.adjusted(-15, 0, 0, 0), QString(), look_.ink);
     painter.setPen(QPen(look_.layerColour(layer), look_.lineWidth));
     painter.setBrush(Qt::NoBrush);

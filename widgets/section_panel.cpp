@@ -47,6 +47,7 @@ SectionPanel::SectionPanel(QWidget* parent)
   connect(plot_, &View::positionRangeWanted, this, &View::positionRangeWanted);
   connect(plot_, &View::hint, this, &View::hint);
   connect(opinions_, &OpinionsView::hint, this, &View::hint);
+  connect(doubts_, &DoubtsList::proposed, this, &View::proposed);
   connect(doubts_, &DoubtsList::doubtChosen, this, &SectionPanel::goTo);
   connect(layers_, &LayerTable::layerWanted, this, [this](int layer) {
     emit selectionWanted({scene_.selection.shot, scene_.selection.trace, layer});

@@ -51,7 +51,7 @@ void SectionPlot::showSelection(const Selection& selection) {
 }
 
 void SectionPlot::showPlumbLine(double x) {
-  readout_->show(scene_, look(), x);
+  readout_->show(scene_, look(), x, drawing_->namesBegin());
   PositionView::showPlumbLine(x);
 }
 
@@ -67,7 +67,7 @@ void SectionPlot::drawData() {
   elevations_ = elevationRange(scene_);
   setElevationAxis();
   drawing_->show(scene_, look());
-  readout_->show(scene_, look(), plumbLine());
+  readout_->show(scene_, look(), plumbLine(), drawing_->namesBegin());
 }
 
 // Above the ground there is room for the marks of geophones and shots and the names of boreholes, below the section

@@ -16,10 +16,11 @@ struct Line {
 
 PlumbReadout::PlumbReadout(QCustomPlot* plot) : QCPAbstractItem(plot) {}
 
-void PlumbReadout::show(const Scene& scene, const Look& look, double x) {
+void PlumbReadout::show(const Scene& scene, const Look& look, double x, double rightEnd) {
   scene_ = scene;
   look_ = look;
   x_ = x;
+  rightEnd_ = rightEnd;
 }
 
 void PlumbReadout::draw(QCPPainter* painter) {
@@ -52,7 +53,7 @@ void PlumbReadout::draw(QCPPainter* painter) {
     widest = std::max(widest, metrics.horizontalAdvance(line.words));
   }
   spreadApart(tops, height + 1.0, area);
-  const bool leftwards = x + widest + 30.0 > area.right();
+  const bool leftwards = x + widest + 20.0 > std::min(rightEnd_, area.right());
   for (std::size_t i = 0; i < lines.size(); ++i) {
     const double width = metrics.horizontalAdvance(lines[i].words) + 1.0;
     const QRectF place(leftwards ? x - 10.0 - width : x + 10.0, tops[i], width, height);

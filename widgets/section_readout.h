@@ -11,7 +11,8 @@ namespace strikeplate {
 class PlumbReadout : public QCPAbstractItem {
  public:
   explicit PlumbReadout(QCustomPlot* plot);
-  void show(const Scene& scene, const Look& look, double x);
+  /// `x` in m; the read-out stands left of the line where it would otherwise reach beyond `rightEnd`, px.
+  void show(const Scene& scene, const Look& look, double x, double rightEnd);
   double selectTest(const QPointF&, bool, QVariant*) const override { return -1.0; }
 
  protected:
@@ -21,6 +22,7 @@ class PlumbReadout : public QCPAbstractItem {
   Scene scene_;
   Look look_ = Look::of(LookKind::Light);
   double x_ = Estimate::kNaN;
+  double rightEnd_ = 0.0;
 };
 
 }  // namespace strikeplate

@@ -17,14 +17,10 @@ namespace {
 
 constexpr int kSymbols = 7;  // layer 0 (none) to 6
 constexpr double kEndSize = 13.0;
+constexpr int kSteppedBack = 45;  // opacity of the side that does not stand out
 
 QString tr(const char* text) {
   return QCoreApplication::translate("strikeplate::TravelTimePlot", text);
-}
-
-/// ms by which a display lowers a time at an offset.
-double reductionAt(const TravelTimeDisplay& display, double offset) {
-  return display.reductionVelocity > 0.0 ? 1e3 * offset / display.reductionVelocity : 0.0;
 }
 
 QString lineText(const Branch& branch, const Units& units) {
@@ -50,12 +46,16 @@ double shownTime(const Interpretation& interpretation, int arrival, const Travel
     const bool known = interpretation.section.determined && i < interpretation.section.predicted.size();
     return known ? 1e3 * (a.time - interpretation.section.predicted[i]) : Estimate::kNaN;
   }
-  return 1e3 * a.time - reductionAt(display, interpretation.times.offset(a));
+  return 1e3 * a.time - display.reductionAt(interpretation.times.offset(a));
 }
 
 double TravelTimePicture::positionOf(int geophone) const {
   const Units units{scene_.survey->settings.feet};
   return units.fromMetres(scene_.interpretation->times.geophones[static_cast<std::size_t>(geophone)].x);
+}
+
+int TravelTimePicture::strength(double signedOffset, int full) const {
+  return display_.side != 0 && signedOffset * display_.side < 0.0 ? kSteppedBack : full;
 }
 
 bool TravelTimePicture::isSelected(const Arrival& arrival) const {
@@ -85,13 +85,13 @@ void TravelTimePicture::draw(const Scene& scene, const Look& look, const TravelT
     return;
   }
   setTimeAxis();
-  if (display.allShots) {
-    drawCurves(false);
-    drawPicks(false);
-  }
+  drawCurves(false);
+  drawPicks(false);
   drawCurves(true);
+  drawReciprocals();
   drawLines();
-  drawMarks();
+  drawBranchMarks();
+  drawMarked();
   drawPicks(true);
   drawEnds();
 }
@@ -129,18 +129,21 @@ void TravelTimePicture::drawCurves(bool selected) {
   const auto& predicted = scene_.interpretation->section.predicted;
   QVector<double> key, x, t;
   double n = 0.0;
+  int last = -1;
   for (std::size_t i = 0; i < std::min(arrivals.size(), predicted.size()); ++i) {
-    if (isSelected(arrivals[i]) != selected) {
+    if (isSelected(arrivals[i]) != selected || !display_.shows(arrivals[i].shot, scene_.selection) ||
+        strength(scene_.interpretation->times.signedOffset(arrivals[i]), 255) < 255) {
       continue;
     }
-    if (i > 0 && arrivals[i].shot != arrivals[i - 1].shot) {
+    if (last >= 0 && arrivals[i].shot != last) {
       key << n++;
       x << 0.0;
       t << Estimate::kNaN;
     }
+    last = arrivals[i].shot;
     key << n++;
     x << positionOf(arrivals[i].geophone);
-    t << 1e3 * predicted[i] - reductionAt(display_, scene_.interpretation->times.offset(arrivals[i]));
+    t << 1e3 * predicted[i] - display_.reductionAt(scene_.interpretation->times.offset(arrivals[i]));
   }
   auto* curve = new QCPCurve(plot_.xAxis, plot_.yAxis);
   curve->setData(key, x, t, true);
@@ -150,35 +153,43 @@ void TravelTimePicture::drawCurves(bool selected) {
 }
 
 void TravelTimePicture::drawPicks(bool selected) {
-  const auto& arrivals = scene_.interpretation->times.arrivals;
-  QVector<double> x[kSymbols], t[kSymbols], bar[kSymbols];
-  for (std::size_t i = 0; i < arrivals.size(); ++i) {
+  const TravelTimes& times = scene_.interpretation->times;
+  // For every layer, first those that stand out and then those of the side that steps back.
+  struct Points {
+    QVector<double> x, t, bar;
+  };
+  Points points[kSymbols][2];
+  for (std::size_t i = 0; i < times.arrivals.size(); ++i) {
+    const Arrival& a = times.arrivals[i];
     const double time = shownTime(*scene_.interpretation, static_cast<int>(i), display_);
-    if (isSelected(arrivals[i]) == selected && std::isfinite(time)) {
-      const int layer = std::clamp(arrivals[i].layer, 0, kSymbols - 1);
-      x[layer] << positionOf(arrivals[i].geophone);
-      t[layer] << time;
-      bar[layer] << 1e3 * kNormal95 * arrivals[i].sigma;
+    if (isSelected(a) == selected && display_.shows(a.shot, scene_.selection) && std::isfinite(time)) {
+      Points& of = points[std::clamp(a.layer, 0, kSymbols - 1)][strength(times.signedOffset(a), 255) < 255 ? 1 : 0];
+      of.x << positionOf(a.geophone);
+      of.t << time;
+      of.bar << 1e3 * kNormal95 * a.sigma;
     }
   }
   for (int layer = 0; layer < kSymbols; ++layer) {
-    if (x[layer].isEmpty()) {
-      continue;
+    for (const int back : {1, 0}) {
+      const Points& of = points[layer][back];
+      if (of.x.isEmpty()) {
+        continue;
+      }
+      auto* graph = plot_.addGraph();
+      graph->setData(of.x, of.t);
+      graph->setLineStyle(QCPGraph::lsNone);
+      QCPScatterStyle style = layerScatter(look_, layer, selected ? 7.0 : 4.5);
+      QColor colour = look_.layerColour(layer);
+      colour.setAlpha(back != 0 ? kSteppedBack : selected ? 255 : 150);
+      style.setPen(QPen(colour, (selected ? 1.5 : 1.0) * look_.lineWidth));
+      graph->setScatterStyle(style);
+      auto* bars = new QCPErrorBars(plot_.xAxis, plot_.yAxis);
+      bars->setDataPlottable(graph);
+      bars->setData(of.bar);
+      bars->setSymbolGap(selected ? 7.0 : 4.5);
+      bars->setWhiskerWidth(selected ? 4.0 : 0.0);
+      bars->setPen(QPen(colour, 0.8 * look_.lineWidth));
     }
-    auto* graph = plot_.addGraph();
-    graph->setData(x[layer], t[layer]);
-    graph->setLineStyle(QCPGraph::lsNone);
-    QCPScatterStyle style = layerScatter(look_, layer, selected ? 7.0 : 4.5);
-    QColor colour = look_.layerColour(layer);
-    colour.setAlpha(selected ? 255 : 150);
-    style.setPen(QPen(colour, (selected ? 1.5 : 1.0) * look_.lineWidth));
-    graph->setScatterStyle(style);
-    auto* bars = new QCPErrorBars(plot_.xAxis, plot_.yAxis);
-    bars->setDataPlottable(graph);
-    bars->setData(bar[layer]);
-    bars->setSymbolGap(selected ? 7.0 : 4.5);
-    bars->setWhiskerWidth(selected ? 4.0 : 0.0);
-    bars->setPen(QPen(colour, 0.8 * look_.lineWidth));
   }
 }
 
@@ -189,7 +200,8 @@ void TravelTimePicture::drawLines() {
   const Units units{scene_.survey->settings.feet};
   const TravelTimes& times = scene_.interpretation->times;
   for (const Branch& branch : scene_.interpretation->branches) {
-    if (branch.shot != scene_.selection.shot || !branch.fit.determined || branch.arrivals.size() < 2) {
+    if (branch.shot != scene_.selection.shot || !branch.fit.determined || branch.arrivals.size() < 2 ||
+        strength(branch.side, 255) < 255) {
       continue;
     }
     const double shot = times.shots[static_cast<std::size_t>(branch.shot)].x;
@@ -199,7 +211,7 @@ void TravelTimePicture::drawLines() {
       auto* line = new QCPCurve(plot_.xAxis, plot_.yAxis);
       for (const double offset : {a, b}) {
         line->addData(units.fromMetres(shot + branch.side * offset),
-                      1e3 * branch.fit.at(offset) - reductionAt(display_, offset));
+                      1e3 * branch.fit.at(offset) - display_.reductionAt(offset));
       }
       line->setPen(QPen(look_.layerColour(branch.layer), width * look_.lineWidth, style));
     };
@@ -207,7 +219,7 @@ void TravelTimePicture::drawLines() {
     segment(from, to, Qt::SolidLine, 1.8);
     const double middle = 0.5 * (from + to);
     label(branch, units.fromMetres(shot + branch.side * middle),
-          1e3 * branch.fit.at(middle) - reductionAt(display_, middle));
+          1e3 * branch.fit.at(middle) - display_.reductionAt(middle));
   }
 }
 
@@ -276,7 +288,7 @@ int TravelTimePicture::picksUnder(const QRectF& place) const {
   return count;
 }
 
-void TravelTimePicture::drawMarks() {
+void TravelTimePicture::drawMarked() {
   QVector<double> x, t;
   const auto& arrivals = scene_.interpretation->times.arrivals;
   for (std::size_t i = 0; i < arrivals.size(); ++i) {

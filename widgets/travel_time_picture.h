@@ -8,27 +8,16 @@
 #include "widgets/branch_drag.h"
 #include "widgets/look.h"
 #include "widgets/scene.h"
+#include "widgets/travel_time_display.h"
 
 class QCPItemText;
 class QCustomPlot;
 
 namespace strikeplate {
 
-/// How the travel-time plot shows the times.
-struct TravelTimeDisplay {
-  bool allShots = true;            ///< or the selected one alone
-  bool fittedLines = true;         ///< of the selected shot, with velocity and intercept time
-  bool predicted = true;           ///< the section's curves
-  bool residuals = false;          ///< pick minus section instead of times
-  double reductionVelocity = 0.0;  ///< m/s; times less offset over this velocity; 0 shows them as they are
-  bool operator==(const TravelTimeDisplay&) const = default;
-};
-
-/// Where an arrival stands on the time axis of a display, ms; NaN where it has no place.
-double shownTime(const Interpretation& interpretation, int arrival, const TravelTimeDisplay& display);
-
 /// Draws all shots' picks with their 95 % bars, the section's curves, and for the selected shot its fitted lines
-/// (dashed back to the intercept time at the shot) and the ends of its branches, which can be taken hold of.
+/// (dashed back to the intercept time at the shot), the ends of its branches, which can be taken hold of, its
+/// crossover and critical distances, the user's marks, and its reciprocal times.
 class TravelTimePicture {
  public:
   explicit TravelTimePicture(QCustomPlot& plot) : plot_(plot) {}
@@ -41,13 +30,17 @@ class TravelTimePicture {
   void drawCurves(bool selected);
   void drawPicks(bool selected);
   void drawLines();
-  void drawMarks();
+  void drawMarked();
+  void drawBranchMarks();
+  void drawReciprocals();
   void drawEnds();
   void label(const Branch& branch, double x, double time);
   [[nodiscard]] int picksUnder(const QRectF& place) const;
   void setTimeAxis();
   [[nodiscard]] double positionOf(int geophone) const;
   [[nodiscard]] bool isSelected(const Arrival& arrival) const;
+  /// Opacity of what belongs to a side, 0 to 255: the other side steps back when one is to stand out.
+  [[nodiscard]] int strength(double signedOffset, int full) const;
 
   QCustomPlot& plot_;
   Scene scene_;

@@ -3,27 +3,30 @@
 #include <algorithm>
 #include <cmath>
 
-#include <QKeyEvent>
-#include <QMenu>
 #include <QMouseEvent>
 #include <QRubberBand>
 #include <QVBoxLayout>
 #include <qcustomplot.h>
 
 #include "core/base/units.h"
+#include "widgets/lasso_line.h"
+#include "widgets/travel_time_words.h"
 
 namespace strikeplate {
 namespace {
 
 constexpr double kReach = 14.0;  // px about the pointer in which a pick is meant
 constexpr double kEndReach = 10.0;
+constexpr double kMarkReach = 7.0;
 constexpr double kLeastBand = 5.0;  // px; less is a click
-constexpr int kMostLayer = 6;
 
 }  // namespace
 
 TravelTimePlot::TravelTimePlot(QWidget* parent)
-    : PositionView(parent), picture_(plot()), band_(new QRubberBand(QRubberBand::Rectangle, &plot())) {
+    : PositionView(parent),
+      picture_(plot()),
+      lasso_(new LassoLine(&plot())),
+      band_(new QRubberBand(QRubberBand::Rectangle, &plot())) {
   setFocusPolicy(Qt::StrongFocus);
   setMinimumHeight(160);
   setAccessibleName(tr("Travel times"));
@@ -56,6 +59,7 @@ void TravelTimePlot::showSelection(const Selection& selection) {
 void TravelTimePlot::setDisplay(const TravelTimeDisplay& display) {
   display_ = display;
   draw();
+  emit displayChanged();
 }
 
 void TravelTimePlot::drawData() {
@@ -90,7 +94,9 @@ int TravelTimePlot::arrivalAt(const QPointF& position, double reach) const {
   const std::size_t count = scene_.interpretation ? scene_.interpretation->times.arrivals.size() : 0;
   for (std::size_t i = 0; i < count; ++i) {
     const bool selected = scene_.interpretation->times.arrivals[i].shot == scene_.selection.shot;
-    const auto place = selected || display_.allShots ? placeOf(static_cast<int>(i)) : std::nullopt;
+    const auto place = display_.shows(scene_.interpretation->times.arrivals[i].shot, scene_.selection)
+                           ? placeOf(static_cast<int>(i))
+                           : std::nullopt;
     if (!place) {
       continue;
     }
@@ -139,7 +145,8 @@ void TravelTimePlot::press(QMouseEvent* event) {
   }
   const int arrival = arrivalAt(event->position(), kReach);
   if (arrival < 0) {
-    bandFrom_ = event->position();
+    drawn_ = {event->position()};
+    freehand_ = event->modifiers().testFlag(Qt::AltModifier);
     return;
   }
   const Arrival& a = scene_.interpretation->times.arrivals[static_cast<std::size_t>(arrival)];
@@ -166,10 +173,15 @@ void TravelTimePlot::move(QMouseEvent* event) {
       emit proposed(slideBranchEnd(*drag_->atPress, drag_->before->times, drag_->end, to), Phase::Live);
     }
     emit plumbLineWanted(x);
-  } else if (bandFrom_) {
-    const QRectF area = QRectF(*bandFrom_, event->position()).normalized();
-    band_->setGeometry(area.toRect());
-    band_->setVisible(std::max(area.width(), area.height()) > kLeastBand);
+  } else if (!drawn_.isEmpty()) {
+    drawn_ << event->position();
+    const QRectF area = QRectF(drawn_.front(), event->position()).normalized();
+    if (freehand_) {
+      lasso_->show(drawn_);
+    } else {
+      band_->setGeometry(area.toRect());
+      band_->setVisible(std::max(area.width(), area.height()) > kLeastBand);
+    }
   } else {
     hover(event->position());
   }
@@ -183,28 +195,29 @@ void TravelTimePlot::release(QMouseEvent* event) {
     const Edit edit = slideBranchEnd(*drag_->atPress, drag_->before->times, drag_->end, drag_->to);
     drag_.reset();
     emit proposed(edit, edit.changes.empty() ? Phase::Abandon : Phase::Commit);
-  } else if (bandFrom_) {
-    const QRectF area = QRectF(*bandFrom_, event->position()).normalized();
-    bandFrom_.reset();
+  } else if (!drawn_.isEmpty()) {
+    const QPolygonF area = freehand_ ? drawn_ : QPolygonF(QRectF(drawn_.front(), event->position()).normalized());
+    drawn_.clear();
     band_->hide();
+    lasso_->hide();
     markInside(area, event->modifiers().testFlag(Qt::ControlModifier));
   }
 }
 
-void TravelTimePlot::markInside(const QRectF& area, bool add) {
+void TravelTimePlot::markInside(const QPolygonF& area, bool add) {
   if (!add) {
     marked_.clear();
   }
-  if (std::max(area.width(), area.height()) > kLeastBand && scene_.interpretation) {
+  if (std::max(area.boundingRect().width(), area.boundingRect().height()) > kLeastBand && scene_.interpretation) {
     const auto& arrivals = scene_.interpretation->times.arrivals;
     for (std::size_t i = 0; i < arrivals.size(); ++i) {
       const auto place = placeOf(static_cast<int>(i));
-      if (place && area.contains(*place) && (display_.allShots || arrivals[i].shot == scene_.selection.shot)) {
+      if (place && area.containsPoint(*place, Qt::OddEvenFill) &&
+          display_.shows(arrivals[i].shot, scene_.selection)) {
         marked_.insert({arrivals[i].shot, arrivals[i].trace});
       }
     }
-    emit hint(tr("%n pick(s) marked: keys 1 to 6 give them to a layer, 0 back to the program", "",
-                 static_cast<int>(marked_.size())));
+    emit hint(tr("Marked picks: %1. Keys 1 to 6 give them to a layer, 0 back to the program.").arg(marked_.size()));
   }
   draw();
 }
@@ -217,168 +230,59 @@ void TravelTimePlot::hover(const QPointF& position) {
   emit plumbLineWanted(units.toMetres(plot().xAxis->pixelToCoord(position.x())));
   const auto end = endAt(position);
   plot().setCursor(end ? Qt::SizeHorCursor : Qt::ArrowCursor);
-  const int arrival = end ? end->arrival : arrivalAt(position, kReach);
-  emit hint(arrival < 0 ? QString()
-            : end
-                ? tr("End of the layer %1 branch: drag it along the curve. %2").arg(end->layer).arg(describe(arrival))
-                : describe(arrival));
+  emit hint(wordsAt(position));
 }
 
-QString TravelTimePlot::describe(int arrival) const {
-  const Interpretation& interpretation = *scene_.interpretation;
-  const auto i = static_cast<std::size_t>(arrival);
-  const Arrival& a = interpretation.times.arrivals[i];
+// Smaller things come first: an end, a mark, a pick, then lines.
+QString TravelTimePlot::wordsAt(const QPointF& position) const {
+  if (!scene_.interpretation) {
+    return {};
+  }
+  if (const auto end = endAt(position)) {
+    return tr("End of the layer %1 branch: drag it along the curve. %2")
+        .arg(end->layer)
+        .arg(arrivalWords(scene_, end->arrival));
+  }
+  const auto near = [&](const QPointF& place, double reach) {
+    return std::hypot(place.x() - position.x(), place.y() - position.y()) < reach;
+  };
+  if (display_.marks && !display_.residuals) {
+    for (const BranchMark& mark : branchMarks(*scene_.survey, *scene_.interpretation, scene_.selection.shot)) {
+      const double shot = scene_.interpretation->times.shots[static_cast<std::size_t>(mark.shot)].x;
+      if (near(pixel(shot + mark.side * mark.offset, mark.offset, mark.time), kMarkReach)) {
+        return markWords(scene_, mark);
+      }
+    }
+  }
+  if (const int arrival = arrivalAt(position, kReach); arrival >= 0) {
+    return arrivalWords(scene_, arrival);
+  }
+  const auto& shots = scene_.interpretation->times.shots;
+  for (const ReciprocalPair& pair : scene_.interpretation->reciprocals) {
+    const double xA = shots[static_cast<std::size_t>(pair.shotA)].x,
+                 xB = shots[static_cast<std::size_t>(pair.shotB)].x;
+    const bool shown = display_.reciprocals && !display_.residuals &&
+                       (pair.shotA == scene_.selection.shot || pair.shotB == scene_.selection.shot);
+    if (shown && (near(pixel(xA, std::abs(xB - xA), pair.timeBA), kReach) ||
+                  near(pixel(xB, std::abs(xB - xA), pair.timeAB), kReach))) {
+      return reciprocalWords(pair);
+    }
+  }
+  const double x = Units{scene_.survey->settings.feet}.toMetres(plot().xAxis->pixelToCoord(position.x()));
+  for (const Branch& branch : scene_.interpretation->branches) {
+    const double offset = branch.side * (x - shots[static_cast<std::size_t>(branch.shot)].x);
+    if (branch.shot == scene_.selection.shot && display_.fittedLines && !display_.residuals && offset > 0.0 &&
+        branch.fit.determined && near(pixel(x, offset, branch.fit.at(offset)), kMarkReach)) {
+      return branchWords(scene_, branch);
+    }
+  }
+  return {};
+}
+
+QPointF TravelTimePlot::pixel(double x, double offset, double time) const {
   const Units units{scene_.survey->settings.feet};
-  QString text = tr("Shot %1, trace %2 at %3: %4 ± %5")
-                     .arg(a.shot + 1)
-                     .arg(a.trace + 1)
-                     .arg(QString::fromStdString(
-                         units.length(interpretation.times.geophones[static_cast<std::size_t>(a.geophone)].x)))
-                     .arg(1e3 * a.time, 0, 'f', 2)
-                     .arg(QString::fromStdString(milliseconds(kNormal95 * a.sigma, 2)));
-  if (interpretation.section.determined && i < interpretation.section.predicted.size()) {
-    const double predicted = interpretation.section.predicted[i];
-    text += tr(", section %1, difference %2")
-                .arg(QString::fromStdString(milliseconds(predicted, 2)))
-                .arg(QString::fromStdString(milliseconds(a.time - predicted, 2)));
-  }
-  const QString by = a.layerByHand ? tr("by hand") : tr("by the program");
-  return a.layer > 0 ? text + tr(", layer %1 %2").arg(a.layer).arg(by) : text + tr(", no layer");
-}
-
-void TravelTimePlot::menuAt(const QPoint& position) {
-  const int arrival = arrivalAt(position, kReach);
-  if (arrival >= 0) {
-    const Arrival& a = scene_.interpretation->times.arrivals[static_cast<std::size_t>(arrival)];
-    if (!marked_.contains({a.shot, a.trace})) {
-      marked_.clear();
-      emit selectionWanted({a.shot, a.trace, a.layer});
-    }
-  }
-  const auto count = static_cast<int>(chosen().size());
-  auto* menu = new QMenu(this);
-  menu->setAttribute(Qt::WA_DeleteOnClose);
-  for (int layer = 1; layer <= kMostLayer; ++layer) {
-    QAction* action = menu->addAction(tr("Give %n pick(s) to layer %1", "", count).arg(layer));
-    connect(action, &QAction::triggered, this, [this, layer] { assignChosen(layer); });
-  }
-  connect(menu->addAction(tr("Let the program assign %n pick(s)", "", count)), &QAction::triggered, this,
-          [this] { assignChosen(0); });
-  menu->addSeparator();
-  connect(menu->addAction(tr("Delete %n pick(s)", "", count)), &QAction::triggered, this,
-          &TravelTimePlot::deleteChosen);
-  for (QAction* action : menu->actions()) {
-    action->setEnabled(count > 0);
-  }
-  menu->popup(plot().mapToGlobal(position));
-}
-
-void TravelTimePlot::assignChosen(int layer) {
-  const std::vector<TraceOfShot> traces = chosen();
-  if (!scene_.survey || traces.empty()) {
-    return;
-  }
-  const Edit edit = assignTraces(*scene_.survey, traces, layer);
-  if (!edit.changes.empty()) {
-    emit proposed(edit, Phase::Commit);
-  }
-}
-
-void TravelTimePlot::deleteChosen() {
-  std::vector<PickChange> changes;
-  for (const TraceOfShot& t : chosen()) {
-    if (scene_.survey->shots[static_cast<std::size_t>(t.shot)].traces[static_cast<std::size_t>(t.trace)].pick) {
-      changes.push_back({t.shot, t.trace, std::nullopt, std::nullopt});
-    }
-  }
-  if (!changes.empty()) {
-    const std::string text =
-        changes.size() == 1 ? "Delete a pick" : "Delete " + std::to_string(changes.size()) + " picks";
-    emit proposed(edits::setPicks(*scene_.survey, changes, text), Phase::Commit);
-    marked_.clear();
-  }
-}
-
-void TravelTimePlot::abandon() {
-  band_->hide();
-  bandFrom_.reset();
-  if (drag_) {
-    drag_.reset();
-    emit proposed({}, Phase::Abandon);
-  } else if (!marked_.empty()) {
-    marked_.clear();
-    draw();
-  }
-}
-
-void TravelTimePlot::stepTrace(int by, bool mark) {
-  const Selection s = scene_.selection;
-  if (!scene_.interpretation || s.shot < 0) {
-    return;
-  }
-  const auto& arrivals = scene_.interpretation->times.arrivals;
-  std::vector<std::size_t> curve;
-  std::ptrdiff_t at = -1;
-  for (std::size_t i = 0; i < arrivals.size(); ++i) {
-    if (arrivals[i].shot == s.shot) {
-      at = arrivals[i].trace == s.trace ? std::ssize(curve) : at;
-      curve.push_back(i);
-    }
-  }
-  if (curve.empty()) {
-    return;
-  }
-  const std::ptrdiff_t next = at < 0 ? 0 : std::clamp<std::ptrdiff_t>(at + by, 0, std::ssize(curve) - 1);
-  const Arrival& a = arrivals[curve[static_cast<std::size_t>(next)]];
-  if (mark) {
-    marked_.insert({a.shot, a.trace});
-    if (s.trace >= 0) {
-      marked_.insert({s.shot, s.trace});
-    }
-  } else {
-    marked_.clear();
-  }
-  const int arrival = static_cast<int>(curve[static_cast<std::size_t>(next)]);
-  emit hint(describe(arrival));
-  emit selectionWanted({a.shot, a.trace, a.layer});
-  emit plumbLineWanted(scene_.interpretation->times.geophones[static_cast<std::size_t>(a.geophone)].x);
-  draw();
-}
-
-void TravelTimePlot::stepShot(int by) {
-  const int last = scene_.survey ? static_cast<int>(scene_.survey->shots.size()) - 1 : -1;
-  if (last >= 0) {
-    emit selectionWanted({std::clamp(scene_.selection.shot + by, 0, last), -1, 0});
-  }
-}
-
-void TravelTimePlot::keyPressEvent(QKeyEvent* event) {
-  const bool shift = event->modifiers().testFlag(Qt::ShiftModifier);
-  const int layer = event->key() - Qt::Key_0;
-  if (layer >= 0 && layer <= kMostLayer && !event->modifiers().testFlag(Qt::ControlModifier)) {
-    assignChosen(layer);
-    return;
-  }
-  switch (event->key()) {
-    case Qt::Key_Left:
-    case Qt::Key_Right:
-      stepTrace(event->key() == Qt::Key_Left ? -1 : 1, shift);
-      break;
-    case Qt::Key_PageUp:
-    case Qt::Key_PageDown:
-      stepShot(event->key() == Qt::Key_PageUp ? -1 : 1);
-      break;
-    case Qt::Key_Delete:
-    case Qt::Key_Backspace:
-      deleteChosen();
-      break;
-    case Qt::Key_Escape:
-      abandon();
-      PositionView::keyPressEvent(event);
-      break;
-    default:
-      PositionView::keyPressEvent(event);
-  }
+  return {plot().xAxis->coordToPixel(units.fromMetres(x)),
+          plot().yAxis->coordToPixel(1e3 * time - display_.reductionAt(offset))};
 }
 
 }  // namespace strikeplate

@@ -37,6 +37,7 @@ struct SheetTable {
 
 struct SheetDoubt {
   std::string says, restsOn, settles;  ///< whole sentences
+  std::string answer;                  ///< what the user says to it; empty when nothing
 };
 
 /// Doubts of one kind, the strongest first; never empty.

@@ -1,8 +1,10 @@
 #include <algorithm>
 #include <cmath>
+#include <utility>
 
 #include "core/base/file_names.h"
 #include "core/report/sheet_parts.h"
+#include "core/survey/doubts.h"
 
 namespace strikeplate {
 namespace {
@@ -44,14 +46,17 @@ std::vector<SheetDoubtKind> sheetDoubts(const SheetSource& source) {
     if (kind == kinds.end()) {
       kind = kinds.insert(kinds.end(), {doubt.kind, {}});
     }
-    kind->second.push_back({misfitOf(source.interpretation, doubt),
-                            {withoutFolders(doubt.says, source.survey), withoutFolders(doubt.restsOn, source.survey),
-                             withoutFolders(doubt.wouldSettle, source.survey)}});
+    kind->second.push_back(
+        {misfitOf(source.interpretation, doubt),
+         {withoutFolders(doubt.says, source.survey), withoutFolders(doubt.restsOn, source.survey),
+          withoutFolders(doubt.wouldSettle, source.survey), sentence(answerTo(source.survey, doubt))}});
   }
   std::vector<SheetDoubtKind> sorted;
   for (auto& [name, ranked] : kinds) {
-    std::stable_sort(ranked.begin(), ranked.end(),
-                     [](const Ranked& a, const Ranked& b) { return a.misfit > b.misfit; });
+    std::stable_sort(ranked.begin(), ranked.end(), [](const Ranked& a, const Ranked& b) {
+      // What somebody answered is worth its line before the others of its kind.
+      return std::pair(!a.doubt.answer.empty(), a.misfit) > std::pair(!b.doubt.answer.empty(), b.misfit);
+    });
     sorted.push_back({name, {}});
     for (Ranked& one : ranked) {
       sorted.back().doubts.push_back(std::move(one.doubt));
@@ -69,9 +74,18 @@ SheetTable sheetDoubtTable(const std::vector<SheetDoubtKind>& kinds, const std::
   SheetTable table;
   table.title = "Doubts";
   table.columns = {"Kind", "Doubt", "Rests on", "What would settle it"};
+  const bool answered = std::any_of(kinds.begin(), kinds.end(), [](const SheetDoubtKind& kind) {
+    return std::any_of(kind.doubts.begin(), kind.doubts.end(), [](const SheetDoubt& d) { return !d.answer.empty(); });
+  });
+  if (answered) {
+    table.columns.push_back("Answered");
+  }
   for (const SheetDoubtKind& kind : kinds) {
     for (const SheetDoubt& doubt : kind.doubts) {
       table.rows.push_back({kind.kind, doubt.says, doubt.restsOn, doubt.settles});
+      if (answered) {
+        table.rows.back().push_back(doubt.answer);
+      }
     }
   }
   table.summary = table.rows.empty() ? none : "";
@@ -86,7 +100,8 @@ std::vector<std::string> doubtLines(const SheetContent& sheet, int mostOfAKind, 
       const SheetDoubt& doubt = kind.doubts[i];
       const bool said = i > 0 && doubt.settles == kind.doubts[i - 1].settles;
       lines.push_back(doubt.says + (reasons && !doubt.restsOn.empty() ? " " + doubt.restsOn : "") +
-                      (said || doubt.settles.empty() ? "" : " To settle it: " + doubt.settles));
+                      (said || doubt.settles.empty() ? "" : " To settle it: " + doubt.settles) +
+                      (doubt.answer.empty() ? "" : " Answered: " + doubt.answer));
     }
     if (shown < kind.doubts.size()) {
       lines.push_back("And " + std::to_string(kind.doubts.size() - shown) + " more of this kind (" + kind.kind +

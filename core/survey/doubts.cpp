@@ -1,8 +1,17 @@
 #include "core/survey/doubts.h"
 
+#include <algorithm>
+
 #include "core/base/units.h"
 
 namespace strikeplate {
+
+std::string answerTo(const Survey& survey, const Doubt& doubt) {
+  const auto answer =
+      std::find_if(survey.doubtAnswers.begin(), survey.doubtAnswers.end(),
+                   [&doubt](const DoubtAnswer& a) { return a.kind == doubt.kind && a.where == doubt.where; });
+  return answer == survey.doubtAnswers.end() ? std::string() : answer->note;
+}
 
 std::string shotName(const Survey& survey, int shot) {
   const Units units{survey.settings.feet};

@@ -26,6 +26,9 @@ void hiddenLayers(const Survey& survey, const Interpretation& interpretation, st
 void files(const Survey& survey, const Interpretation& interpretation, std::vector<Doubt>& doubts);
 }  // namespace doubt_rules
 
+/// What the user said to a doubt; empty when nothing.
+std::string answerTo(const Survey& survey, const Doubt& doubt);
+
 /// "shot 3 at 12 m".
 std::string shotName(const Survey& survey, int shot);
 

@@ -57,6 +57,10 @@ void carryOut(Survey& survey, const BoreholesChange& change) {
   survey.boreholes = change.after;
 }
 
+void carryOut(Survey& survey, const DoubtAnswersChange& change) {
+  survey.doubtAnswers = change.after;
+}
+
 void carryOut(Survey& survey, const ContentChange& change) {
   survey = change.after;
 }

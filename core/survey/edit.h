@@ -31,6 +31,9 @@ struct SettingsChange {
 struct BoreholesChange {
   std::vector<Borehole> before, after;
 };
+struct DoubtAnswersChange {
+  std::vector<DoubtAnswer> before, after;
+};
 /// A new set of records with the geometry that goes with it (loading, adding, removing records).
 struct ContentChange {
   Survey before, after;
@@ -41,7 +44,7 @@ struct LineChange {
 };
 
 using Change = std::variant<PickChange, ShotChange, GeophonesChange, InfoChange, SettingsChange, BoreholesChange,
-                            ContentChange, LineChange>;
+                            ContentChange, LineChange, DoubtAnswersChange>;
 
 /// One step of the history: what undo and redo name, and one transaction of the survey file.
 struct Edit {
@@ -73,6 +76,12 @@ Edit setTraceState(const Survey& survey, int shot, int trace, TraceState state);
 Edit useBlows(const Survey& survey, const std::vector<std::vector<bool>>& used);
 Edit setInfo(const Survey& survey, const SurveyInfo& info);
 Edit setSettings(const Survey& survey, const SurveySettings& settings, std::string text);
+/// Sets what the user read off a shot, in place of an earlier mark of its kind. Needs a value and sigma > 0.
+Edit setMark(const Survey& survey, int shot, const ShotMark& mark);
+/// Without changes when there is no such mark.
+Edit removeMark(const Survey& survey, int shot, MarkKind kind);
+/// Answers the doubt of this kind and place; an empty note takes the answer back.
+Edit answerDoubt(const Survey& survey, const std::string& kind, const std::string& where, const std::string& note);
 Edit setBoreholes(const Survey& survey, const std::vector<Borehole>& boreholes, std::string text);
 }  // namespace edits
 

@@ -33,7 +33,11 @@ bool sound(const Shot& shot, std::size_t records, std::size_t geophones) {
     return within(b.record, records) && finite({b.lag, b.similarity});
   };
   const auto traceSound = [geophones](const ShotTrace& t) { return within(t.geophone, geophones) && sound(t.pick); };
+  const auto markSound = [](const ShotMark& m) {
+    return finite({m.value, m.sigma}) && m.value > 0.0 && m.sigma > 0.0;
+  };
   return finite({shot.point.x, shot.point.elevation, shot.point.depth, shot.triggerCorrection}) &&
+         std::all_of(shot.marks.begin(), shot.marks.end(), markSound) &&
          std::all_of(shot.blows.begin(), shot.blows.end(), blowSound) &&
          std::all_of(shot.traces.begin(), shot.traces.end(), traceSound);
 }
@@ -77,6 +81,10 @@ bool fits(const Survey& /*survey*/, const SettingsChange& change) {
 
 bool fits(const Survey& /*survey*/, const BoreholesChange& change) {
   return allSound(change.before) && allSound(change.after);
+}
+
+bool fits(const Survey& /*survey*/, const DoubtAnswersChange& /*change*/) {
+  return true;
 }
 
 bool fits(const Survey& /*survey*/, const ContentChange& change) {

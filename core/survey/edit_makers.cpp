@@ -49,6 +49,10 @@ const char* stateName(TraceState state) {
   return "live";
 }
 
+const char* markName(MarkKind kind) {
+  return kind == MarkKind::CriticalDistance ? "critical distance" : "reflection time";
+}
+
 // A shot as its change stores it: the picks are not part of the change, so they are not kept twice.
 Shot withoutPicks(Shot shot) {
   for (ShotTrace& trace : shot.traces) {
@@ -166,6 +170,35 @@ Edit setInfo(const Survey& survey, const SurveyInfo& info) {
 
 Edit setSettings(const Survey& survey, const SurveySettings& settings, std::string text) {
   return {std::move(text), {SettingsChange{survey.settings, settings}}};
+}
+
+Edit setMark(const Survey& survey, int shot, const ShotMark& mark) {
+  assert(mark.value > 0.0 && mark.sigma > 0.0);
+  const Shot before = withoutPicks(shotOf(survey, shot));
+  Shot after = before;
+  std::erase_if(after.marks, [&mark](const ShotMark& m) { return m.kind == mark.kind; });
+  after.marks.push_back(mark);
+  return {"Mark " + std::string(markName(mark.kind)) + " of " + shotName(shot), {ShotChange{shot, before, after}}};
+}
+
+Edit removeMark(const Survey& survey, int shot, MarkKind kind) {
+  const Shot before = withoutPicks(shotOf(survey, shot));
+  Shot after = before;
+  if (std::erase_if(after.marks, [kind](const ShotMark& m) { return m.kind == kind; }) == 0) {
+    return {};
+  }
+  return {"Remove " + std::string(markName(kind)) + " of " + shotName(shot), {ShotChange{shot, before, after}}};
+}
+
+Edit answerDoubt(const Survey& survey, const std::string& kind, const std::string& where, const std::string& note) {
+  std::vector<DoubtAnswer> after = survey.doubtAnswers;
+  std::erase_if(after, [&](const DoubtAnswer& a) { return a.kind == kind && a.where == where; });
+  if (!note.empty()) {
+    after.push_back({kind, where, note});
+  }
+  return {(note.empty() ? "Take back the answer to a doubt: " : "Answer a doubt: ") + kind +
+              (where.empty() ? "" : ", " + where),
+          {DoubtAnswersChange{survey.doubtAnswers, after}}};
 }
 
 Edit setBoreholes(const Survey& survey, const std::vector<Borehole>& boreholes, std::string text) {

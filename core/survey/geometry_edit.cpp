@@ -59,6 +59,7 @@ void carryOver(const Survey& before, Survey& after) {
           continue;
         }
         shot.triggerCorrection = old.triggerCorrection;
+        shot.marks = old.marks;
         for (std::size_t t = 0; t < shot.traces.size(); ++t) {
           shot.traces[t].pick = old.traces[t].pick;
           shot.traces[t].state = old.traces[t].state;
@@ -115,6 +116,7 @@ Result<Edit> geometryEdit(const Survey& survey, const std::string& tablePath) {
   after.boreholes = survey.boreholes;
   after.otherLines = survey.otherLines;
   after.lineAtHand = survey.lineAtHand;
+  after.doubtAnswers = survey.doubtAnswers;
   after.remarks = std::move(remarks);
   return Edit{"Lay a geometry table over the headers", {ContentChange{survey, std::move(after)}}};
 }

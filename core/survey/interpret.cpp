@@ -7,6 +7,7 @@
 #include "core/section/start_lines.h"
 #include "core/survey/doubts.h"
 #include "core/survey/interpretation.h"
+#include "core/survey/marked_opinions.h"
 #include "core/survey/times.h"
 #include "core/traveltime/branches.h"
 #include "core/traveltime/reciprocity.h"
@@ -61,6 +62,9 @@ void conclude(const Survey& survey, Interpretation& interpretation) {
   interpretation.triggerCorrections =
       suggestedTriggerCorrections(interpretation.times, interpretation.branches, interpretation.reciprocals);
   interpretation.opinions = secondOpinions(interpretation.times, interpretation.branches);
+  for (Opinion& opinion : markedOpinions(survey, interpretation.branches)) {
+    interpretation.opinions.push_back(std::move(opinion));
+  }
   interpretation.doubts = findDoubts(survey, interpretation);
 }
 

@@ -29,12 +29,25 @@ struct ShotTrace {
   bool operator==(const ShotTrace&) const = default;
 };
 
+/// What the user read off a shot's records or times besides first breaks.
+enum class MarkKind {
+  CriticalDistance,  ///< m, offset from which the head wave of layer 2 exists
+  ReflectionTime,    ///< s, two-way, at zero offset, from the top of layer 2
+};
+struct ShotMark {
+  MarkKind kind = MarkKind::CriticalDistance;
+  double value = 0.0;
+  double sigma = 0.0;  ///< one standard deviation, > 0
+  bool operator==(const ShotMark&) const = default;
+};
+
 /// One shot point with its blows and its traces.
 struct Shot {
   ShotPoint point;
   std::vector<Blow> blows;         ///< empty when the times came from a table without records
   double triggerCorrection = 0.0;  ///< s, added to recorder time to give time after the blow
   std::vector<ShotTrace> traces;   ///< in the order of the record's traces
+  std::vector<ShotMark> marks;     ///< at most one of each kind
   bool operator==(const Shot&) const = default;
 };
 
@@ -49,6 +62,14 @@ struct SurveySettings {
   bool feet = false;  ///< lengths on screen and paper
   bool solveTriggerDelays = false;
   bool operator==(const SurveySettings&) const = default;
+};
+
+/// What the user has to say to a doubt. It belongs to the doubt of this kind and place, and is kept when that doubt
+/// goes, for when it comes back.
+struct DoubtAnswer {
+  std::string kind, where;  ///< as Doubt has them
+  std::string note;         ///< never empty
+  bool operator==(const DoubtAnswer&) const = default;
 };
 
 struct Survey;
@@ -68,6 +89,7 @@ struct Survey {
   std::vector<Geophone> geophones;  ///< rising x, each position once
   std::vector<Shot> shots;          ///< rising x
   std::vector<Borehole> boreholes;
+  std::vector<DoubtAnswer> doubtAnswers;           ///< at most one for a kind and place
   std::vector<std::string> remarks;                ///< what was odd on loading, one sentence each
   std::vector<OtherLine> otherLines;               ///< in their order, without this one
   int lineAtHand = 0;                              ///< place of this line among all of them, from 0

@@ -14,7 +14,7 @@ namespace strikeplate {
 namespace {
 
 constexpr std::uint32_t kApplicationId = 0x53504C54;
-constexpr std::uint32_t kFormat = 2;
+constexpr std::uint32_t kFormat = 3;
 constexpr std::size_t kHeadSize = 100;
 constexpr std::string_view kMagic("SQLite format 3\0", 16);
 

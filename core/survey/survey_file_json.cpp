@@ -13,6 +13,7 @@ namespace {
 using nlohmann::json;
 
 constexpr std::array<const char*, 4> kStates = {"live", "dead", "reversed", "noisy"};
+constexpr std::array<const char*, 2> kMarks = {"criticalDistance", "reflectionTime"};
 constexpr std::array<const char*, 3> kOrigins = {"automatic", "hand", "imported"};
 
 // One table for writing and reading the free texts of SurveyInfo.
@@ -70,13 +71,25 @@ class Writer {
     return {{"record", b.record}, {"lag", b.lag}, {"similarity", b.similarity}, {"used", b.used}};
   }
 
+  json operator()(const ShotMark& m) const {
+    return {{"kind", kMarks[static_cast<std::size_t>(m.kind)]}, {"value", m.value}, {"sigma", m.sigma}};
+  }
+
+  json operator()(const DoubtAnswer& a) const {
+    return {{"kind", textToJson(a.kind)}, {"where", textToJson(a.where)}, {"note", textToJson(a.note)}};
+  }
+
   json operator()(const Shot& shot) const {
-    return {{"x", shot.point.x},
-            {"elevation", shot.point.elevation},
-            {"depth", shot.point.depth},
-            {"trigger", shot.triggerCorrection},
-            {"blows", (*this)(shot.blows)},
-            {"traces", (*this)(shot.traces)}};
+    json object = {{"x", shot.point.x},
+                   {"elevation", shot.point.elevation},
+                   {"depth", shot.point.depth},
+                   {"trigger", shot.triggerCorrection},
+                   {"blows", (*this)(shot.blows)},
+                   {"traces", (*this)(shot.traces)}};
+    if (!shot.marks.empty()) {
+      object["marks"] = (*this)(shot.marks);
+    }
+    return object;
   }
 
   json operator()(const Geophone& g) const { return {{"x", g.x}, {"elevation", g.elevation}}; }
@@ -109,6 +122,9 @@ class Writer {
                    {"records", (*this)(survey.records)}, {"geophones", (*this)(survey.geophones)},
                    {"shots", (*this)(survey.shots)},     {"boreholes", (*this)(survey.boreholes)},
                    {"remarks", (*this)(survey.remarks)}};
+    if (!survey.doubtAnswers.empty()) {
+      object["doubtAnswers"] = (*this)(survey.doubtAnswers);
+    }
     if (!survey.otherLines.empty()) {
       object["otherLines"] = (*this)(survey.otherLines);
       object["lineAtHand"] = survey.lineAtHand;
@@ -153,11 +169,21 @@ class Reader {
             from.at("used").get<bool>()};
   }
 
+  void read(const json& from, ShotMark& mark) const {
+    mark = {static_cast<MarkKind>(indexOf(kMarks, from.at("kind").get<std::string>())),
+            from.at("value").get<double>(), from.at("sigma").get<double>()};
+  }
+
+  void read(const json& from, DoubtAnswer& answer) const {
+    answer = {textFromJson(from.at("kind")), textFromJson(from.at("where")), textFromJson(from.at("note"))};
+  }
+
   void read(const json& from, Shot& shot) const {
     shot.point = {from.at("x").get<double>(), from.at("elevation").get<double>(), from.at("depth").get<double>()};
     shot.triggerCorrection = from.at("trigger").get<double>();
     read(from.at("blows"), shot.blows);
     read(from.at("traces"), shot.traces);
+    read(from.contains("marks") ? from.at("marks") : json::array(), shot.marks);
   }
 
   void read(const json& from, Geophone& geophone) const {
@@ -196,6 +222,7 @@ class Reader {
     read(from.at("shots"), survey.shots);
     read(from.at("boreholes"), survey.boreholes);
     read(from.at("remarks"), survey.remarks);
+    read(from.contains("doubtAnswers") ? from.at("doubtAnswers") : json::array(), survey.doubtAnswers);
     if (from.contains("otherLines")) {
       read(from.at("otherLines"), survey.otherLines);
       read(from.at("lineAtHand"), survey.lineAtHand);
@@ -226,8 +253,8 @@ class Reader {
 };
 
 // Names of the kinds of change, in the order of the variant.
-constexpr std::array<const char*, 8> kKinds = {"pick",     "shot",      "geophones", "info",
-                                               "settings", "boreholes", "content",   "line"};
+constexpr std::array<const char*, 9> kKinds = {"pick",      "shot",    "geophones", "info",        "settings",
+                                               "boreholes", "content", "line",      "doubtAnswers"};
 static_assert(std::variant_size_v<Change> == kKinds.size());
 
 template <class T>

@@ -4,6 +4,7 @@
 
 #include <QApplication>
 #include <QLabel>
+#include <QLineEdit>
 #include <QTabWidget>
 #include <QTableWidget>
 #include <QTest>
@@ -163,6 +164,25 @@ TEST_F(SectionPanelTest, AChosenDoubtShowsWhatItRestsOnAndGoesToItsEvidence) {
   }
   EXPECT_TRUE(shown.contains("57.1 against 60.5 ms")) << shown.toStdString();
   EXPECT_TRUE(shown.contains("a look at the trigger of shot 3")) << shown.toStdString();
+}
+
+TEST_F(SectionPanelTest, ADoubtIsAnsweredWithANoteAsAnEdit) {
+  panel_.tabs().setCurrentIndex(2);
+  auto* tree = panel_.findChild<QTreeWidget*>();
+  auto* answer = panel_.tabs().currentWidget()->findChild<QLineEdit*>();
+  ASSERT_NE(answer, nullptr);
+  EXPECT_FALSE(answer->isEnabled()) << "nothing is chosen yet";
+  tree->setCurrentItem(tree->topLevelItem(0));
+  Edit made;
+  QObject::connect(&panel_, &View::proposed, &panel_, [&made](const Edit& edit, Phase) { made = edit; });
+  QTest::keyClicks(answer, "the trigger cable was changed after this shot");
+  QTest::keyClick(answer, Qt::Key_Return);
+  ASSERT_EQ(made.changes.size(), 1U);
+  EXPECT_TRUE(made.text.starts_with("Answer a doubt: ")) << made.text;
+  apply(sample_.survey, made);
+  showSample();
+  EXPECT_TRUE(tree->topLevelItem(0)->text(0).startsWith(QString("\u2713 ")));
+  EXPECT_EQ(answer->text(), "the trigger cable was changed after this shot");
 }
 
 TEST_F(SectionPanelTest, ManyDoubtsOfOneKindAreOneLineTheStrongestFirst) {

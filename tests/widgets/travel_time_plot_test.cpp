@@ -2,6 +2,7 @@
 
 #include <memory>
 
+#include <QMenu>
 #include <QTest>
 #include <gtest/gtest.h>
 #include <qcustomplot.h>
@@ -151,6 +152,77 @@ TEST_F(TravelTimePlotTest, ReducedTimeLaysTheRefractorLevel) {
   const double near = shownTime(*scene.interpretation, scene.interpretation->arrivalOf(0, 8), display);
   const double far = shownTime(*scene.interpretation, scene.interpretation->arrivalOf(0, 23), display);
   EXPECT_NEAR(near, far, 1e-6);
+}
+
+TEST_F(TravelTimePlotTest, ALassoMarksOnlyWhatItsLineSurrounds) {
+  TravelTimeDisplay display;
+  display.allShots = false;
+  view.setDisplay(display);
+  const QPoint a = placeOf(0, 18), c = placeOf(0, 20);
+  const QList<QPoint> around = {a + QPoint(-8, -14), c + QPoint(8, -14), c + QPoint(8, 14), c + QPoint(-6, 14),
+                                c + QPoint(-6, -10), a + QPoint(6, -10), a + QPoint(6, 14), a + QPoint(-8, 14)};
+  QTest::mousePress(canvas(), Qt::LeftButton, Qt::AltModifier, around.front() - QPoint(4, 8));
+  for (const QPoint& corner : around) {
+    QTest::mouseMove(canvas(), corner);
+  }
+  QTest::mouseRelease(canvas(), Qt::LeftButton, Qt::AltModifier, around.back());
+  EXPECT_EQ(view.chosen(), (std::vector<TraceOfShot>{{0, 18}, {0, 20}}));
+}
+
+TEST_F(TravelTimePlotTest, KeysSplitMergeAndDissolveTheBranchOfTheSelectedPick) {
+  QTest::mouseClick(canvas(), Qt::LeftButton, {}, placeOf(0, 15));
+  QTest::keyClick(&view, Qt::Key_S);
+  EXPECT_EQ(lastEdit.text, "Split the layer 2 branch, shot 1");
+  EXPECT_EQ(survey.shots[0].traces[15].pick->layer, 3);
+  EXPECT_EQ(survey.shots[0].traces[23].pick->layer, 3);
+  QTest::keyClick(&view, Qt::Key_D);
+  EXPECT_EQ(lastEdit.text, "Dissolve the layer 3 branch, shot 1");
+  EXPECT_EQ(survey.shots[0].traces[15].pick->layer, 0);
+}
+
+TEST_F(TravelTimePlotTest, AltWithAnArrowSlidesTheBranchEnd) {
+  QTest::mouseClick(canvas(), Qt::LeftButton, {}, placeOf(0, 3));
+  const int end = layerOf(0, 4) == 1 ? 4 : 3;
+  QTest::keyClick(&view, Qt::Key_Right, Qt::AltModifier);
+  EXPECT_EQ(lastEdit.text, "Move far end of the layer 1 branch, shot 1");
+  EXPECT_EQ(survey.shots[0].traces[static_cast<std::size_t>(end) + 1].pick->layer, 1);
+}
+
+TEST_F(TravelTimePlotTest, ShotsKeptInViewCanBeTakenHoldOfBesideTheSelectedOne) {
+  QTest::keyClick(&view, Qt::Key_K);
+  TravelTimeDisplay display = view.display();
+  EXPECT_TRUE(display.kept.contains(0));
+  display.allShots = false;
+  view.setDisplay(display);
+  scene.selection = {1, -1, 0};
+  view.showSelection(scene.selection);
+  QTest::mouseClick(canvas(), Qt::LeftButton, {}, placeOf(2, 3));
+  EXPECT_NE(scene.selection.shot, 2) << "a shot out of view";
+  QTest::mouseClick(canvas(), Qt::LeftButton, {}, placeOf(0, 20));
+  EXPECT_EQ(scene.selection.shot, 0);
+}
+
+TEST_F(TravelTimePlotTest, TheMenuOffersWhatFitsThePick) {
+  const auto offered = [this](int trace) {
+    QTest::mousePress(canvas(), Qt::RightButton, {}, placeOf(0, trace));
+    QCoreApplication::processEvents();
+    QString texts;
+    if (auto* menu = view.findChild<QMenu*>()) {
+      for (const QAction* action : menu->actions()) {
+        texts += action->text() + "\n";
+      }
+      menu->close();
+      QCoreApplication::sendPostedEvents(nullptr, QEvent::DeferredDelete);
+    }
+    return texts;
+  };
+  const QString direct = offered(2);
+  EXPECT_TRUE(direct.contains("Merge")) << direct.toStdString();
+  EXPECT_FALSE(direct.contains("Dissolve"));
+  EXPECT_TRUE(direct.contains("Critical distance of shot 1"));
+  const QString head = offered(18);
+  EXPECT_FALSE(head.contains("Merge")) << "no branch lies beyond";
+  EXPECT_TRUE(head.contains("Split"));
 }
 
 }  // namespace

@@ -33,6 +33,16 @@ TEST(SheetDoubts, AreGroupedByKindWithTheStrongestFirst) {
   EXPECT_EQ(sheet.doubts[1].doubts[3].says, "Pick 0 is off.");
 }
 
+TEST(SheetDoubts, AnAnswerIsPrintedWithItsDoubtAheadOfItsKind) {
+  auto sample = fourPicksInDoubt();
+  sample.survey.doubtAnswers = {{"low contrast", "layer 2", "a trial pit met the top at 2.1 m"}};
+  const SheetContent sheet = sheetContent(sample.survey, sample.interpretation, {});
+  EXPECT_EQ(doubtLines(sheet, 1, false).front(),
+            "Layers differ little. To settle it: a borehole. Answered: a trial pit met the top at 2.1 m.");
+  EXPECT_EQ(sheet.allDoubts.columns.back(), "Answered");
+  EXPECT_EQ(sheet.allDoubts.rows.front().back(), "a trial pit met the top at 2.1 m.");
+}
+
 TEST(SheetDoubts, WhatIsNotPrintedIsCounted) {
   const auto sample = fourPicksInDoubt();
   const SheetContent sheet = sheetContent(sample.survey, sample.interpretation, {});

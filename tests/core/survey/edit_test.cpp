@@ -4,6 +4,7 @@
 
 #include <gtest/gtest.h>
 
+#include "core/survey/doubts.h"
 #include "tests/core/survey/random_survey.h"
 
 namespace strikeplate {
@@ -108,6 +109,36 @@ TEST(Edit, TextsCountShotsAndTracesFromOneAndUseTheUsersUnit) {
   EXPECT_EQ(edits::setShotPoint(survey, 0, {-3.048, 0.0, 0.0}).text, "Move shot 1 to -10.0 ft");
   EXPECT_EQ(edits::setTraceState(survey, 1, 3, TraceState::Dead).text, "Mark shot 2, trace 4 as dead");
   EXPECT_EQ(edits::setTriggerCorrection(survey, 1, -0.0015).text, "Set trigger correction, shot 2: -1.50 ms");
+}
+
+TEST(Edit, AMarkTakesThePlaceOfAnEarlierOneOfItsKind) {
+  std::mt19937 random(5);
+  Survey survey = testing::randomSurvey(random);
+  apply(survey, edits::setMark(survey, 0, {MarkKind::CriticalDistance, 6.0, 0.5}));
+  apply(survey, edits::setMark(survey, 0, {MarkKind::ReflectionTime, 0.02, 0.001}));
+  const Edit edit = edits::setMark(survey, 0, {MarkKind::CriticalDistance, 7.0, 0.5});
+  EXPECT_EQ(edit.text, "Mark critical distance of shot 1");
+  apply(survey, edit);
+  ASSERT_EQ(survey.shots[0].marks.size(), 2U);
+  EXPECT_EQ(survey.shots[0].marks.back().value, 7.0);
+  apply(survey, edits::removeMark(survey, 0, MarkKind::ReflectionTime));
+  EXPECT_EQ(survey.shots[0].marks.size(), 1U);
+  EXPECT_TRUE(edits::removeMark(survey, 0, MarkKind::ReflectionTime).changes.empty());
+}
+
+TEST(Edit, ADoubtHasOneAnswerAndAnEmptyOneTakesItBack) {
+  Survey survey;
+  apply(survey, edits::answerDoubt(survey, "pick", "shot 1, trace 2", "a passing lorry"));
+  apply(survey, edits::answerDoubt(survey, "pick", "shot 1, trace 2", "a passing train"));
+  Doubt doubt;
+  doubt.kind = "pick";
+  doubt.where = "shot 1, trace 2";
+  EXPECT_EQ(answerTo(survey, doubt), "a passing train");
+  ASSERT_EQ(survey.doubtAnswers.size(), 1U);
+  doubt.where = "shot 1, trace 3";
+  EXPECT_EQ(answerTo(survey, doubt), "");
+  apply(survey, edits::answerDoubt(survey, "pick", "shot 1, trace 2", ""));
+  EXPECT_TRUE(survey.doubtAnswers.empty());
 }
 
 }  // namespace

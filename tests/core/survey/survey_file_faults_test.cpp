@@ -135,7 +135,7 @@ TEST_F(SurveyFileFaults, ASecondProgramIsRefusedAndTheFirstGoesOn) {
 
 TEST_F(SurveyFileFaults, ANewerFileIsRefusedUnchanged) {
   ASSERT_TRUE(SurveyFile::create(path(), surveyOf(4)).ok());
-  runSql("PRAGMA user_version = 3");
+  runSql("PRAGMA user_version = 4");
   expectRefused("newer program");
 }
 

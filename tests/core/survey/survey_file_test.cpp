@@ -160,5 +160,26 @@ TEST_F(SurveyFileTest, AnEditThatDoesNotFitIsRefused) {
   EXPECT_TRUE(file->history().entries().empty());
 }
 
+TEST_F(SurveyFileTest, MarksAndAnswersReadBackWithTheirHistory) {
+  std::mt19937 random(11);
+  Survey expected;
+  {
+    auto file = SurveyFile::create(path(), randomSurvey(random));
+    ASSERT_TRUE(file.ok()) << file.message();
+    ASSERT_TRUE(file->append(edits::setMark(file->survey(), 0, {MarkKind::CriticalDistance, 6.5, 0.5})).ok());
+    ASSERT_TRUE(file->append(edits::setMark(file->survey(), 0, {MarkKind::ReflectionTime, 0.021, 0.001})).ok());
+    ASSERT_TRUE(file->append(edits::answerDoubt(file->survey(), "pick", "shot 1", "a passing lorry")).ok());
+    expected = file->survey();
+  }
+  auto file = SurveyFile::open(path());
+  ASSERT_TRUE(file.ok()) << file.message();
+  EXPECT_EQ(file->survey().shots, expected.shots);
+  EXPECT_EQ(file->survey().doubtAnswers, expected.doubtAnswers);
+  ASSERT_TRUE(file->undo().ok());
+  EXPECT_TRUE(file->survey().doubtAnswers.empty());
+  ASSERT_TRUE(file->undo().ok());
+  EXPECT_EQ(file->survey().shots[0].marks.size(), 1U);
+}
+
 }  // namespace
 }  // namespace strikeplate
