@@ -4,18 +4,22 @@
 #include <string>
 #include <utility>
 
+#include <QFileInfo>
 #include <QString>
 
 #include "app/versions.h"
 #include "core/base/units.h"
 #include "core/report/csv_out.h"
+#include "core/report/geojson_out.h"
 #include "core/report/section_dxf.h"
+#include "core/report/tables_xlsx.h"
 #include "core/survey/autopick.h"
 #include "core/survey/gathers.h"
 #include "core/survey/interpretation.h"
 #include "core/survey/load.h"
 #include "core/survey/picks_in.h"
 #include "core/survey/survey_file.h"
+#include "widgets/sheet_figure.h"
 #include "widgets/sheet_painter.h"
 
 namespace strikeplate {
@@ -40,6 +44,9 @@ class Run {
     if (!options_.picksIn.empty()) {
       auto imported = importPicks(survey_, options_.picksIn);
       if (imported) {
+        if (!imported->edit.changes.empty()) {
+          imported->edit.changes.push_back(edits::noteTable(survey_, options_.picksIn));
+        }
         carryOut(imported->edit);
         for (const std::string& problem : imported->problems) {
           complain(problem);
@@ -56,6 +63,11 @@ class Run {
       settings.layers = options_.layers;
       carryOut(edits::setSettings(survey_, settings, "Set the number of layers"));
     }
+    if (options_.feet && !survey_.settings.feet) {
+      SurveySettings settings = survey_.settings;
+      settings.feet = true;
+      carryOut(edits::setSettings(survey_, settings, "Show lengths in feet"));
+    }
   }
 
   void write() {
@@ -68,17 +80,15 @@ class Run {
     writeTo(options_.sectionDxf,
             [&](const std::string& path) { return writeSectionDxf(path, survey_, interpretation_); });
     writeTo(options_.sheet, [&](const std::string& path) {
-      SheetOptions sheet;
-      sheet.edits = static_cast<int>(edits_.size());
-      sheet.builtOn = libraryVersions();
-      if (!options_.geometry.empty()) {
-        sheet.inputFiles.push_back(options_.geometry);
-      }
-      if (!options_.picksIn.empty()) {
-        sheet.inputFiles.push_back(options_.picksIn);
-      }
-      return writeSheetPdf(QString::fromStdString(path), survey_, interpretation_, sheet);
+      return writeSheetPdf(QString::fromStdString(path), survey_, interpretation_, sheetOptions(),
+                           options_.letter ? QPageSize::Letter : QPageSize::A4);
     });
+    writeTo(options_.xlsx, [&](const std::string& path) { return writeTablesXlsx(path, survey_, interpretation_); });
+    writeTo(options_.geojson, [&](const std::string& path) -> Outcome {
+      const auto text = geoJson(survey_, interpretation_);
+      return text ? writeTextFile(path, *text) : Outcome(text.failure());
+    });
+    writeTo(options_.svg, [&](const std::string& path) { return writePlots(QString::fromStdString(path)); });
     writeTo(options_.survey, [&](const std::string& path) { return writeSurvey(path); });
   }
 
@@ -127,6 +137,36 @@ class Run {
 
   void writeTable(const std::string& path, const std::function<std::string()>& table) {
     writeTo(path, [&table](const std::string& file) { return writeTextFile(file, table()); });
+  }
+
+  [[nodiscard]] SheetOptions sheetOptions() const {
+    SheetOptions sheet = sheetOptionsOf(survey_);
+    sheet.edits = static_cast<int>(edits_.size());
+    sheet.builtOn = libraryVersions();
+    sheet.blackAndWhite = options_.blackAndWhite;
+    sheet.records = sheet.records || options_.recordPages;
+    sheet.tables = sheet.tables || options_.tablePages;
+    return sheet;
+  }
+
+  // The section under the name given, the other plots beside it.
+  Outcome writePlots(const QString& path) {
+    const QFileInfo named(path);
+    const QString stem = named.path() + "/" + named.completeBaseName();
+    const QString ending = "." + named.suffix();
+    std::vector<std::pair<SheetFigure::Kind, QString>> plots = {
+        {SheetFigure::Kind::Section, path}, {SheetFigure::Kind::TravelTimes, stem + "-travel-times" + ending}};
+    if (interpretation_.section.determined) {
+      plots.emplace_back(SheetFigure::Kind::Residuals, stem + "-residuals" + ending);
+    }
+    for (const auto& [kind, file] : plots) {
+      SheetFigure figure;
+      figure.kind = kind;
+      if (Outcome written = writeSheetFigure(file, figure, survey_, interpretation_, sheetOptions()); !written) {
+        return written;
+      }
+    }
+    return Done{};
   }
 
   Outcome writeSurvey(const std::string& path) {

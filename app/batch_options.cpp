@@ -14,7 +14,7 @@ struct PathOption {
   const char* meaning;
 };
 
-constexpr std::array<PathOption, 10> kPathOptions = {{
+constexpr std::array<PathOption, 13> kPathOptions = {{
     {"--geometry", &BatchOptions::geometry, "geometry table (CSV) laid over the headers"},
     {"--picks-in", &BatchOptions::picksIn, "first breaks (CSV) to use instead of automatic ones"},
     {"--survey", &BatchOptions::survey, "survey file to write (.splate)"},
@@ -25,7 +25,35 @@ constexpr std::array<PathOption, 10> kPathOptions = {{
     {"--doubts", &BatchOptions::doubts, "reasons to doubt the result to write (CSV)"},
     {"--sheet", &BatchOptions::sheet, "field interpretation sheet to write (PDF)"},
     {"--section-dxf", &BatchOptions::sectionDxf, "section to write (DXF)"},
+    {"--xlsx", &BatchOptions::xlsx, "all tables to write as one spreadsheet (XLSX)"},
+    {"--geojson", &BatchOptions::geojson, "stations and depths on the map to write (GeoJSON, WGS 84)"},
+    {"--svg", &BatchOptions::svg,
+     "section to draw (SVG, or PNG by its ending); travel times and residuals beside it"},
 }};
+
+struct SwitchOption {
+  const char* name;
+  bool BatchOptions::*on;
+  const char* meaning;
+};
+
+constexpr std::array<SwitchOption, 6> kSwitchOptions = {{
+    {"--feet", &BatchOptions::feet, "lengths of sheet and plots in feet"},
+    {"--black-and-white", &BatchOptions::blackAndWhite, "sheet and plots without colours"},
+    {"--records", &BatchOptions::recordPages, "further pages of the sheet: each record with its picks"},
+    {"--tables", &BatchOptions::tablePages, "further pages of the sheet: all tables in full"},
+    {"--version", &BatchOptions::version, "version of the program and of what it is built on"},
+    {"--help", &BatchOptions::help, "this text"},
+}};
+
+const SwitchOption* findSwitch(const std::string& name) {
+  for (const SwitchOption& option : kSwitchOptions) {
+    if (name == option.name) {
+      return &option;
+    }
+  }
+  return nullptr;
+}
 
 const PathOption* findPathOption(const std::string& name) {
   for (const PathOption& option : kPathOptions) {
@@ -44,6 +72,13 @@ std::optional<Failure> setOption(BatchOptions& options, const std::string& name,
     options.*(option->path) = value;
     return std::nullopt;
   }
+  if (name == "--paper") {
+    if (lowered(value) != "a4" && lowered(value) != "letter") {
+      return Failure{"--paper takes a4 or letter, not \"" + value + "\"."};
+    }
+    options.letter = lowered(value) == "letter";
+    return std::nullopt;
+  }
   const auto layers = parseInteger(value);
   if (!layers || *layers < 2 || *layers > 6) {
     return Failure{"--layers takes a whole number from 2 to 6, not \"" + value + "\"."};
@@ -53,7 +88,7 @@ std::optional<Failure> setOption(BatchOptions& options, const std::string& name,
 }
 
 bool isOption(const std::string& name) {
-  return name == "--layers" || findPathOption(name) != nullptr;
+  return name == "--layers" || name == "--paper" || findPathOption(name) != nullptr;
 }
 
 }  // namespace
@@ -69,10 +104,10 @@ Result<BatchOptions> parseBatchOptions(const std::vector<std::string>& arguments
     }
     if (name == "--") {
       onlyFiles = true;
-    } else if (name == "--help" || name == "-h") {
+    } else if (name == "-h") {
       options.help = true;
-    } else if (name == "--version") {
-      options.version = true;
+    } else if (const SwitchOption* option = findSwitch(name)) {
+      options.*(option->on) = true;
     } else {
       std::optional<std::string> value;
       if (const auto equals = name.find('='); equals != std::string::npos) {
@@ -111,8 +146,14 @@ std::string batchHelp() {
   }
   text +=
       "  --layers N            number of layers, 2 to 6\n"
-      "  --version             version of the program and of what it is built on\n"
-      "  --help                this text\n\n"
+      "  --paper a4|letter     paper of the sheet; A4 when not given\n";
+  for (const SwitchOption& option : kSwitchOptions) {
+    std::string line = std::string("  ") + option.name;
+    line.resize(24, ' ');
+    text += line + option.meaning + "\n";
+  }
+  text +=
+      "\nThe sheet's question, answer, signatory and further pages are those kept in the survey file.\n\n"
       "Exit status: 0 done; 1 done, but part of the input could not be used (said on standard error); 2 wrong "
       "usage;\n"
       "3 nothing could be read.\n";

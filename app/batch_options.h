@@ -14,6 +14,12 @@ struct BatchOptions {
   std::string picksIn;               ///< picks (CSV) to use
   int layers = 0;                    ///< 0 = by evidence
   std::string survey, picks, depths, layersOut, opinions, doubts, sheet, sectionDxf;  ///< files to write
+  std::string xlsx, geojson, svg;                                                     ///< further files to write
+  bool letter = false;                                                                ///< the sheet's paper, else A4
+  bool feet = false;           ///< lengths of the sheet and the plots
+  bool blackAndWhite = false;  ///< layers without colours
+  bool recordPages = false;    ///< the sheet's pages with each record
+  bool tablePages = false;     ///< the sheet's pages with every table
   bool help = false;
   bool version = false;
 };

@@ -9,6 +9,7 @@
 #include "app/job.h"
 #include "core/report/sheet.h"
 #include "core/survey/load.h"
+#include "widgets/sheet_figure.h"
 #include "widgets/view.h"
 
 class QAction;
@@ -81,6 +82,8 @@ class MainWindow : public QMainWindow {
   void saveGeometryTable();
   void exportCsv();
   void makeSheet();
+  void savePlot(SheetFigure::Kind kind);
+  [[nodiscard]] SheetOptions sheetOptions() const;
   void editInfo();
   void editBoreholes();
   void editGeometry();
@@ -101,7 +104,6 @@ class MainWindow : public QMainWindow {
   [[nodiscard]] QString newSurveyPath() const;
 
   Desk desk_;
-  SheetOptions sheet_;  // choices for the sheet, kept while the program runs
   Job job_;
   std::vector<View*> views_;
   LineTabs* lineTabs_ = nullptr;

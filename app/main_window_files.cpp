@@ -1,4 +1,6 @@
 // What the window opens, saves, prints and writes.
+#include <algorithm>
+
 #include <QFileDialog>
 #include <QFileInfo>
 #include <QMenu>
@@ -9,11 +11,11 @@
 #include "app/times_dialog.h"
 #include "app/versions.h"
 #include "core/report/csv_out.h"
+#include "core/report/geojson_out.h"
 #include "core/report/section_dxf.h"
 #include "core/report/tables_xlsx.h"
 #include "core/survey/geometry_edit.h"
 #include "core/survey/picks_in.h"
-#include "widgets/sheet_figure.h"
 #include "widgets/sheet_preview.h"
 
 namespace strikeplate {
@@ -108,7 +110,9 @@ void MainWindow::importPicks() {
     return;
   }
   if (!imported->edit.changes.empty()) {
-    desk_.commit(imported->edit);
+    Edit edit = imported->edit;
+    edit.changes.push_back(edits::noteTable(desk_.survey(), path.toStdString()));
+    desk_.commit(edit);
   }
   if (!imported->problems.empty()) {
     say(tr("Part of the table was not used"), QString::fromStdString(imported->problems.front()));
@@ -159,18 +163,27 @@ void MainWindow::exportCsv() {
   const Survey& survey = desk_.survey();
   const Interpretation& interpretation = *desk_.scene().interpretation;
   QStringList problems;
-  for (const Outcome& outcome : {writeTextFile(base + "picks.csv", picksCsv(survey, interpretation)),
-                                 writeTextFile(base + "depths.csv", depthsCsv(survey, interpretation)),
-                                 writeTextFile(base + "layers.csv", layersCsv(interpretation)),
-                                 writeTextFile(base + "opinions.csv", opinionsCsv(interpretation)),
-                                 writeTextFile(base + "doubts.csv", doubtsCsv(interpretation)),
-                                 writeTablesXlsx(base + "tables.xlsx", survey, interpretation),
-                                 writeSectionDxf(base + "section.dxf", survey, interpretation),
-                                 writeSheetFigure(folder + "/section.svg", {}, survey, interpretation, {}),
-                                 writeSheetFigure(folder + "/travel_times.svg", {SheetFigure::Kind::TravelTimes},
-                                                  survey, interpretation, {})}) {
+  for (const Outcome& outcome :
+       {writeTextFile(base + "picks.csv", picksCsv(survey, interpretation)),
+        writeTextFile(base + "depths.csv", depthsCsv(survey, interpretation)),
+        writeTextFile(base + "layers.csv", layersCsv(interpretation)),
+        writeTextFile(base + "opinions.csv", opinionsCsv(interpretation)),
+        writeTextFile(base + "doubts.csv", doubtsCsv(interpretation)),
+        writeTextFile(base + "boreholes.csv", boreholesCsv(survey, interpretation)),
+        writeTablesXlsx(base + "tables.xlsx", survey, interpretation),
+        writeSectionDxf(base + "section.dxf", survey, interpretation),
+        writeSheetFigure(folder + "/section.svg", {}, survey, interpretation, sheetOptions()),
+        writeSheetFigure(folder + "/travel_times.svg", {SheetFigure::Kind::TravelTimes}, survey, interpretation,
+                         sheetOptions())}) {
     if (!outcome) {
       problems << QString::fromStdString(outcome.message());
+    }
+  }
+  if (survey.info.map) {
+    const auto text = geoJson(survey, interpretation);
+    const Outcome written = text ? writeTextFile(base + "line.geojson", *text) : Outcome(text.failure());
+    if (!written) {
+      problems << QString::fromStdString(written.message());
     }
   }
   if (problems.isEmpty()) {
@@ -185,20 +198,53 @@ void MainWindow::makeSheet() {
     say(tr("Nothing to print"), tr("There is no interpretation yet; open records and pick them first."));
     return;
   }
-  sheet_.edits = desk_.editCount();
-  sheet_.builtOn = libraryVersions();
-  sheet_.blackAndWhite = QSettings().value("blackAndWhite").toBool();
-  SheetPreview preview(desk_.survey(), *desk_.scene().interpretation, sheet_, this);
+  SheetOptions options = sheetOptions();
+  SheetPreview preview(desk_.survey(), *desk_.scene().interpretation, options, this);
   preview.setFolder(QSettings().value("folder").toString());
   if (QSettings().contains("letter")) {
     preview.setPaper(QSettings().value("letter").toBool() ? QPageSize::Letter : QPageSize::A4);
   }
   connect(&preview, &SheetPreview::written, answerLine_, &AnswerLine::setHint);
   preview.exec();
-  sheet_ = preview.options();
-  sheet_.answer.clear();  // it was about the interpretation as it is now
+  options = preview.options();
   QSettings().setValue("letter", preview.paper() == QPageSize::Letter);
-  QSettings().setValue("blackAndWhite", sheet_.blackAndWhite);
+  QSettings().setValue("blackAndWhite", options.blackAndWhite);
+  if (const SheetChoices choices = sheetChoicesOf(options); !(choices == desk_.survey().info.sheet)) {
+    desk_.commit(edits::setSheet(desk_.survey(), choices));
+  }
+}
+
+SheetOptions MainWindow::sheetOptions() const {
+  SheetOptions options = sheetOptionsOf(desk_.survey());
+  options.edits = desk_.editCount();
+  options.builtOn = libraryVersions();
+  options.blackAndWhite = QSettings().value("blackAndWhite").toBool();
+  return options;
+}
+
+void MainWindow::savePlot(SheetFigure::Kind kind) {
+  if (!desk_.scene().interpretation) {
+    say(tr("Nothing to draw"), tr("There is no interpretation yet; open records and pick them first."));
+    return;
+  }
+  QString path = QFileDialog::getSaveFileName(this, tr("Save the plot as"), QSettings().value("folder").toString(),
+                                              tr("Drawing (*.svg);;Picture (*.png)"));
+  if (path.isEmpty()) {
+    return;
+  }
+  if (QFileInfo(path).suffix().isEmpty()) {
+    path += ".svg";
+  }
+  SheetFigure figure;
+  figure.kind = kind;
+  figure.shot = std::max(0, desk_.scene().selection.shot);
+  if (const Outcome written =
+          writeSheetFigure(path, figure, desk_.survey(), *desk_.scene().interpretation, sheetOptions());
+      !written) {
+    say(tr("Not written"), QString::fromStdString(written.message()));
+  } else {
+    answerLine_->setHint(tr("Plot written to %1").arg(path));
+  }
 }
 
 }  // namespace strikeplate

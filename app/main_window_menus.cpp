@@ -47,7 +47,14 @@ void MainWindow::buildFileMenu() {
   add(menu, tr("Read &picks from a table..."), {}, this, &MainWindow::importPicks);
   menu->addSeparator();
   add(menu, tr("&Print the sheet, or save it as PDF..."), QKeySequence::Print, this, &MainWindow::makeSheet);
-  add(menu, tr("Write &tables and plots (CSV, XLSX, DXF, SVG)..."), {}, this, &MainWindow::exportCsv);
+  add(menu, tr("Write &tables and plots (CSV, XLSX, DXF, SVG, GeoJSON)..."), {}, this, &MainWindow::exportCsv);
+  QMenu* plots = menu->addMenu(tr("Save a p&lot (SVG, PNG)"));
+  for (const auto& [text, kind] : {std::pair{tr("&Section..."), SheetFigure::Kind::Section},
+                                   std::pair{tr("&Travel times..."), SheetFigure::Kind::TravelTimes},
+                                   std::pair{tr("&Residuals..."), SheetFigure::Kind::Residuals},
+                                   std::pair{tr("Record of the &chosen shot..."), SheetFigure::Kind::Record}}) {
+    add(plots, text, {}, this, [this, kind = kind] { savePlot(kind); });
+  }
   menu->addSeparator();
   add(menu, tr("Open the &demo line"), {}, this, &MainWindow::openDemo);
   add(menu, tr("&Quit"), QKeySequence::Quit, this, &QWidget::close);

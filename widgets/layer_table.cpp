@@ -46,16 +46,12 @@ DepthsAlong depthsAlong(const Survey& survey, const Section& section, int layer)
   }
   int count = 0, known = 0;
   double sum = 0.0;
-  for (std::size_t i = 0; i < section.x.size(); ++i) {
-    if (section.x[i] < survey.geophones.front().x || section.x[i] > survey.geophones.back().x) {
-      continue;
-    }
+  for (const Geophone& geophone : survey.geophones) {
     ++count;
-    if (found->depth[i].determined) {
-      const double depth = found->depth[i].value;
-      along.least = known == 0 ? depth : std::min(along.least, depth);
-      along.most = known == 0 ? depth : std::max(along.most, depth);
-      sum += depth;
+    if (const Estimate depth = section.depthAt(layer, geophone.x); depth.determined) {
+      along.least = known == 0 ? depth.value : std::min(along.least, depth.value);
+      along.most = known == 0 ? depth.value : std::max(along.most, depth.value);
+      sum += depth.value;
       ++known;
     }
   }
@@ -167,8 +163,8 @@ void LayerTable::fillRow(int row) {
   }
   const DepthsAlong along = depthsAlong(*scene_.survey, section, layer);
   const QString known = along.share < 1.0
-                            ? tr("Determined along %1 % of the line").arg(100.0 * along.share, 0, 'f', 0)
-                            : tr("Between the outermost geophones");
+                            ? tr("Determined under %1 % of the geophones").arg(100.0 * along.share, 0, 'f', 0)
+                            : tr("Under the geophones");
   const auto depth = [&](double metres) {
     return std::isfinite(metres) ? QString::fromStdString(units.length(metres)) : tr("not determined");
   };

@@ -37,11 +37,11 @@ class LayerTable : public QWidget {
   QLabel* reason_;  ///< stands in for the table when there is no section
 };
 
-/// Depth to the top of a layer along the line, between the outermost geophones.
+/// Depth to the top of a layer under the geophones, as the sheet gives it.
 struct DepthsAlong {
   double least = Estimate::kNaN, mean = Estimate::kNaN,
          most = Estimate::kNaN;  ///< m; NaN where nothing is determined
-  double share = 0.0;            ///< of the positions, where it is determined, 0 to 1
+  double share = 0.0;            ///< of the geophones, where it is determined, 0 to 1
 };
 DepthsAlong depthsAlong(const Survey& survey, const Section& section, int layer);
 

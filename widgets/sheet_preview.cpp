@@ -120,6 +120,10 @@ QWidget* SheetPreview::makeWords() {
   answer_ = new QPlainTextEdit(QString::fromStdString(given_.answer));
   answer_->setFixedHeight(110);
   answer_->document()->setModified(!given_.answer.empty());
+  old_ = new QLabel(tr("The interpretation has changed since this answer was written."));
+  old_->setWordWrap(true);
+  stands_ = new QPushButton(tr("The answer still stands"));
+  stands_->setAutoDefault(false);
   auto* draft = new QPushButton(tr("Use the drafted answer"));
   draft->setAutoDefault(false);
   signatory_ = new QLineEdit(QString::fromStdString(given_.signatory));
@@ -131,12 +135,21 @@ QWidget* SheetPreview::makeWords() {
     column->addWidget(label);
     column->addWidget(widget);
     if (widget == answer_) {
+      column->addWidget(old_);
+      column->addWidget(stands_);
       column->addWidget(draft);
     }
   }
   connect(question_, &QLineEdit::textEdited, later_, qOverload<>(&QTimer::start));
   connect(signatory_, &QLineEdit::textEdited, later_, qOverload<>(&QTimer::start));
-  connect(answer_, &QPlainTextEdit::textChanged, later_, qOverload<>(&QTimer::start));
+  connect(answer_, &QPlainTextEdit::textChanged, this, [this] {
+    answerTouched_ = true;
+    later_->start();
+  });
+  connect(stands_, &QPushButton::clicked, this, [this] {
+    answerTouched_ = true;
+    refresh();
+  });
   connect(draft, &QPushButton::clicked, this, [this] {
     answer_->document()->setModified(false);
     showDraft();
@@ -180,6 +193,9 @@ SheetOptions SheetPreview::options() const {
   options.question = question_->text().trimmed().toStdString();
   options.answer =
       answer_->document()->isModified() ? answer_->toPlainText().simplified().toStdString() : std::string();
+  options.answerTo = options.answer.empty() ? std::string()
+                     : answerTouched_       ? sheetDraft(survey_, interpretation_)
+                                            : given_.answerTo;
   options.signatory = signatory_->text().trimmed().toStdString();
   options.blackAndWhite = colours_->currentIndex() == 1;
   options.records = records_->isChecked();
@@ -235,8 +251,15 @@ Outcome SheetPreview::savePdf(const QString& path) const {
 void SheetPreview::refresh() {
   later_->stop();
   setUp(*printer_, paper());
+  showAge();
   showChecklist();
   preview_->updatePreview();
+}
+
+void SheetPreview::showAge() {
+  const bool old = answerIsOld(survey_, interpretation_, options());
+  old_->setVisible(old);
+  stands_->setVisible(old);
 }
 
 void SheetPreview::showChecklist() {

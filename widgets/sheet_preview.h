@@ -16,6 +16,7 @@ class QListWidget;
 class QPlainTextEdit;
 class QPrinter;
 class QPrintPreviewWidget;
+class QPushButton;
 class QTimer;
 
 namespace strikeplate {
@@ -23,7 +24,7 @@ namespace strikeplate {
 /// The sheet as it will be printed, with the choices that are the printer's and not the survey's: paper, unit,
 /// colours, further pages, the question, the answer in the user's own words, the name under the signature line.
 /// Beside it what published guidance asks for and the survey still lacks. Prints and saves; the survey is not
-/// changed.
+/// changed: whoever opened the preview keeps its options there (edits::setSheet).
 class SheetPreview : public QDialog {
   Q_OBJECT
  public:
@@ -31,7 +32,8 @@ class SheetPreview : public QDialog {
                QWidget* parent = nullptr);
   ~SheetPreview() override;
 
-  /// What the choices come to. The answer is empty as long as the user has not changed the drafted one.
+  /// What the choices come to. The answer is empty as long as the user has not changed the drafted one; an answer
+  /// that was not touched keeps what it was written to.
   [[nodiscard]] SheetOptions options() const;
   [[nodiscard]] QPageSize::PageSizeId paper() const;
   void setPaper(QPageSize::PageSizeId paper);
@@ -57,6 +59,7 @@ class SheetPreview : public QDialog {
   void refresh();
   void showChecklist();
   void showDraft();
+  void showAge();
   void changeUnit();
   void askAndPrint();
   void askAndSave();
@@ -76,6 +79,9 @@ class SheetPreview : public QDialog {
   QCheckBox* places_ = nullptr;
   QLineEdit* question_ = nullptr;
   QPlainTextEdit* answer_ = nullptr;
+  QLabel* old_ = nullptr;          // says that the answer was written for another interpretation
+  QPushButton* stands_ = nullptr;  // takes the answer as written for this one
+  bool answerTouched_ = false;     // by the user, since the preview was opened
   QLineEdit* signatory_ = nullptr;
   QLabel* missing_ = nullptr;
   QListWidget* checks_ = nullptr;

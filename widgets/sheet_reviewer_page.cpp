@@ -71,8 +71,7 @@ std::vector<std::string> programAndFiles(const SheetContent& sheet, int most) {
   std::vector<std::string> lines = {program + ".", filesLine(sheet.files, most)};
   if (!sheet.files.empty()) {
     lines.emplace_back(
-        "Behind a file: the CRC-32 (IEEE 802.3) of its bytes when this sheet was made; none when it was not at "
-        "hand.");
+        "Behind a file: the CRC-32 (IEEE 802.3) of its bytes when it was read; none when that is not known.");
   }
   return lines;
 }

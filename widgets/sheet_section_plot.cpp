@@ -164,13 +164,25 @@ void paintGround(SheetPaper& paper, const SheetFrame& frame, const SheetFigures&
   }
 }
 
+// A borehole in the section: a full stroke when it was used, an open one when it was only compared.
+void paintBoreholeStroke(SheetPaper& paper, const QPointF& top, const QPointF& met, bool used) {
+  const QColor ink = paper.look().ink;
+  if (used) {
+    paper.line(top, met, ink, 0.9);
+    return;
+  }
+  constexpr double kHalf = 0.4;
+  paper.line({top.x() - kHalf, top.y()}, {met.x() - kHalf, met.y()}, ink, 0.15);
+  paper.line({top.x() + kHalf, top.y()}, {met.x() + kHalf, met.y()}, ink, 0.15);
+}
+
 // The drilled depth as a bar with its 95 % interval.
 void paintBorehole(SheetPaper& paper, const SheetFrame& frame, const Borehole& hole, double ground) {
   const QColor ink = paper.look().ink;
   const QPointF top = frame.at(hole.x, ground);
   const QPointF met = frame.at(hole.x, ground - hole.depth);
   paper.line({top.x(), frame.area.top()}, top, paper.look().faint, 0.12);
-  paper.line(top, met, ink, 0.7);
+  paintBoreholeStroke(paper, top, met, hole.used);
   for (const double sign : {-1.0, 0.0, 1.0}) {
     const double y = frame.y(ground - hole.depth + sign * kNormal95 * hole.sigma);
     const double half = sign == 0.0 ? 1.8 : 1.0;
@@ -282,9 +294,12 @@ void paintLegend(SheetPaper& paper, const QPointF& corner, const SheetFigures& f
   entry(QStringLiteral("geophone"));
   paintShotMark(paper, {x + 0.8, y - 0.8}, 1.9);
   entry(QStringLiteral("shot"));
-  if (!figures.survey.boreholes.empty()) {
-    paper.line({x + 0.8, y - 2.0}, {x + 0.8, y + 0.4}, look.ink, 0.7);
-    entry(QStringLiteral("borehole"));
+  const auto& holes = figures.survey.boreholes;
+  for (const bool used : {true, false}) {
+    if (std::any_of(holes.begin(), holes.end(), [used](const Borehole& hole) { return hole.used == used; })) {
+      paintBoreholeStroke(paper, {x + 0.8, y - 2.0}, {x + 0.8, y + 0.4}, used);
+      entry(used ? QStringLiteral("borehole, used") : QStringLiteral("borehole, compared only"));
+    }
   }
   for (const SectionInterface& interface : figures.interpretation.section.interfaces) {
     painter.setPen(QPen(paper.layerColour(interface.layer).darker(130), 0.2));

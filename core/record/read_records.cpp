@@ -4,6 +4,7 @@
 #include <array>
 #include <utility>
 
+#include "core/base/checksum.h"
 #include "core/record/byte_source.h"
 #include "core/record/seg2_head.h"
 #include "core/record/seg2_reader.h"
@@ -64,8 +65,15 @@ Result<std::vector<ShotRecord>> readRecords(const std::string& path) {
   if (!source) {
     return source.failure();
   }
-  return readAs(
+  auto records = readAs(
       kindOf(**source), path, [&] { return readSeg2(path); }, [&] { return readSegy(path); });
+  if (records) {
+    const std::string checksum = fileChecksum(path).value_or("");
+    for (ShotRecord& record : *records) {
+      record.checksum = checksum;
+    }
+  }
+  return records;
 }
 
 Result<std::vector<ShotRecord>> readRecordsBytes(std::span<const std::byte> bytes, const std::string& name) {

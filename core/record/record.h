@@ -48,6 +48,7 @@ struct ShotRecord {
   std::vector<HeaderEntry> header;    ///< keywords of the file
   std::vector<Trace> traces;          ///< at least one
   std::vector<std::string> oddities;  ///< what is odd about the file, one sentence each
+  std::string checksum;               ///< of the whole file when it was read, see fileChecksum(); empty when unknown
   std::vector<std::string> losses;    ///< those of them by which part of the file could not be read; not kept on disk
 };
 

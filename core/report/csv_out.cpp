@@ -126,6 +126,20 @@ std::string doubtsCsv(const Interpretation& interpretation) {
   return csvText({"kind", "where", "says", "rests_on", "would_settle"}, rows);
 }
 
+std::string boreholesCsv(const Survey& survey, const Interpretation& interpretation) {
+  std::vector<Row> rows;
+  for (const Borehole& hole : survey.boreholes) {
+    const Estimate depth = interpretation.section.depthAt(hole.layer, hole.x);
+    rows.push_back({hole.name, fullPrecision(hole.x), std::to_string(hole.layer), fullPrecision(hole.depth),
+                    fullPrecision(hole.sigma), hole.used ? "used" : "compared", fullPrecision(depth.value),
+                    fullPrecision(depth.low95), fullPrecision(depth.high95),
+                    fullPrecision(depth.determined ? depth.value - hole.depth : Estimate::kNaN)});
+  }
+  return csvText({"borehole", "x_m", "layer", "drilled_depth_m", "drilled_sigma_m", "in_section", "section_depth_m",
+                  "section_low95_m", "section_high95_m", "difference_m"},
+                 rows);
+}
+
 Outcome writeTextFile(const std::string& path, const std::string& text) {
   std::ofstream file(path, std::ios::binary | std::ios::trunc);
   file << text;

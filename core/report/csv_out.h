@@ -7,7 +7,7 @@
 
 namespace strikeplate {
 
-/// The five tables that leave the program as CSV: RFC 4180 with a header row, SI units, full precision, whatever
+/// The tables that leave the program as CSV: RFC 4180 with a header row, SI units, full precision, whatever
 /// units the user sees. A number that is not determined is an empty cell.
 
 /// file,trace,shot_x_m,geophone_x_m,time_s,sigma_s,layer,origin,trigger_correction_s
@@ -30,6 +30,10 @@ std::string opinionsCsv(const Interpretation& interpretation);
 
 /// kind,where,says,rests_on,would_settle
 std::string doubtsCsv(const Interpretation& interpretation);
+/// Each depth met in a borehole beside the section's there: borehole, x_m, layer, drilled_depth_m, drilled_sigma_m,
+/// in_section ("used" as a datum or only "compared"), section_depth_m, section_low95_m, section_high95_m,
+/// difference_m (section minus drilled).
+std::string boreholesCsv(const Survey& survey, const Interpretation& interpretation);
 
 /// Writes a text to a file as it is; fails with one sentence when it cannot be written whole.
 Outcome writeTextFile(const std::string& path, const std::string& text);

@@ -42,6 +42,37 @@ void addStrongestDoubt(SheetContent& sheet, int all) {
 
 }  // namespace
 
+SheetOptions sheetOptionsOf(const Survey& survey) {
+  const SheetChoices& kept = survey.info.sheet;
+  SheetOptions options;
+  options.question = kept.question;
+  options.answer = kept.answer;
+  options.answerTo = kept.answerTo;
+  options.signatory = kept.signatory;
+  options.records = kept.records;
+  options.tables = kept.tables;
+  options.places = kept.places;
+  return options;
+}
+
+SheetChoices sheetChoicesOf(const SheetOptions& options) {
+  return {options.question, options.answer, options.answerTo, options.signatory,
+          options.records,  options.tables, options.places};
+}
+
+std::string sheetDraft(const Survey& survey, const Interpretation& interpretation) {
+  Survey metric;
+  metric.geophones = survey.geophones;
+  const SheetOptions none;
+  return sheetAnswer(
+      {metric, interpretation, none, SheetWords::of(metric, shallowest(metric, interpretation.section))});
+}
+
+bool answerIsOld(const Survey& survey, const Interpretation& interpretation, const SheetOptions& options) {
+  return !options.answer.empty() && !options.answerTo.empty() &&
+         options.answerTo != sheetDraft(survey, interpretation);
+}
+
 SheetContent sheetContent(const Survey& survey, const Interpretation& interpretation, const SheetOptions& options) {
   const SheetSource source{survey, interpretation, options,
                            SheetWords::of(survey, shallowest(survey, interpretation.section))};
@@ -55,6 +86,10 @@ SheetContent sheetContent(const Survey& survey, const Interpretation& interpreta
   }
   sheet.answer = options.answer.empty() ? sheetAnswer(source) : options.answer;
   sheet.warnings = sheetWarnings(source);
+  if (answerIsOld(survey, interpretation, options)) {
+    sheet.warnings.insert(sheet.warnings.begin(), "The answer below was written before the interpretation changed. " +
+                                                      sentence("The section now says: " + sheetAnswer(source)));
+  }
   sheet.question = options.question.empty() ? sheetQuestion(source) : sentence(options.question);
   sheet.layers = sheetLayers(source);
   sheet.materials = sheetMaterials(source);

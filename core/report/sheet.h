@@ -9,17 +9,30 @@ namespace strikeplate {
 
 /// What the sheet cannot know from the survey itself.
 struct SheetOptions {
-  int edits = -1;                       ///< edits of the history that are done, or -1 when there is no history
-  std::string answer;                   ///< the user's own answer in place of the drafted one; empty for the draft
-  std::string question;                 ///< what the client wants to know; empty for the general question
-  std::string signatory;                ///< printed name under the signature line
-  std::vector<std::string> builtOn;     ///< names and versions of what the program is built on
-  bool blackAndWhite = false;           ///< layers told apart by symbol, dashes and grey alone
-  bool records = false;                 ///< further pages: each shot's record with its picks
-  bool tables = false;                  ///< further pages: every table in full
-  bool places = false;                  ///< further pages: where every geophone and shot stood
-  std::vector<std::string> inputFiles;  ///< besides the records' own files, such as a geometry table
+  int edits = -1;                    ///< edits of the history that are done, or -1 when there is no history
+  std::string answer;                ///< the user's own answer in place of the drafted one; empty for the draft
+  std::string answerTo;              ///< sheetDraft() when the answer was written; empty when that is not known
+  std::string question;              ///< what the client wants to know; empty for the general question
+  std::string signatory;             ///< printed name under the signature line
+  std::vector<std::string> builtOn;  ///< names and versions of what the program is built on
+  bool blackAndWhite = false;        ///< layers told apart by symbol, dashes and grey alone
+  bool records = false;              ///< further pages: each shot's record with its picks
+  bool tables = false;               ///< further pages: every table in full
+  bool places = false;               ///< further pages: where every geophone and shot stood
 };
+
+/// The options as the survey keeps them; the others are at their defaults.
+SheetOptions sheetOptionsOf(const Survey& survey);
+
+/// What of the options a survey keeps.
+SheetChoices sheetChoicesOf(const SheetOptions& options);
+
+/// The answer that the program drafts, in metres whatever the survey's unit: what it says of depths and velocities,
+/// by which a later reader knows whether an answer of the user's own was written for the same interpretation.
+std::string sheetDraft(const Survey& survey, const Interpretation& interpretation);
+
+/// Whether the answer of the user's own was written for another interpretation.
+bool answerIsOld(const Survey& survey, const Interpretation& interpretation, const SheetOptions& options);
 
 struct SheetField {
   std::string label;
@@ -47,9 +60,8 @@ struct SheetDoubtKind {
 };
 
 struct SheetFile {
-  std::string name;  ///< without folders
-  std::string
-      checksum;  ///< CRC-32 (IEEE 802.3) of the file when the sheet was made, 8 hex digits; empty when not at hand
+  std::string name;      ///< without folders
+  std::string checksum;  ///< CRC-32 (IEEE 802.3) of the file when it was read, 8 hex digits; empty when not known
 };
 
 /// Everything the sheet says, as finished texts in the user's units. Screen, paper and tests take the words and

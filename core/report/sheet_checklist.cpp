@@ -120,6 +120,23 @@ std::string control(const Survey& survey) {
   return "";
 }
 
+std::string answerFits(const SheetSource& source) {
+  const SheetOptions& options = source.options;
+  if (options.answer.size() > kLongestAnswer) {
+    return "The answer is longer than page 1 holds and would be cut; two sentences do.";
+  }
+  return answerIsOld(source.survey, source.interpretation, options)
+             ? "The interpretation has changed since the answer was written; read it again, or take the draft."
+             : "";
+}
+
+std::string onTheMap(const Survey& survey) {
+  if (!survey.info.map) {
+    return "The line has no place on the map; give two of its points in WGS 84 (Edit, Job, client and crew).";
+  }
+  return faultOf(*survey.info.map);
+}
+
 std::string archive(const SheetSource& source) {
   const std::vector<SheetFile> files = sheetFiles(source);
   const auto unknown =
@@ -129,7 +146,7 @@ std::string archive(const SheetSource& source) {
   }
   return unknown == 0 ? ""
                       : counted(static_cast<int>(unknown), "input file is", "input files are") +
-                            " not where it was read from, so its checksum cannot be printed.";
+                            " without a checksum; read the records again to have it kept.";
 }
 
 }  // namespace
@@ -142,10 +159,7 @@ std::vector<SheetCheck> sheetChecklist(const Survey& survey, const Interpretatio
       {"Purpose: the client's question", trimmed(options.question).empty()
                                              ? "Only the general question would be printed; write the client's own."
                                              : ""},
-      {"An answer that fits the page",
-       options.answer.size() > kLongestAnswer
-           ? "The answer is longer than page 1 holds and would be cut; two sentences do."
-           : ""},
+      {"An answer that fits page and section", answerFits(source)},
       {"Client, site, line, date",
        notGiven({{"client", info.client}, {"site", info.site}, {"line", info.line}, {"date", info.date}})},
       {"Crew, observer, weather and ground",
@@ -153,6 +167,7 @@ std::vector<SheetCheck> sheetChecklist(const Survey& survey, const Interpretatio
       {"Source, geophones, recorder",
        notGiven({{"source", info.source}, {"geophone type", info.geophoneType}, {"recorder", info.recorder}})},
       {"Places and elevations", positions(survey)},
+      {"Line on the map", onTheMap(survey)},
       {"Shots at both ends", layout(survey)},
       {"First breaks", picked(survey)},
       {"Records with picks shown", options.records ? "" : "Records are not printed; tick them to add their pages."},

@@ -60,9 +60,6 @@ SheetTable sheetDoubtTable(const std::vector<SheetDoubtKind>& kinds, const std::
 /// What stands in the place of doubts when there are none: without a section that is no praise.
 std::string noDoubts(const Section& section);
 
-/// CRC-32 (IEEE 802.3) of a file's bytes as 8 hex digits; nothing when it cannot be read to its end.
-std::optional<std::string> fileChecksum(const std::string& path);
-
 std::string sheetCautionShort();
 std::vector<std::string> sheetCautions();
 

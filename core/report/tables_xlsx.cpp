@@ -18,8 +18,9 @@ constexpr double kWidest = 60.0;             // characters
 
 // Columns of words; what stands in any other is a number.
 bool isWords(const std::string& column) {
-  static const std::vector<std::string> kWords = {"file",  "origin", "route",    "assumes",     "kind",
-                                                  "where", "says",   "rests_on", "would_settle"};
+  static const std::vector<std::string> kWords = {"file", "origin",   "route",       "assumes",
+                                                  "kind", "borehole", "in_section",  "where",
+                                                  "says", "rests_on", "would_settle"};
   return std::find(kWords.begin(), kWords.end(), column) != kWords.end();
 }
 
@@ -73,6 +74,7 @@ Outcome writeTablesXlsx(const std::string& path, const Survey& survey, const Int
   addTable(book, header, "layers", layersCsv(interpretation));
   addTable(book, header, "opinions", opinionsCsv(interpretation));
   addTable(book, header, "doubts", doubtsCsv(interpretation));
+  addTable(book, header, "boreholes", boreholesCsv(survey, interpretation));
   std::error_code error;
   const bool closed = workbook_close(book) == LXW_NO_ERROR;
   if (closed) {

@@ -75,6 +75,10 @@ Edit setTraceState(const Survey& survey, int shot, int trace, TraceState state);
 /// Needs a row for each shot with a value for each of its blows. Without changes when nothing changes.
 Edit useBlows(const Survey& survey, const std::vector<std::vector<bool>>& used);
 Edit setInfo(const Survey& survey, const SurveyInfo& info);
+/// What the sheet is to hold.
+Edit setSheet(const Survey& survey, const SheetChoices& sheet);
+/// Notes that a table was read, with its checksum as it is now; for an edit that uses the table.
+Change noteTable(const Survey& survey, const std::string& path);
 Edit setSettings(const Survey& survey, const SurveySettings& settings, std::string text);
 /// Sets what the user read off a shot, in place of an earlier mark of its kind. Needs a value and sigma > 0.
 Edit setMark(const Survey& survey, int shot, const ShotMark& mark);

@@ -70,8 +70,12 @@ bool fits(const Survey& survey, const GeophonesChange& change) {
          allSound(change.after);
 }
 
-bool fits(const Survey& /*survey*/, const InfoChange& /*change*/) {
-  return true;
+bool sound(const SurveyInfo& info) {
+  return !info.map || (isPlace(info.map->first) && isPlace(info.map->second));
+}
+
+bool fits(const Survey& /*survey*/, const InfoChange& change) {
+  return sound(change.before) && sound(change.after);
 }
 
 bool fits(const Survey& /*survey*/, const SettingsChange& change) {
@@ -110,9 +114,9 @@ bool surveyIsSound(const Survey& survey) {
   const auto shotSound = [&survey](const Shot& shot) {
     return sound(shot, survey.records.size(), survey.geophones.size());
   };
-  return std::all_of(survey.records.begin(), survey.records.end(), recordSound) && allSound(survey.geophones) &&
-         std::all_of(survey.shots.begin(), survey.shots.end(), shotSound) && allSound(survey.boreholes) &&
-         otherLinesSound(survey);
+  return sound(survey.info) && std::all_of(survey.records.begin(), survey.records.end(), recordSound) &&
+         allSound(survey.geophones) && std::all_of(survey.shots.begin(), survey.shots.end(), shotSound) &&
+         allSound(survey.boreholes) && otherLinesSound(survey);
 }
 
 bool editFits(const Survey& survey, const Edit& edit) {

@@ -4,6 +4,7 @@
 #include <numeric>
 #include <utility>
 
+#include "core/base/checksum.h"
 #include "core/base/file_names.h"
 #include "core/base/numbers.h"
 #include "core/base/units.h"
@@ -166,6 +167,18 @@ Edit useBlows(const Survey& survey, const std::vector<std::vector<bool>>& used) 
 
 Edit setInfo(const Survey& survey, const SurveyInfo& info) {
   return {"Change the survey's particulars", {InfoChange{survey.info, info}}};
+}
+
+Edit setSheet(const Survey& survey, const SheetChoices& sheet) {
+  SurveyInfo info = survey.info;
+  info.sheet = sheet;
+  return {"Change the sheet's words and pages", {InfoChange{survey.info, info}}};
+}
+
+Change noteTable(const Survey& survey, const std::string& path) {
+  SurveyInfo info = survey.info;
+  info.tables.push_back({path, fileChecksum(path).value_or("")});
+  return InfoChange{survey.info, info};
 }
 
 Edit setSettings(const Survey& survey, const SurveySettings& settings, std::string text) {

@@ -4,6 +4,7 @@
 #include <memory>
 #include <utility>
 
+#include "core/base/checksum.h"
 #include "core/survey/assemble.h"
 #include "core/survey/merge.h"
 
@@ -112,6 +113,7 @@ Result<Edit> geometryEdit(const Survey& survey, const std::string& tablePath) {
   carryOver(survey, after);
   after = merged(std::move(after), withoutRecords(survey));
   after.info = survey.info;
+  after.info.tables.push_back({tablePath, fileChecksum(tablePath).value_or("")});
   after.settings = survey.settings;
   after.boreholes = survey.boreholes;
   after.otherLines = survey.otherLines;

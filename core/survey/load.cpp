@@ -4,6 +4,7 @@
 #include <optional>
 #include <utility>
 
+#include "core/base/checksum.h"
 #include "core/base/numbers.h"
 #include "core/line/geometry_table.h"
 #include "core/record/read_files.h"
@@ -23,6 +24,11 @@ bool isSurveyFile(const std::string& path) {
   return endsWith(path, ".splate");
 }
 
+/// Whether a header word is more than what a recorder fills in for nothing, such as "0000" or "00/00/00".
+bool saysSomething(const std::string& value) {
+  return value.find_first_not_of("0 ./:_-") != std::string::npos;
+}
+
 /// What the first lines of the records say of the job, where the survey does not say it yet.
 void takeHeaderInfo(const ShotRecord& record, SurveyInfo& info) {
   const std::pair<const char*, std::string SurveyInfo::*> kKeys[] = {
@@ -31,7 +37,7 @@ void takeHeaderInfo(const ShotRecord& record, SurveyInfo& info) {
   };
   for (const HeaderEntry& entry : record.header) {
     for (const auto& [key, member] : kKeys) {
-      if (entry.key == key && (info.*member).empty()) {
+      if (entry.key == key && (info.*member).empty() && saysSomething(entry.value)) {
         info.*member = entry.value;
       }
     }
@@ -40,7 +46,7 @@ void takeHeaderInfo(const ShotRecord& record, SurveyInfo& info) {
       {"LINE_ID", &SurveyInfo::line}, {"SOURCE", &SurveyInfo::source}, {"RECEIVER_SPECS", &SurveyInfo::geophoneType}};
   for (const HeaderEntry& entry : record.traces.front().header) {
     for (const auto& [key, member] : kTraceKeys) {
-      if (entry.key == key && (info.*member).empty()) {
+      if (entry.key == key && (info.*member).empty() && saysSomething(entry.value)) {
         info.*member = entry.value;
       }
     }
@@ -56,6 +62,7 @@ class Loading {
     auto table = readGeometryTable(path);
     if (table) {
       table_ = std::move(*table);
+      tablesRead_.push_back({path, fileChecksum(path).value_or("")});
     } else {
       line_.problems.push_back(table.message());
     }
@@ -76,6 +83,7 @@ class Loading {
     auto survey = table ? surveyFromTimes(*table, guessTimesColumns(*table)) : Result<Survey>(table.failure());
     if (survey) {
       surveys_.push_back(std::move(*survey));
+      tablesRead_.push_back({path, fileChecksum(path).value_or("")});
       ++line_.filesRead;
     } else {
       line_.problems.push_back(survey.message());
@@ -121,6 +129,8 @@ class Loading {
     const SurveyInfo info = surveys_.empty() ? fresh.info : survey.info;
     line_.survey = surveys_.empty() ? std::move(fresh) : merged(std::move(survey), fresh);
     line_.survey.info = info;
+    std::vector<TableRead>& tables = line_.survey.info.tables;
+    tables.insert(tables.end(), tablesRead_.begin(), tablesRead_.end());
   }
 
  private:
@@ -138,6 +148,7 @@ class Loading {
   std::vector<RecordPtr> records_;
   std::vector<Survey> surveys_;
   std::vector<std::string> remarks_;
+  std::vector<TableRead> tablesRead_;
 };
 
 }  // namespace

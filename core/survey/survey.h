@@ -6,6 +6,7 @@
 #include <vector>
 
 #include "core/line/line.h"
+#include "core/line/line_on_map.h"
 #include "core/picking/pick.h"
 #include "core/record/record.h"
 
@@ -51,9 +52,32 @@ struct Shot {
   bool operator==(const Shot&) const = default;
 };
 
-/// Who, where, when and how: what the sheet's head says. All free text as the user typed it.
+/// What the user decided about the sheet.
+struct SheetChoices {
+  std::string question;   ///< what the client wants to know; empty for the general question
+  std::string answer;     ///< the user's own answer in place of the drafted one; empty for the draft
+  std::string answerTo;   ///< the draft, in metres, that the answer was written in place of
+  std::string signatory;  ///< printed name under the signature line
+  bool records = false;   ///< further pages: each shot's record with its picks
+  bool tables = false;    ///< further pages: every table in full
+  bool places = false;    ///< further pages: where every geophone and shot stood
+  bool operator==(const SheetChoices&) const = default;
+};
+
+/// A table that was laid over the records or brought picks, as it was when it was read.
+struct TableRead {
+  std::string file;      ///< as named by the user
+  std::string checksum;  ///< see fileChecksum()
+  bool operator==(const TableRead&) const = default;
+};
+
+/// Who, where, when and how: what the sheet's head says, free text as the user typed it; what the sheet is to hold;
+/// where the line lies on the map.
 struct SurveyInfo {
   std::string title, client, site, line, date, crew, observer, source, geophoneType, recorder, weather, datum, notes;
+  SheetChoices sheet = {};
+  std::optional<LineOnMap> map = std::nullopt;
+  std::vector<TableRead> tables = {};  ///< in the order of reading
   bool operator==(const SurveyInfo&) const = default;
 };
 

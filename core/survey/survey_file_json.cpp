@@ -35,6 +35,15 @@ constexpr std::array<InfoField, 13> kInfoFields = {{{"title", &SurveyInfo::title
                                                     {"datum", &SurveyInfo::datum},
                                                     {"notes", &SurveyInfo::notes}}};
 
+struct SheetText {
+  const char* key;
+  std::string SheetChoices::*text;
+};
+constexpr std::array<SheetText, 4> kSheetTexts = {{{"question", &SheetChoices::question},
+                                                   {"answer", &SheetChoices::answer},
+                                                   {"answerTo", &SheetChoices::answerTo},
+                                                   {"signatory", &SheetChoices::signatory}}};
+
 template <std::size_t Count>
 int indexOf(const std::array<const char*, Count>& names, const std::string& name) {
   for (std::size_t i = 0; i < Count; ++i) {
@@ -104,8 +113,29 @@ class Writer {
     for (const InfoField& f : kInfoFields) {
       object[f.key] = textToJson(info.*f.field);
     }
+    if (info.sheet != SheetChoices{}) {
+      object["sheet"] = (*this)(info.sheet);
+    }
+    if (info.map) {
+      object["map"] = json::array({(*this)(info.map->first), (*this)(info.map->second)});
+    }
+    if (!info.tables.empty()) {
+      object["tables"] = (*this)(info.tables);
+    }
     return object;
   }
+
+  json operator()(const SheetChoices& sheet) const {
+    json object = {{"records", sheet.records}, {"tables", sheet.tables}, {"places", sheet.places}};
+    for (const SheetText& t : kSheetTexts) {
+      object[t.key] = textToJson(sheet.*t.text);
+    }
+    return object;
+  }
+
+  json operator()(const MapPoint& point) const { return {point.x, point.longitude, point.latitude}; }
+
+  json operator()(const TableRead& table) const { return {textToJson(table.file), textToJson(table.checksum)}; }
 
   json operator()(const SurveySettings& s) const {
     return {{"layers", s.layers}, {"feet", s.feet}, {"solveTriggerDelays", s.solveTriggerDelays}};
@@ -199,6 +229,37 @@ class Reader {
     for (const InfoField& f : kInfoFields) {
       info.*f.field = textFromJson(member(from, f.key));
     }
+    info.sheet = {};
+    if (const json& sheet = member(from, "sheet"); !sheet.is_null()) {
+      read(sheet, info.sheet);
+    }
+    info.map.reset();
+    if (const json& map = member(from, "map"); !map.is_null()) {
+      info.map.emplace();
+      read(map.at(0), info.map->first);
+      read(map.at(1), info.map->second);
+    }
+    info.tables.clear();
+    if (const json& tables = member(from, "tables"); !tables.is_null()) {
+      read(tables, info.tables);
+    }
+  }
+
+  void read(const json& from, SheetChoices& sheet) const {
+    for (const SheetText& t : kSheetTexts) {
+      sheet.*t.text = textFromJson(member(from, t.key));
+    }
+    sheet.records = from.at("records").get<bool>();
+    sheet.tables = from.at("tables").get<bool>();
+    sheet.places = from.at("places").get<bool>();
+  }
+
+  void read(const json& from, MapPoint& point) const {
+    point = {from.at(0).get<double>(), from.at(1).get<double>(), from.at(2).get<double>()};
+  }
+
+  void read(const json& from, TableRead& table) const {
+    table = {textFromJson(from.at(0)), textFromJson(from.at(1))};
   }
 
   void read(const json& from, SurveySettings& s) const {

@@ -75,6 +75,7 @@ ShotRecord recordFrom(const json& from, std::size_t mostSamples) {
   record.file = textFromJson(from.at("file"));
   record.firstTraceInFile = from.at("firstTrace").get<int>();
   record.format = textFromJson(from.at("format"));
+  record.checksum = textFromJson(member(from, "checksum"));
   record.source = positionFrom(member(from, "source"));
   record.sourceDepth = numberFrom(member(from, "sourceDepth"));
   record.header = entriesFrom(from.at("header"));
@@ -98,14 +99,17 @@ std::string recordHeadToJson(const ShotRecord& record) {
   for (const std::string& oddity : record.oddities) {
     oddities.push_back(textToJson(oddity));
   }
-  const json object = {{"file", textToJson(record.file)},
-                       {"firstTrace", record.firstTraceInFile},
-                       {"format", textToJson(record.format)},
-                       {"source", toJson(record.source)},
-                       {"sourceDepth", toJson(record.sourceDepth)},
-                       {"header", toJson(record.header)},
-                       {"oddities", oddities},
-                       {"traces", traces}};
+  json object = {{"file", textToJson(record.file)},
+                 {"firstTrace", record.firstTraceInFile},
+                 {"format", textToJson(record.format)},
+                 {"source", toJson(record.source)},
+                 {"sourceDepth", toJson(record.sourceDepth)},
+                 {"header", toJson(record.header)},
+                 {"oddities", oddities},
+                 {"traces", traces}};
+  if (!record.checksum.empty()) {
+    object["checksum"] = record.checksum;
+  }
   return object.dump();
 }
 

@@ -1,8 +1,10 @@
 // The headless program's interface: options, tables, exit status.
 #include <cmath>
 
+#include <QProcess>
 #include <gtest/gtest.h>
 
+#include "core/survey/survey_file.h"
 #include "tests/app/batch_run.h"
 
 namespace strikeplate {
@@ -104,10 +106,52 @@ TEST_F(BatchInterface, BlowsAtOneShotPointEachHaveTheirRows) {
   }
 }
 
+TEST_F(BatchInterface, TheSheetsPaperUnitColoursAndPagesAreAskedForByName) {
+  const BatchRun run = runBatchProgram({testing::tinyRecord(), "--paper", "letter", "--feet", "--black-and-white",
+                                        "--records", "--tables", "--sheet", path("sheet.pdf"), "--xlsx",
+                                        path("tables.xlsx"), "--svg", path("section.svg")});
+  EXPECT_EQ(run.status, 0) << run.errors.toStdString();
+  EXPECT_TRUE(testing::readFile(path("sheet.pdf")).contains("/MediaBox [0 0 612 792]")) << "8.5 x 11 inches";
+  EXPECT_TRUE(testing::readFile(path("tables.xlsx")).startsWith("PK"));
+  EXPECT_TRUE(testing::readFile(path("section.svg")).contains("distance along the line (ft)"));
+  EXPECT_TRUE(testing::readFile(path("section-travel-times.svg")).contains("<svg"));
+}
+
+TEST_F(BatchInterface, WhatTheSurveyKeepsForTheSheetIsPrinted) {
+  ASSERT_EQ(runBatchProgram({testing::tinyRecord(), "--survey", path("line.splate")}).status, 0);
+  {
+    auto file = SurveyFile::open(path("line.splate").toStdString());
+    ASSERT_TRUE(file) << file.message();
+    SurveyInfo info = file->survey().info;
+    info.sheet.question = "Where is rock";
+    info.sheet.signatory = "I. Vance";
+    info.map = LineOnMap{{0.0, 8.5, 46.0}, {111.152, 8.5, 46.001}};
+    ASSERT_TRUE(file->append(edits::setInfo(file->survey(), info)).ok());
+  }
+  const BatchRun run =
+      runBatchProgram({path("line.splate"), "--sheet", path("sheet.pdf"), "--geojson", path("line.geojson")});
+  EXPECT_EQ(run.status, 0) << run.errors.toStdString();
+  EXPECT_TRUE(testing::readFile(path("line.geojson")).contains("\"FeatureCollection\""));
+  QProcess reader;
+  reader.start("pdftotext", {path("sheet.pdf"), "-"});
+  ASSERT_TRUE(reader.waitForFinished());
+  const QString text = QString::fromUtf8(reader.readAllStandardOutput());
+  EXPECT_TRUE(text.contains("Where is rock.")) << text.toStdString();
+  EXPECT_TRUE(text.contains("I. Vance"));
+}
+
+TEST_F(BatchInterface, GeoJsonOfALineWithoutAPlaceIsRefusedInWords) {
+  const BatchRun run = runBatchProgram({testing::tinyRecord(), "--geojson", path("line.geojson")});
+  EXPECT_EQ(run.status, 1);
+  EXPECT_TRUE(run.errors.contains("no place on the map")) << run.errors.toStdString();
+  EXPECT_TRUE(testing::readFile(path("line.geojson")).isEmpty());
+}
+
 TEST_F(BatchInterface, WrongUsageIsStatusTwoWithOneSentence) {
   for (const QStringList& arguments :
        {QStringList{}, QStringList{"--layers", "9", testing::tinyRecord()},
-        QStringList{testing::tinyRecord(), "--what"}, QStringList{testing::tinyRecord(), "--sheet"}}) {
+        QStringList{testing::tinyRecord(), "--what"}, QStringList{testing::tinyRecord(), "--paper", "a3"},
+        QStringList{testing::tinyRecord(), "--sheet"}}) {
     const BatchRun run = runBatchProgram(arguments);
     EXPECT_EQ(run.status, 2) << arguments.join(' ').toStdString();
     EXPECT_EQ(run.errors.count('\n'), 1) << run.errors.toStdString();

@@ -6,22 +6,21 @@
 #include <regex>
 #include <sstream>
 
+#include <QTableWidget>
 #include <QTemporaryDir>
 #include <gtest/gtest.h>
 
 #include "core/report/csv_out.h"
+#include "core/report/geojson_out.h"
+#include "core/report/tables_xlsx.h"
 #include "tests/core/report/sheet_sample.h"
+#include "widgets/layer_table.h"
 #include "widgets/sheet_painter.h"
 
 namespace strikeplate {
 namespace {
 
-// Words of both pages in the order of painting, with single blanks between them.
-std::string textOfPdf(const testing::SheetSample& sample) {
-  const QTemporaryDir folder;  // tests run side by side
-  const std::string path = folder.filePath("sheet.pdf").toStdString();
-  EXPECT_TRUE(writeSheetPdf(QString::fromStdString(path), sample.survey, sample.interpretation, {}).ok());
-  const std::string command = "pdftotext -raw '" + path + "' -";
+std::string outputOf(const std::string& command) {
   const std::unique_ptr<FILE, int (*)(FILE*)> pipe(::popen(command.c_str(), "r"), &::pclose);
   std::string text;
   std::array<char, 4096> buffer{};
@@ -29,7 +28,15 @@ std::string textOfPdf(const testing::SheetSample& sample) {
     n = std::fread(buffer.data(), 1, buffer.size(), pipe.get());
     text.append(buffer.data(), n);
   }
-  return std::regex_replace(text, std::regex("(\\s|\xC2\xA0)+"), " ");
+  return text;
+}
+
+// Words of both pages in the order of painting, with single blanks between them.
+std::string textOfPdf(const testing::SheetSample& sample) {
+  const QTemporaryDir folder;  // tests run side by side
+  const std::string path = folder.filePath("sheet.pdf").toStdString();
+  EXPECT_TRUE(writeSheetPdf(QString::fromStdString(path), sample.survey, sample.interpretation, {}).ok());
+  return std::regex_replace(outputOf("pdftotext -raw '" + path + "' -"), std::regex("(\\s|\xC2\xA0)+"), " ");
 }
 
 std::vector<std::vector<std::string>> rowsOf(const std::string& csv) {
@@ -122,6 +129,104 @@ TEST(SheetNumbers, LayersOnPaperAreThoseOfTheTablesInMetres) {
 
 TEST(SheetNumbers, LayersOnPaperAreThoseOfTheTablesInFeet) {
   compareWithTables(true);
+}
+
+// Least, mean and most of the depths to the top of a layer, m.
+struct Spread {
+  double least = 1e9, sum = 0.0, most = -1e9;
+  int count = 0;
+  void take(double depth) {
+    least = std::min(least, depth);
+    most = std::max(most, depth);
+    sum += depth;
+    ++count;
+  }
+};
+
+Spread spreadOf(const std::vector<std::vector<std::string>>& rows, const std::string& layer) {
+  Spread spread;
+  for (const auto& row : rows) {
+    if (row[1] == layer) {
+      spread.take(std::stod(row[2]));
+    }
+  }
+  return spread;
+}
+
+// x, layer and depth of every geophone, by Python's own readers of zip, XML and JSON.
+constexpr const char* kSpreadsheetDepths = R"(
+import sys, zipfile, xml.etree.ElementTree as et
+n = '{http://schemas.openxmlformats.org/spreadsheetml/2006/main}'
+z = zipfile.ZipFile(sys.argv[1])
+names = [s.get('name') for s in et.fromstring(z.read('xl/workbook.xml')).iter(n + 'sheet')]
+sheet = et.fromstring(z.read('xl/worksheets/sheet%d.xml' % (names.index('depths') + 1)))
+for row in list(sheet.iter(n + 'row'))[1:]:
+    print(','.join(c.find(n + 'v').text for c in row))
+)";
+constexpr const char* kMapDepths = R"(
+import json, sys
+for f in json.load(open(sys.argv[1]))['features']:
+    p = f['properties']
+    for layer in (2, 3) if p['kind'] == 'geophone' else ():
+        print(p['x_m'], layer, repr(p['layer_%d_depth_m' % layer]), sep=',')
+)";
+
+std::vector<std::vector<std::string>> rowsByScript(const char* script, const std::string& file) {
+  const QTemporaryDir folder;
+  const std::string path = folder.filePath("read.py").toStdString();
+  EXPECT_TRUE(writeTextFile(path, script).ok());
+  return rowsOf("header\n" + outputOf("python3 '" + path + "' '" + file + "'"));
+}
+
+double numberIn(const QString& words) {
+  static const std::regex kNumber("-?[0-9]+(\\.[0-9]+)?");
+  const std::string text = words.toStdString();
+  std::smatch match;
+  return std::regex_search(text, match, kNumber) ? std::stod(match[0].str()) : Estimate::kNaN;
+}
+
+TEST(SheetNumbers, PaperTableSpreadsheetMapAndScreenSayTheSame) {
+  auto sample = testing::sheetSample();
+  sample.survey.info.map = testing::sampleMap();
+  const QTemporaryDir folder;
+  const std::string xlsx = folder.filePath("tables.xlsx").toStdString();
+  const std::string geojson = folder.filePath("line.geojson").toStdString();
+  ASSERT_TRUE(writeTablesXlsx(xlsx, sample.survey, sample.interpretation).ok());
+  ASSERT_TRUE(writeTextFile(geojson, geoJson(sample.survey, sample.interpretation).value()).ok());
+  const std::vector<PaperLayer> paper = layersOnPaper(textOfPdf(sample), "m");
+  const auto csv = rowsOf(depthsCsv(sample.survey, sample.interpretation));
+  const auto spreadsheet = rowsByScript(kSpreadsheetDepths, xlsx);
+  const auto map = rowsByScript(kMapDepths, geojson);
+  ASSERT_EQ(csv.size(), 48U * 2U);
+  ASSERT_EQ(spreadsheet.size(), csv.size());
+  ASSERT_EQ(map.size(), csv.size());
+  for (std::size_t i = 0; i < csv.size(); ++i) {
+    for (const std::size_t column : {0U, 1U, 2U}) {
+      EXPECT_NEAR(std::stod(spreadsheet[i][column]), std::stod(csv[i][column]), 1e-12);
+      EXPECT_EQ(std::stod(map[i][column]), std::stod(csv[i][column]));
+    }
+  }
+  LayerTable screen;
+  screen.showScene({std::make_shared<Survey>(sample.survey),
+                    std::make_shared<Interpretation>(sample.interpretation),
+                    std::make_shared<std::vector<Gather>>(),
+                    {}});
+  const auto* table = screen.findChild<QTableWidget*>();
+  ASSERT_EQ(table->rowCount(), 3);
+  ASSERT_EQ(paper.size(), 2U);
+  constexpr double kPaper = 0.00501, kScreen = 0.0501;  // half of the last digit shown
+  for (int layer = 2; layer <= 3; ++layer) {
+    const PaperLayer& on = paper[static_cast<std::size_t>(layer) - 2];
+    const Spread all = spreadOf(csv, std::to_string(layer));
+    const double mean = all.sum / all.count;
+    EXPECT_NEAR(on.least, all.least, kPaper);
+    EXPECT_NEAR(on.mean, mean, kPaper);
+    EXPECT_NEAR(on.most, all.most, kPaper);
+    EXPECT_NEAR(numberIn(table->item(layer - 1, 1)->text()), on.velocity, 5.01);
+    EXPECT_NEAR(numberIn(table->item(layer - 1, 2)->text()), all.least, kScreen);
+    EXPECT_NEAR(numberIn(table->item(layer - 1, 3)->text()), mean, kScreen);
+    EXPECT_NEAR(numberIn(table->item(layer - 1, 4)->text()), all.most, kScreen);
+  }
 }
 
 TEST(SheetNumbers, ReciprocalTimesAndTriggerDelaysOnPaperAreThoseOfTheInterpretation) {

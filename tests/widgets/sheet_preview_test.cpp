@@ -94,6 +94,28 @@ TEST_F(SheetPreviewTest, TheDraftFollowsTheUnitUntilItIsEdited) {
   EXPECT_TRUE(answer()->toPlainText().contains(" m below the ground"));
 }
 
+TEST_F(SheetPreviewTest, AnAnswerKeepsWhatItWasWrittenTo) {
+  answer()->selectAll();
+  QTest::keyClicks(answer(), "Rock at 8 m.");
+  const SheetOptions kept = preview_.options();
+  EXPECT_EQ(kept.answerTo, sheetDraft(sample_.survey, sample_.interpretation));
+  testing::SheetSample later = sample_;
+  later.interpretation.section.velocities[0] = Estimate::normal(600.0, 10.0);
+  SheetPreview again(later.survey, later.interpretation, kept);
+  EXPECT_EQ(again.options().answer, "Rock at 8 m.");
+  EXPECT_EQ(again.options().answerTo, kept.answerTo) << "not touched";
+  EXPECT_EQ(again.content().warnings.size(), 1U);
+  for (QPushButton* button : again.findChildren<QPushButton*>()) {
+    if (button->text().contains("still stands")) {
+      EXPECT_FALSE(button->isHidden());
+      button->click();
+      EXPECT_TRUE(button->isHidden());
+    }
+  }
+  EXPECT_EQ(again.options().answerTo, sheetDraft(later.survey, later.interpretation));
+  EXPECT_TRUE(again.content().warnings.empty());
+}
+
 TEST_F(SheetPreviewTest, DoubtsAreWordedInTheUnitOfTheSheet) {
   choose("Feet");
   const SheetContent sheet = preview_.content();

@@ -43,9 +43,28 @@ TEST(SheetChecklist, SaysWhenTheUsersAnswerIsTooLongForThePage) {
   const auto sample = testing::sheetSample();
   SheetOptions options;
   options.answer = "Rock at 5 m.";
-  EXPECT_EQ(missing(sample, "An answer that fits the page", options), "");
+  EXPECT_EQ(missing(sample, "An answer that fits page and section", options), "");
   options.answer.assign(2000, 'x');
-  EXPECT_NE(missing(sample, "An answer that fits the page", options), "");
+  EXPECT_NE(missing(sample, "An answer that fits page and section", options), "");
+}
+
+TEST(SheetChecklist, WantsTheLineOnTheMapAndLooksAtIt) {
+  auto sample = testing::sheetSample();
+  EXPECT_NE(missing(sample, "Line on the map").find("no place on the map"), std::string::npos);
+  sample.survey.info.map = testing::sampleMap();
+  EXPECT_EQ(missing(sample, "Line on the map"), "");
+  sample.survey.info.map->second.x = 50.0;
+  EXPECT_NE(missing(sample, "Line on the map").find("one of them is not right"), std::string::npos);
+}
+
+TEST(SheetChecklist, WantsAnAnswerReadAgainWhenTheInterpretationHasChanged) {
+  auto sample = testing::sheetSample();
+  SheetOptions options;
+  options.answer = "Rock at 5 m.";
+  options.answerTo = sheetDraft(sample.survey, sample.interpretation);
+  EXPECT_EQ(missing(sample, "An answer that fits page and section", options), "");
+  sample.interpretation.section.velocities[1] = Estimate::normal(2000.0, 20.0);
+  EXPECT_NE(missing(sample, "An answer that fits page and section", options).find("has changed"), std::string::npos);
 }
 
 TEST(SheetChecklist, WantsShotsAtBothEnds) {

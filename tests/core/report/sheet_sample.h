@@ -217,6 +217,11 @@ inline void addSampleBoreholes(SheetSample& sample, const SheetSampleSize& size)
   }
 }
 
+/// 94 m of line along the meridian at 46 degrees north, where a degree has 111 152 m.
+inline LineOnMap sampleMap() {
+  return {{0.0, 8.5, 46.0}, {94.0, 8.5, 46.0 + 94.0 / 111152.0}};
+}
+
 inline SheetSample sheetSample(const SheetSampleSize& size = {}) {
   SheetSample sample;
   std::mt19937 random(7);

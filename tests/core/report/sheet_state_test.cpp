@@ -6,8 +6,10 @@
 
 #include <gtest/gtest.h>
 
+#include "core/base/checksum.h"
 #include "core/report/sheet_parts.h"
 #include "core/report/sheet_reach.h"
+#include "core/survey/edit.h"
 #include "tests/core/report/sheet_sample.h"
 
 namespace strikeplate {
@@ -109,6 +111,37 @@ TEST(SheetState, MaterialsAreAHintWithRangesAndSource) {
   EXPECT_EQ(contentOf(testing::emptySheetSample()).materials, "");
 }
 
+TEST(SheetAnswer, OfTheUsersOwnSaysWhenTheInterpretationHasChanged) {
+  auto sample = testing::sheetSample();
+  sample.survey.info.sheet.answer = "Rock lies at 5 m.";
+  sample.survey.info.sheet.answerTo = sheetDraft(sample.survey, sample.interpretation);
+  const auto content = [&] {
+    return sheetContent(sample.survey, sample.interpretation, sheetOptionsOf(sample.survey));
+  };
+  EXPECT_EQ(content().answer, "Rock lies at 5 m.");
+  EXPECT_TRUE(content().warnings.empty());
+  sample.survey.settings.feet = true;
+  EXPECT_TRUE(content().warnings.empty()) << "another unit is no other interpretation";
+  sample.survey.settings.feet = false;
+  sample.interpretation.section.velocities[0] = Estimate::normal(600.0, 10.0);
+  EXPECT_EQ(content().answer, "Rock lies at 5 m.") << "the user's words are not dropped";
+  ASSERT_EQ(content().warnings.size(), 1U) << "nor silently kept";
+  EXPECT_TRUE(contains(content().warnings[0], "written before the interpretation changed")) << content().warnings[0];
+  EXPECT_TRUE(contains(content().warnings[0], "600 m/s")) << "what it says now: " << content().warnings[0];
+}
+
+TEST(SheetAnswer, ChoicesComeBackFromTheSurveyAsTheyWent) {
+  Survey survey;
+  SheetOptions options;
+  options.question = "How deep?";
+  options.answer = "Deep.";
+  options.answerTo = "a draft";
+  options.signatory = "I. Vance";
+  options.records = options.tables = options.places = true;
+  survey = applied(survey, edits::setSheet(survey, sheetChoicesOf(options)));
+  EXPECT_TRUE(sheetChoicesOf(sheetOptionsOf(survey)) == sheetChoicesOf(options));
+}
+
 TEST(SheetFiles, TheChecksumIsTheCommonCrc32) {
   // The check value of CRC-32 (IEEE 802.3) for the nine digits is cbf43926 in every catalogue of such codes.
   const std::string path = (std::filesystem::path(::testing::TempDir()) / "sheet checksum.dat").string();
@@ -126,9 +159,8 @@ TEST(SheetFiles, AreNamedOnceWithoutFolders) {
   auto record = std::make_shared<ShotRecord>(*sample.survey.records[0]);
   record->file = "C:\\Users\\someone\\line7_1.dat";
   std::fill(sample.survey.records.begin(), sample.survey.records.end(), record);
-  SheetOptions options;
-  options.inputFiles = {"/home/someone/places.csv"};
-  const SheetContent sheet = sheetContent(sample.survey, sample.interpretation, options);
+  sample.survey.info.tables = {{"/home/someone/places.csv", ""}};
+  const SheetContent sheet = contentOf(sample);
   ASSERT_EQ(sheet.files.size(), 2U);
   EXPECT_EQ(sheet.files[0].name, "line7_1.dat");
   EXPECT_EQ(sheet.files[1].name, "places.csv");

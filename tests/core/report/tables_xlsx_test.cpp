@@ -94,6 +94,7 @@ TEST_F(TablesXlsx, EveryTableIsThatOfTheCsvFile) {
   compare("layers", layersCsv(sample_.interpretation));
   compare("opinions", opinionsCsv(sample_.interpretation));
   compare("doubts", doubtsCsv(sample_.interpretation));
+  compare("boreholes", boreholesCsv(sample_.survey, sample_.interpretation));
 }
 
 TEST_F(TablesXlsx, NumbersAreNumbersAndWordsAreWords) {

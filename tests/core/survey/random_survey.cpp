@@ -28,6 +28,7 @@ RecordPtr randomRecord(std::mt19937& random, int traces) {
   record->firstTraceInFile = whole(random, 1, 100);
   record->header = {{"ACQUISITION_DATE", word(random)}};
   record->oddities = {word(random)};
+  record->checksum = whole(random, 0, 1) == 1 ? "cbf43926" : "";
   if (whole(random, 0, 1) == 1) {
     record->sourceDepth = real(random, 0, 2);
     record->source = HeaderPosition{real(random, -5, 50), real(random, 0, 1), std::nullopt};
@@ -67,6 +68,12 @@ SurveyInfo randomInfo(std::mt19937& random) {
   info.client = word(random);
   info.notes = word(random);
   info.date = word(random);
+  info.sheet = {word(random), word(random), word(random), word(random), whole(random, 0, 1) == 1, true, false};
+  if (whole(random, 0, 1) == 1) {
+    info.map = LineOnMap{{0.0, real(random, -180, 180), real(random, -90, 90)},
+                         {real(random, 1, 100), real(random, -180, 180), real(random, -90, 90)}};
+  }
+  info.tables = {{word(random), "cbf43926"}};
   return info;
 }
 

@@ -21,9 +21,9 @@ bool same(const Trace& a, const Trace& b) {
 }
 
 bool same(const RecordPtr& a, const RecordPtr& b) {
-  return a->file == b->file && a->firstTraceInFile == b->firstTraceInFile && a->format == b->format &&
-         same(a->source, b->source) && a->sourceDepth == b->sourceDepth && same(a->header, b->header) &&
-         a->oddities == b->oddities &&
+  return a->file == b->file && a->checksum == b->checksum && a->firstTraceInFile == b->firstTraceInFile &&
+         a->format == b->format && same(a->source, b->source) && a->sourceDepth == b->sourceDepth &&
+         same(a->header, b->header) && a->oddities == b->oddities &&
          std::equal(a->traces.begin(), a->traces.end(), b->traces.begin(), b->traces.end(),
                     [](const Trace& p, const Trace& q) { return same(p, q); });
 }
