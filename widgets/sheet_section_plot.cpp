@@ -277,12 +277,20 @@ QString scaleWords(double exaggeration) {
   return bands + (exaggeration < 1.0 ? QStringLiteral(" (slopes look flatter than they are)") : QString());
 }
 
-void paintLegend(SheetPaper& paper, const QPointF& corner, const SheetFigures& figures) {
+// What has no room in the first row goes on in the second, whose right end says the scale.
+void paintLegend(SheetPaper& paper, const QPointF& corner, double width, const SheetFigures& figures) {
   QPainter& painter = paper.painter();
   const Look& look = paper.look();
   const SheetText style{6.5, false, look.ink};
-  const double y = corner.y() + 2.0;
+  constexpr double kSecondRow = 3.8;  // mm below the first
+  double y = corner.y() + 2.0;
   double x = corner.x();
+  const auto makeRoomFor = [&](const QString& text) {
+    if (x + 2.4 + paper.width(text, style) > corner.x() + width) {
+      x = corner.x();
+      y = corner.y() + 2.0 + kSecondRow;
+    }
+  };
   const auto entry = [&](const QString& text) {
     paper.label({x + 2.4, y}, text, style);
     x += 6.0 + paper.width(text, style);
@@ -297,16 +305,20 @@ void paintLegend(SheetPaper& paper, const QPointF& corner, const SheetFigures& f
   const auto& holes = figures.survey.boreholes;
   for (const bool used : {true, false}) {
     if (std::any_of(holes.begin(), holes.end(), [used](const Borehole& hole) { return hole.used == used; })) {
+      const QString text = used ? QStringLiteral("borehole, used") : QStringLiteral("borehole, compared only");
+      makeRoomFor(text);
       paintBoreholeStroke(paper, {x + 0.8, y - 2.0}, {x + 0.8, y + 0.4}, used);
-      entry(used ? QStringLiteral("borehole, used") : QStringLiteral("borehole, compared only"));
+      entry(text);
     }
   }
   for (const SectionInterface& interface : figures.interpretation.section.interfaces) {
+    const QString text = QStringLiteral("top of layer %1").arg(interface.layer);
+    makeRoomFor(text);
     painter.setPen(QPen(paper.layerColour(interface.layer).darker(130), 0.2));
     painter.setBrush(Qt::white);
     paintLayerSymbol(painter, interface.layer, {x + 0.8, y - 0.8}, 1.8);
     painter.setBrush(Qt::NoBrush);
-    entry(QStringLiteral("top of layer %1").arg(interface.layer));
+    entry(text);
   }
 }
 
@@ -395,7 +407,7 @@ void paintSection(SheetPaper& paper, const QRectF& area, const SheetFigures& fig
   }
   paper.label({frame.area.right(), area.bottom() - kLegendHeight + 7.2}, scaleWords(exaggeration),
               {6.5, false, paper.look().ink, Qt::AlignRight});
-  paintLegend(paper, {frame.area.left(), area.bottom() - kLegendHeight + 1.4}, figures);
+  paintLegend(paper, {frame.area.left(), area.bottom() - kLegendHeight + 1.4}, frame.area.width(), figures);
 }
 
 }  // namespace strikeplate
