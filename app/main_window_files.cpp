@@ -10,6 +10,7 @@
 #include "app/main_window.h"
 #include "app/times_dialog.h"
 #include "app/versions.h"
+#include "core/base/checksum.h"
 #include "core/report/csv_out.h"
 #include "core/report/geojson_out.h"
 #include "core/report/section_dxf.h"
@@ -43,6 +44,7 @@ void MainWindow::openTimes(const QString& path, Into into) {
     const Result<Survey> survey = dialog.survey();
     LoadedLine line;
     line.survey = *survey;
+    line.survey.info.tables.push_back({path.toStdString(), fileChecksum(path.toStdString()).value_or("")});
     line.filesRead = 1;
     takeLine(line, into, false);
   }
