@@ -20,7 +20,7 @@ SectionPlot::SectionPlot(QWidget* parent)
     : PositionView(parent),
       elevationTicker_(new QCPAxisTickerFixed),
       drawing_(new SectionDrawing(&plot())),
-      readout_(new PlumbReadout(&plot())) {
+      readout_(new PlumbReadout(&plot(), *drawing_)) {
   setFocusPolicy(Qt::StrongFocus);
   setMinimumHeight(120);
   setAccessibleName(tr("Section"));
@@ -51,7 +51,7 @@ void SectionPlot::showSelection(const Selection& selection) {
 }
 
 void SectionPlot::showPlumbLine(double x) {
-  readout_->show(scene_, look(), x, drawing_->namesBegin());
+  readout_->show(scene_, look(), x);
   PositionView::showPlumbLine(x);
 }
 
@@ -67,7 +67,7 @@ void SectionPlot::drawData() {
   elevations_ = elevationRange(scene_);
   setElevationAxis();
   drawing_->show(scene_, look());
-  readout_->show(scene_, look(), plumbLine(), drawing_->namesBegin());
+  readout_->show(scene_, look(), plumbLine());
 }
 
 // Above the ground there is room for the marks of geophones and shots and the names of boreholes, below the section

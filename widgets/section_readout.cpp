@@ -14,13 +14,13 @@ struct Line {
 
 }  // namespace
 
-PlumbReadout::PlumbReadout(QCustomPlot* plot) : QCPAbstractItem(plot) {}
+PlumbReadout::PlumbReadout(QCustomPlot* plot, const SectionDrawing& drawing)
+    : QCPAbstractItem(plot), drawing_(drawing) {}
 
-void PlumbReadout::show(const Scene& scene, const Look& look, double x, double rightEnd) {
+void PlumbReadout::show(const Scene& scene, const Look& look, double x) {
   scene_ = scene;
   look_ = look;
   x_ = x;
-  rightEnd_ = rightEnd;
 }
 
 void PlumbReadout::draw(QCPPainter* painter) {
@@ -53,7 +53,7 @@ void PlumbReadout::draw(QCPPainter* painter) {
     widest = std::max(widest, metrics.horizontalAdvance(line.words));
   }
   spreadApart(tops, height + 1.0, area);
-  const bool leftwards = x + widest + 20.0 > std::min(rightEnd_, area.right());
+  const bool leftwards = x + widest + 20.0 > std::min(drawing_.namesBegin(), area.right());
   for (std::size_t i = 0; i < lines.size(); ++i) {
     const double width = metrics.horizontalAdvance(lines[i].words) + 1.0;
     const QRectF place(leftwards ? x - 10.0 - width : x + 10.0, tops[i], width, height);

@@ -111,7 +111,7 @@ TEST_F(BatchInterface, TheSheetsPaperUnitColoursAndPagesAreAskedForByName) {
                                         "--records", "--tables", "--sheet", path("sheet.pdf"), "--xlsx",
                                         path("tables.xlsx"), "--svg", path("section.svg")});
   EXPECT_EQ(run.status, 0) << run.errors.toStdString();
-  EXPECT_TRUE(testing::readFile(path("sheet.pdf")).contains("/MediaBox [0 0 612 792]")) << "8.5 x 11 inches";
+  EXPECT_TRUE(testing::readFile(path("sheet.pdf")).contains("/MediaBox [0 0 612.000000 792.000000]")) << "8.5 x 11 inches";
   EXPECT_TRUE(testing::readFile(path("tables.xlsx")).startsWith("PK"));
   EXPECT_TRUE(testing::readFile(path("section.svg")).contains("distance along the line (ft)"));
   EXPECT_TRUE(testing::readFile(path("section-travel-times.svg")).contains("<svg"));
